@@ -1,0 +1,27 @@
+import type { Knex } from 'knex';
+import * as ground from './202612010900_ground.ts';
+import * as accounts from './202612010910_accounts.ts';
+import * as shops from './202612010920_shops.ts';
+import * as placesAndLamps from './202612010930_places_and_lamps.ts';
+import * as people from './202612010940_people.ts';
+import * as coatingsAndSheets from './202612010950_coatings_and_sheets.ts';
+import * as jobs from './202612011000_jobs.ts';
+import * as plans from './202612011010_plans.ts';
+import * as queueAndLetters from './202612011020_queue_and_letters.ts';
+import * as changes from './202612011030_changes.ts';
+
+type Step = { up(knex: Knex): Promise<void>; down(knex: Knex): Promise<void> };
+
+/** In order. Names carry no file ending, so that a database made from source and one made from a bundle agree. */
+export const migrations: Record<string, Step> = {
+  '202612010900_ground': ground,
+  '202612010910_accounts': accounts,
+  '202612010920_shops': shops,
+  '202612010930_places_and_lamps': placesAndLamps,
+  '202612010940_people': people,
+  '202612010950_coatings_and_sheets': coatingsAndSheets,
+  '202612011000_jobs': jobs,
+  '202612011010_plans': plans,
+  '202612011020_queue_and_letters': queueAndLetters,
+  '202612011030_changes': changes,
+};
