@@ -54,5 +54,7 @@ export async function up(knex: Knex): Promise<void> {
 }
 
 export async function down(knex: Knex): Promise<void> {
-  await knex.raw('drop table membership; alter table account_token drop constraint account_token_shop_id_fkey; drop table shop');
+  await knex.raw(
+    'drop table membership; alter table account_token drop constraint account_token_shop_id_fkey; drop table shop',
+  );
 }

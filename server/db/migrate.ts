@@ -13,7 +13,12 @@ export const migrationSource: Knex.MigrationSource<string> = {
 
 /** Brings the database of `ownerUrl` to the newest schema; does nothing when it is there already. */
 export async function migrateLatest(ownerUrl: string): Promise<void> {
-  const knex = knexFactory({ client: 'pg', connection: ownerUrl, pool: { min: 0, max: 1 }, migrations: { migrationSource } });
+  const knex = knexFactory({
+    client: 'pg',
+    connection: ownerUrl,
+    pool: { min: 0, max: 1 },
+    migrations: { migrationSource },
+  });
   try {
     await knex.raw(`set lock_timeout = '3s'`);
     await knex.migrate.latest();

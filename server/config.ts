@@ -1,0 +1,49 @@
+import * as z from 'zod';
+
+const flag = z.enum(['true', 'false']).transform((text) => text === 'true');
+const url = (...protocols: string[]) =>
+  z
+    .string()
+    .refine(
+      (text) => URL.canParse(text) && protocols.includes(new URL(text).protocol),
+      `must be a ${protocols.join(' or ')} address`,
+    );
+
+const environment = z.object({
+  NODE_ENV: z.enum(['production', 'development', 'test']).default('production'),
+  HOST: z.string().default('127.0.0.1'),
+  PORT: z.coerce.number().int().min(0).max(65_535).default(5180),
+  /** The address people reach the shop at; links in letters and the cookie's kind follow from it. */
+  PUBLIC_URL: url('http:', 'https:').optional(),
+  DATABASE_URL: url('postgres:', 'postgresql:'),
+  DATABASE_POOL: z.coerce.number().int().min(2).max(200).default(10),
+  SESSION_SECRET: z.string().min(32, 'must have 32 characters or more'),
+  /** A session ends after this long without a request. */
+  SESSION_IDLE_MINUTES: z.coerce.number().int().min(1).max(10_080).default(720),
+  /** And after this long whatever happens. */
+  SESSION_ABSOLUTE_HOURS: z.coerce.number().int().min(1).max(720).default(168),
+  SMTP_URL: url('smtp:', 'smtps:').optional(),
+  MAIL_FROM: z.string().default('Ovenbird <ovenbird@localhost>'),
+  /** Folder of the local mailbox; set only where the local SMTP server runs. */
+  DEV_MAILBOX_DIR: z.string().optional(),
+  WEB_ROOT: z.string().default('dist/web'),
+  LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent']).default('info'),
+  /** True behind exactly one proxy that sets X-Forwarded-For. */
+  BEHIND_PROXY: flag.default(false),
+});
+
+export type Config = Readonly<Omit<z.output<typeof environment>, 'PUBLIC_URL'> & { PUBLIC_URL: string }>;
+
+export class ConfigFault extends Error {}
+
+/** @throws {ConfigFault} naming every variable that is wrong, not only the first. */
+export function readConfig(env: Record<string, string | undefined>): Config {
+  const given = Object.fromEntries(Object.entries(env).filter(([, value]) => value !== ''));
+  const parsed = environment.safeParse(given);
+  if (!parsed.success) {
+    const faults = parsed.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`);
+    throw new ConfigFault(`Configuration: ${faults.join('; ')}`);
+  }
+  const publicUrl = parsed.data.PUBLIC_URL ?? `http://${parsed.data.HOST}:${parsed.data.PORT}`;
+  return { ...parsed.data, PUBLIC_URL: publicUrl.replace(/\/$/, '') };
+}

@@ -1,0 +1,11 @@
+import type { Knex } from 'knex';
+import type { Logger } from 'pino';
+import type { Config } from './config.ts';
+
+/** What services are handed: everything that reaches outside the process, and the clock. */
+export type Deps = {
+  config: Config;
+  db: Knex;
+  log: Logger;
+  now: () => Date;
+};
