@@ -7,10 +7,12 @@ import tseslint from 'typescript-eslint';
 import { borders } from './scripts/lint/borders.mjs';
 
 const code = { skipBlankLines: true, skipComments: true };
+/** @returns {Partial<import('eslint').Linter.RulesRecord>} */
 const longestFunction = (/** @type {number} */ max) => ({ 'max-lines-per-function': ['error', { max, ...code }] });
 
 const raw = 'CallExpression[callee.property.name=/^(raw|\\w+Raw)$/]';
 const boundOnly = 'Give values to SQL as bindings (?), never by building the string.';
+/** @type {Partial<import('eslint').Linter.RulesRecord>} */
 const noStringBuiltSql = {
   'no-restricted-syntax': [
     'error',

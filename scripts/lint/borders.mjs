@@ -11,14 +11,13 @@ const mailers = ['nodemailer', 'smtp-server', 'mailparser', '@react-email/compon
 const database = ['knex', 'pg'];
 const nodeOnly = ['node:', ...webServer, ...mailers, ...database, 'pino', 'pino-http', 'node-cron'];
 
+const pure = ['planner', 'chemistry', 'contracts'];
+const kernel = ['errors', 'deps', ...pure];
 /**
  * One row per layer; the first whose `at` matches a file's path names its layer. `mayUse` lists the layers it may import
  * beside itself. `only` lists the packages it may import, `never` those it may not ('node:' stands for all of Node).
  * @typedef {{ name: string, at: RegExp, mayUse: string[], only?: string[], never?: string[] }} Layer
- * @type {Layer[]}
  */
-const pure = ['planner', 'chemistry', 'contracts'];
-const kernel = ['errors', 'deps', ...pure];
 /** @type {Layer[]} */
 export const layers = [
   { name: 'contracts', at: /^contracts\//, mayUse: [], only: ['zod'] },
@@ -136,7 +135,7 @@ const rule = {
       .split(path.sep)
       .join('/')
       .replace(/^tests\/borders\/fixture-[^/]+\//, '');
-    /** @param {{ source?: import('estree').Node | null }} node */
+    /** @param {{ source?: import('estree').Node | null | undefined }} node */
     const check = ({ source }) => {
       if (source?.type !== 'Literal' || typeof source.value !== 'string') return;
       const message = crossing(from, source.value);
