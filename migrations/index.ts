@@ -9,6 +9,7 @@ import * as jobs from './202612011000_jobs.ts';
 import * as plans from './202612011010_plans.ts';
 import * as queueAndLetters from './202612011020_queue_and_letters.ts';
 import * as changes from './202612011030_changes.ts';
+import * as changeIds from './202612011040_change_ids.ts';
 
 type Step = { up(knex: Knex): Promise<void>; down(knex: Knex): Promise<void> };
 
@@ -24,4 +25,5 @@ export const migrations: Record<string, Step> = {
   '202612011010_plans': plans,
   '202612011020_queue_and_letters': queueAndLetters,
   '202612011030_changes': changes,
+  '202612011040_change_ids': changeIds,
 };
