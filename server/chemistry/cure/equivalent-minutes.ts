@@ -46,7 +46,8 @@ function stretch(from: TraceRow, to: TraceRow, perKelvin: number, atReference: n
   if (rise === 0) return minutes * Math.exp(atReference - perKelvin / start);
 
   const coldest = Math.max(COLDEST_KELVIN, Math.min(start, start + rise));
-  const pieces = Math.ceil((Math.abs(rise) * perKelvin) / (coldest * coldest));
+  // At least one: a rise of the last binary digit underflows to none.
+  const pieces = Math.max(1, Math.ceil((Math.abs(rise) * perKelvin) / (coldest * coldest)));
   let sum = 0;
   for (let piece = 0; piece < pieces; piece += 1) {
     for (const [at, weight] of NODES) {
