@@ -18,7 +18,7 @@ const canTie = process.platform === 'linux' && spawnSync('setpriv', ['--pdeathsi
 export function spawnTied(command, args, { deathSignal = 'TERM', ...options }) {
   const [file, ...rest] = canTie ? ['setpriv', '--pdeathsig', deathSignal, command, ...args] : [command, ...args];
   const child = spawn(/** @type {string} */ (file), rest, { ...options, detached: true });
-  const endWithParent = () => child.kill('SIGKILL');
+  const endWithParent = () => child.kill(`SIG${deathSignal}`);
   process.once('exit', endWithParent);
   child.once('exit', () => process.removeListener('exit', endWithParent));
   return child;
