@@ -1,0 +1,33 @@
+import { dayMs, instantOf } from './wall-time.ts';
+
+export const spans = ['day', 'three', 'week'] as const;
+/** How much of the calendar is shown at once. */
+export type SpanKind = (typeof spans)[number];
+
+const utc = (day: string) => Date.parse(`${day}T00:00:00Z`);
+export const addDays = (day: string, days: number): string =>
+  new Date(utc(day) + days * dayMs).toISOString().slice(0, 10);
+
+/** Monday of the week (ISO 8601) in which the day lies. */
+const mondayOf = (day: string) => addDays(day, -((new Date(utc(day)).getUTCDay() + 6) % 7));
+
+const length: Record<SpanKind, number> = { day: 1, three: 3, week: 7 };
+
+/** The calendar days shown for a date: the day, three from it on, or its week from Monday. */
+export function daysShown(date: string, kind: SpanKind): string[] {
+  const first = kind === 'week' ? mondayOf(date) : date;
+  return Array.from({ length: length[kind] }, (_, i) => addDays(first, i));
+}
+
+export const step = (date: string, kind: SpanKind, direction: 1 | -1): string =>
+  addDays(date, direction * length[kind]);
+
+/** From the first day's midnight to the midnight after the last, in the shop's zone: 23 to 25 hours a day. */
+export function rangeOf(days: readonly string[], zone: string): { from: string; to: string } {
+  const first = days[0] ?? '1970-01-01';
+  const last = days.at(-1) ?? first;
+  return {
+    from: new Date(instantOf(zone, first)).toISOString(),
+    to: new Date(instantOf(zone, addDays(last, 1))).toISOString(),
+  };
+}
