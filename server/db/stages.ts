@@ -117,9 +117,10 @@ export async function lockTapped(trx: Trx, shopId: string, stageId: string): Pro
        order by p.position desc limit 1
      ) previous on true
      where s.shop_id = :shopId
-       and (s.id = :stageId or b.load_id = (
-         select own.load_id from booking own
-         where own.shop_id = :shopId and own.stage_id = :stageId and own.state <> 'cancelled'))
+       and (s.id = :stageId or exists (
+         select from booking own
+         where own.shop_id = :shopId and own.stage_id = :stageId and own.state <> 'cancelled'
+           and own.load_id = b.load_id and own.place_id = b.place_id and own.during && b.during))
      order by s.id
      for update of s, j`,
     { shopId, stageId },
