@@ -6,8 +6,8 @@ const port = Number(process.env['PORT'] ?? 5180);
 const api = process.env['OVENBIRD_API'] ?? 'http://127.0.0.1:5181';
 
 // Tests that need no database and no document; they start at once and run in parallel.
-const pureTests = ['tests/{planner,chemistry,borders,contracts}/**/*.test.ts'];
-const browserTests = ['tests/browser/**/*.test.ts'];
+const pureTests = ['tests/{planner,chemistry,borders,contracts}/**/*.test.{ts,tsx}'];
+const browserTests = ['tests/browser/**/*.test.{ts,tsx}'];
 const withPostgres: TestProjectInlineConfiguration['test'] = {
   environment: 'node',
   pool: 'forks',
@@ -45,7 +45,7 @@ export default defineConfig({
         test: {
           name: 'server',
           ...withPostgres,
-          include: ['tests/**/*.test.ts'],
+          include: ['tests/**/*.test.{ts,tsx}'],
           exclude: [...pureTests, ...browserTests],
           testTimeout: 20_000,
           hookTimeout: 60_000,

@@ -84,11 +84,34 @@ async function endOf(child) {
  * @returns {Promise<Record<string, string>>} `env` with both addresses of the database
  */
 export async function withDatabase(house, env, dataDir) {
-  if (env['DATABASE_URL']) return { ...env, DATABASE_OWNER_URL: env['DATABASE_OWNER_URL'] || env['DATABASE_URL'] };
-  const cluster = await openCluster({ folder: path.join(dataDir, 'postgres'), durable: true, database: 'ovenbird' });
+  if (env['DATABASE_URL']) {
+    const given = { ...env, DATABASE_OWNER_URL: env['DATABASE_OWNER_URL'] || env['DATABASE_URL'] };
+    await askOnce(given.DATABASE_OWNER_URL);
+    return given;
+  }
+  const folder = path.join(dataDir, 'postgres');
+  const cluster = await openCluster({ folder, durable: true, database: 'ovenbird' });
+  if (cluster.folder !== folder) {
+    process.stdout.write(`The user postgres cannot reach ${folder}: the database is kept in ${cluster.folder}.\n`);
+  }
   house.keep({ name: 'The database server', ended: cluster.ended, stop: cluster.stop });
   const url = cluster.url('ovenbird');
   return { ...env, DATABASE_URL: url, DATABASE_OWNER_URL: url };
+}
+
+/** @param {string} url @throws {Fault} when the database does not answer */
+async function askOnce(url) {
+  const { default: pg } = await import('pg');
+  const client = new pg.Client({ connectionString: url, connectionTimeoutMillis: 10_000 });
+  try {
+    await client.connect();
+    await client.end();
+  } catch (error) {
+    const { host, pathname } = new URL(url);
+    throw new Fault(
+      `The database ${host}${pathname} of DATABASE_URL cannot be used: ${/** @type {Error} */ (error).message}`,
+    );
+  }
 }
 
 /**

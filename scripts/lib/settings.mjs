@@ -1,5 +1,5 @@
 import { randomBytes } from 'node:crypto';
-import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { accessSync, constants, existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { pathToFileURL } from 'node:url';
 import { Fault } from './fault.mjs';
@@ -20,8 +20,12 @@ export function openDataDir() {
   const dataDir = path.resolve(inRoot(), process.env['DATA_DIR'] || '.data');
   try {
     mkdirSync(dataDir, { recursive: true, mode: 0o711 });
+    accessSync(dataDir, constants.R_OK | constants.W_OK);
   } catch (error) {
-    throw new Fault(`The data folder ${dataDir} cannot be made: ${/** @type {Error} */ (error).message}`);
+    const why = /** @type {Error} */ (error).message;
+    throw new Fault(
+      `The data folder ${dataDir} cannot be used (${why}). Start as the user it belongs to, or set DATA_DIR.`,
+    );
   }
   return dataDir;
 }
