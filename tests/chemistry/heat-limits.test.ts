@@ -57,6 +57,12 @@ describe('the strictest limit, and whose it is', () => {
     expect(strictestLimit({ ...question, coatingCelsius: 70 }).celsius).toEqual({ limit: 70, setBy: 'coating' });
   });
 
+  it('is named after the vehicle, then the part, where limits are equal', () => {
+    const equal = { ...question, vehicle: battery({ celsius: 80, minutes: null }), coatingCelsius: 80 };
+    expect(strictestLimit(equal).celsius?.setBy).toBe('battery-recorded');
+    expect(strictestLimit({ ...equal, vehicle: engine }).celsius?.setBy).toBe('substrate-steel');
+  });
+
   it('is null where nothing limits', () => {
     const bare: HeatQuestion = { substrates: [], vehicle: engine, booth: null, coatingCelsius: null };
     expect(strictestLimit(bare)).toEqual({ celsius: null, minutes: null, needsSupport: false });
