@@ -3,7 +3,8 @@ import './lib/node-version.mjs';
 import { demoSignIns, isEmpty, rememberDemo } from './lib/demo.mjs';
 import { loadEnv } from './lib/env-file.mjs';
 import { sayFault } from './lib/fault.mjs';
-import { openHouse, untilHealthy, withDatabase, withMail } from './lib/house.mjs';
+import { untilHealthy, withDatabase, withMail } from './lib/house-parts.mjs';
+import { openHouse } from './lib/house.mjs';
 import { builtEntry, hasEntry, inRoot } from './lib/places.mjs';
 import { openDataDir, settle } from './lib/settings.mjs';
 
