@@ -149,15 +149,17 @@ export async function jobHistory(
   return rows;
 }
 
-/** What the job was asked to be when it was made: kept in the shop's history, written in the same transaction. */
-export async function askedFor(
-  trx: Trx,
-  shopId: string,
-  job: { id: string; createdAt: Date },
-): Promise<Record<string, unknown> | undefined> {
-  const line = await trx('change')
-    .where({ shop_id: shopId, at: job.createdAt, kind: 'job-created' })
-    .whereRaw('ids @> array[?]::uuid[]', [job.id])
-    .first<{ detail: Record<string, unknown> } | undefined>('detail');
-  return line?.detail;
+/**
+ * What the job was asked to be when it was made: kept in the shop's history, written in the same transaction and so at
+ * the same moment (to the microsecond, which a Date would lose).
+ */
+export async function askedFor(trx: Trx, shopId: string, jobId: string): Promise<Record<string, unknown> | undefined> {
+  const { rows } = await trx.raw<{ rows: { detail: Record<string, unknown> }[] }>(
+    `select c.detail
+     from job j
+     join change c on c.shop_id = j.shop_id and c.at = j.created_at and c.kind = 'job-created' and c.ids @> array[j.id]
+     where j.shop_id = ? and j.id = ?`,
+    [shopId, jobId],
+  );
+  return rows[0]?.detail;
 }

@@ -31,7 +31,7 @@ export function createJob(deps: Deps, actor: Actor, input: NewJobInput): Promise
 async function wasMade(trx: Trx, shopId: string, input: NewJobInput): Promise<boolean> {
   const job = await findJob(trx, shopId, input.id);
   if (!job) return false;
-  const asked = await askedFor(trx, shopId, job);
+  const asked = await askedFor(trx, shopId, job.id);
   if (!isDeepStrictEqual(asked, JSON.parse(JSON.stringify(input)))) throw new Refusal('key-reused');
   return true;
 }

@@ -1,0 +1,397 @@
+import { randomUUID } from 'node:crypto';
+import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
+import type { Job, JobRow, NewJob } from '#contracts/jobs.ts';
+import { inShop } from '#server/db/in-shop.ts';
+import { benchRoutes } from '#server/http/bench.ts';
+import { jobRoutes } from '#server/http/jobs.ts';
+import { testApi, type TestApi } from '../helpers/api-as.ts';
+import {
+  aBooking,
+  aDraft,
+  aJob,
+  aMember,
+  aSheet,
+  aSheetBody,
+  aShop,
+  aWay,
+  type TestShop,
+} from '../helpers/factories-jobs.ts';
+
+let api: TestApi;
+let shop: TestShop;
+let office: string;
+let base: string;
+
+const now = '2026-03-02T08:00:00.000Z';
+beforeAll(async () => {
+  api = await testApi((routes, deps) => {
+    jobRoutes(routes, deps);
+    benchRoutes(routes, deps);
+  }, now);
+});
+afterAll(() => api.close());
+beforeEach(async () => {
+  api.setClock(now);
+  shop = await aShop(api.deps.db);
+  office = await aMember(api.deps.db, shop, { role: 'office' });
+  base = `/api/shops/${shop.id}/jobs`;
+});
+
+const newJob = (sheetId: string, given: Partial<NewJob> = {}): NewJob => ({
+  id: randomUUID(),
+  sheetId,
+  options: [],
+  parts: [{ name: 'Door', substrate: 'steel', units: 2 }],
+  title: 'Door, left front',
+  vehicle: 'Grey estate',
+  colourNote: '',
+  notes: '',
+  releaseAt: '2026-03-02T07:00:00.000Z',
+  promiseAt: '2026-03-06T16:00:00.000Z',
+  weight: 1,
+  electric: false,
+  heatLimitCelsius: null,
+  heatLimitMinutes: null,
+  ...given,
+});
+const optional = aSheetBody({
+  options: [{ key: 'polish', label: 'Polish', on: true }],
+  stages: [
+    { key: 'prep', kind: 'prep', title: 'Prepare', option: null, coatingId: null, ways: [aWay()] },
+    { key: 'polish', kind: 'polish', title: 'Polish', option: 'polish', coatingId: null, ways: [aWay()] },
+  ],
+});
+const create = async (job: NewJob, status = 200): Promise<Job> =>
+  (await api.as(office).post(base).send(job).expect(status)).body;
+const list = async (query = ''): Promise<{ rows: JobRow[]; total: number }> =>
+  (await api.as(office).get(`${base}${query}`).expect(200)).body;
+const titles = async (query: string): Promise<string[]> => (await list(query)).rows.map((row) => row.title);
+const rows = (table: string, where: object = {}) =>
+  inShop(api.deps.db, { shopId: shop.id, accountId: null }, (trx) => trx(table).where({ shop_id: shop.id, ...where }));
+
+describe('making a job', () => {
+  test('takes the stages the options leave, copies their ways and numbers on', async () => {
+    const sheet = await aSheet(api.deps.db, shop, optional);
+    const plain = await create(newJob(sheet));
+    expect(plain).toMatchObject({ number: 1, version: 1, state: 'waiting', endsAt: null, late: false });
+    expect(plain.stages.map((stage) => stage.title)).toEqual(['Prepare']);
+    expect(plain.stages[0]?.ways).toEqual([aWay()]);
+    expect(plain.sheet).toMatchObject({ id: sheet, name: 'Sheet', version: 1 });
+    expect(plain.history).toMatchObject([{ kind: 'job-created', by: 'The office', at: expect.any(String) }]);
+    const polished = await create(newJob(sheet, { options: ['polish'] }));
+    expect(polished.number).toBe(2);
+    expect(polished.stages.map((stage) => stage.title)).toEqual(['Prepare', 'Polish']);
+  });
+
+  test('keeps its ways when the sheet changes afterwards', async () => {
+    const sheet = await aSheet(api.deps.db, shop);
+    const { id } = await create(newJob(sheet));
+    await inShop(api.deps.db, { shopId: shop.id, accountId: null }, async (trx) => {
+      await trx('process_sheet_version').insert({
+        shop_id: shop.id,
+        id: randomUUID(),
+        process_sheet_id: sheet,
+        version: 2,
+        body: JSON.stringify(aSheetBody({ stages: optional.stages.slice(0, 1) })),
+      });
+      await trx('process_sheet').where({ shop_id: shop.id, id: sheet }).update({ version: 2 });
+    });
+    const read: Job = (await api.as(office).get(`${base}/${id}`).expect(200)).body;
+    expect(read.stages).toHaveLength(2);
+    expect(read.sheet?.version).toBe(1);
+    expect((await create(newJob(sheet))).stages).toHaveLength(1);
+  });
+
+  test('sent twice, also at once, makes one', async () => {
+    const job = newJob(await aSheet(api.deps.db, shop));
+    const answers = await Promise.all([create(job), create(job), create(job)]);
+    expect(new Set(answers.map((answer) => answer.number))).toEqual(new Set([1]));
+    expect((await list()).total).toBe(1);
+    expect(await rows('change', { kind: 'job-created' })).toHaveLength(1);
+  });
+
+  test('the id of another job is refused, even after that has been changed', async () => {
+    const job = newJob(await aSheet(api.deps.db, shop));
+    await create(job);
+    const answer = await api
+      .as(office)
+      .post(base)
+      .send({ ...job, title: 'Another' })
+      .expect(409);
+    expect(answer.body.error.code).toBe('key-reused');
+    await api.as(office).patch(`${base}/${job.id}`).send({ version: 1, title: 'Changed since' }).expect(200);
+    expect((await create(job)).title).toBe('Changed since');
+  });
+
+  test('says everything that is wrong at once and writes nothing', async () => {
+    const job = newJob(randomUUID(), { releaseAt: '2026-03-09T07:00:00Z' });
+    const unknown = await api.as(office).post(base).send(job).expect(400);
+    expect(unknown.body.error.fields.map((field: { path: string }) => field.path)).toEqual([
+      'body.sheetId',
+      'body.promiseAt',
+    ]);
+    const sheet = await aSheet(api.deps.db, shop, optional);
+    const option = await api
+      .as(office)
+      .post(base)
+      .send(newJob(sheet, { options: ['polish', 'gold'] }))
+      .expect(400);
+    expect(option.body.error.fields).toEqual([
+      { path: 'body.options.1', message: 'not an option of this process sheet' },
+    ]);
+    expect((await list('?state=all')).total).toBe(0);
+  });
+
+  test('is not for painters, and not in another shop', async () => {
+    const sheet = await aSheet(api.deps.db, shop);
+    const painter = await aMember(api.deps.db, shop, { role: 'painter' });
+    await api.as(painter).post(base).send(newJob(sheet)).expect(403);
+    const other = await aShop(api.deps.db);
+    const otherOffice = await aMember(api.deps.db, other, { role: 'office' });
+    await api.as(otherOffice).post(base).send(newJob(sheet)).expect(404);
+    const theirs = await api.as(otherOffice).post(`/api/shops/${other.id}/jobs`).send(newJob(sheet)).expect(400);
+    expect(theirs.body.error.fields[0].path).toBe('body.sheetId');
+    const { id } = await create(newJob(sheet));
+    await api.as(otherOffice).get(`/api/shops/${other.id}/jobs/${id}`).expect(404);
+  });
+});
+
+describe('the list', () => {
+  test('searches number, title and vehicle, and takes signs literally', async () => {
+    await aJob(api.deps.db, shop, { title: 'Bumper 100% new', vehicle: 'Blue van' });
+    await aJob(api.deps.db, shop, { title: 'Tailgate', vehicle: 'Grey estate' });
+    expect(await titles('?q=blue')).toEqual(['Bumper 100% new']);
+    expect(await titles('?q=TAIL')).toEqual(['Tailgate']);
+    expect(await titles('?q=2')).toEqual(['Tailgate']);
+    expect(await titles('?q=%23' + '1')).toEqual(['Bumper 100% new']);
+    expect(await titles('?q=100%25')).toEqual(['Bumper 100% new']);
+    expect(await titles('?q=%25')).toEqual(['Bumper 100% new']);
+    expect(await titles('?q=_')).toEqual([]);
+    expect(await titles("?q='")).toEqual([]);
+  });
+
+  test('derives the state from stages and bookings, and tells what comes next', async () => {
+    const { db } = api.deps;
+    const place = shop.prep;
+    const from = new Date('2026-03-03T08:00:00Z');
+    await aJob(db, shop, { title: 'waits' });
+    const half = await aJob(db, shop, { title: 'half booked' });
+    await aBooking(db, shop, { stage: half.stages[0] ?? '', place, from });
+    const planned = await aJob(db, shop, { title: 'planned', promiseAt: new Date('2026-03-03T10:30:00Z') });
+    await aBooking(db, shop, {
+      stage: planned.stages[0] ?? '',
+      place: shop.booth,
+      from: new Date('2026-03-03T09:00:00Z'),
+    });
+    await aBooking(db, shop, { stage: planned.stages[1] ?? '', place, from: new Date('2026-03-03T10:00:00Z') });
+    const page = await list('?sort=number');
+    expect(page.rows.map((row) => [row.title, row.state])).toEqual([
+      ['waits', 'waiting'],
+      ['half booked', 'waiting'],
+      ['planned', 'planned'],
+    ]);
+    expect(page.rows[1]).toMatchObject({ endsAt: null, next: { title: 'Stage 1', placeName: 'Prep' } });
+    // booked until 11:00, promised for 10:30
+    expect(page.rows[2]).toMatchObject({
+      endsAt: '2026-03-03T11:00:00.000Z',
+      late: true,
+      stagesDone: 0,
+      stagesTotal: 2,
+      next: { title: 'Stage 1', startsAt: '2026-03-03T09:00:00.000Z', placeName: 'Booth' },
+    });
+    const late = await list('?state=late');
+    expect(late.rows.map((row) => row.title)).toEqual(['planned']);
+    expect(await titles('?state=waiting&sort=number')).toEqual(['waits', 'half booked']);
+    expect(await titles('?state=planned')).toEqual(['planned']);
+    expect(await titles('?state=running')).toEqual([]);
+  });
+
+  test('a job nobody planned is late once its promise has passed', async () => {
+    await aJob(api.deps.db, shop, { promiseAt: new Date('2026-03-02T09:00:00Z') });
+    expect((await list()).rows[0]?.late).toBe(false);
+    api.setClock('2026-03-02T09:00:01Z');
+    expect((await list()).rows[0]?.late).toBe(true);
+  });
+
+  test('sorts, and pages without losing or doubling a row', async () => {
+    for (const [title, promise] of [
+      ['beta', '2026-03-05T10:00:00Z'],
+      ['Alpha', null],
+      ['gamma', '2026-03-04T10:00:00Z'],
+      ['delta', '2026-03-05T10:00:00Z'],
+    ] as const)
+      await aJob(api.deps.db, shop, { title, promiseAt: promise === null ? null : new Date(promise) });
+    expect(await titles('?sort=title')).toEqual(['Alpha', 'beta', 'delta', 'gamma']);
+    expect(await titles('?sort=promise')).toEqual(['gamma', 'beta', 'delta', 'Alpha']);
+    expect(await titles('?sort=-promise')).toEqual(['beta', 'delta', 'gamma', 'Alpha']);
+    expect(await titles('?sort=-number')).toEqual(['delta', 'gamma', 'Alpha', 'beta']);
+    expect(await titles('?sort=promise&size=3&page=1')).toEqual(['gamma', 'beta', 'delta']);
+    expect(await list('?sort=promise&size=3&page=2')).toMatchObject({ rows: [{ title: 'Alpha' }], total: 4 });
+    expect(await list('?size=3&page=9')).toEqual({ rows: [], total: 4, page: 9, size: 3 });
+  });
+
+  test('shows nothing of another shop', async () => {
+    await aJob(api.deps.db, await aShop(api.deps.db), { title: 'Theirs' });
+    expect(await list('?state=all')).toMatchObject({ rows: [], total: 0 });
+    await api.as(office).get(`${base}?state=sideways`).expect(400);
+  });
+});
+
+describe('the job page', () => {
+  test('shows the chain with windows, bookings and history', async () => {
+    const spray = aWay({
+      id: 'spray',
+      label: 'Sprayed',
+      gap: { min: 15, max: 240, settle: 15 },
+      phases: [
+        { kind: 'spray', minutes: 20, attendance: 'hands' },
+        { kind: 'flash', minutes: 10, attendance: 'none' },
+      ],
+    });
+    const job = await aJob(api.deps.db, shop, { stages: [{}, { title: 'Clear', ways: [spray] }] });
+    const from = new Date('2026-03-03T08:00:00Z');
+    const [first, second] = job.stages as [string, string];
+    await aBooking(api.deps.db, shop, { stage: first, place: shop.prep, person: shop.helper, from });
+    await aBooking(api.deps.db, shop, {
+      stage: second,
+      place: shop.booth,
+      person: shop.painter,
+      lamps: [shop.lamp],
+      way: 'spray',
+      from: new Date('2026-03-03T09:30:00Z'),
+      phases: [20, 10],
+    });
+    const read: Job = (await api.as(office).get(`${base}/${job.id}`).expect(200)).body;
+    expect(read.state).toBe('planned');
+    expect(read.endsAt).toBe('2026-03-03T10:00:00.000Z');
+    expect(read.stages[0]?.window).toEqual({ earliest: null, latest: null });
+    // the first ends 09:00; 15 to 240 minutes later
+    expect(read.stages[1]?.window).toEqual({
+      earliest: '2026-03-03T09:15:00.000Z',
+      latest: '2026-03-03T13:00:00.000Z',
+    });
+    expect(read.stages[1]?.booking).toMatchObject({
+      wayLabel: 'Sprayed',
+      placeName: 'Booth',
+      personName: 'Painter',
+      lampNames: ['Lamp'],
+      state: 'planned',
+      phases: [
+        { kind: 'spray', from: '2026-03-03T09:30:00.000Z', to: '2026-03-03T09:50:00.000Z' },
+        { kind: 'flash', from: '2026-03-03T09:50:00.000Z', to: '2026-03-03T10:00:00.000Z' },
+      ],
+    });
+  });
+});
+
+describe('changing a job', () => {
+  test('writes what differs, once, and keeps what it was', async () => {
+    const { id } = await create(newJob(await aSheet(api.deps.db, shop)));
+    const change = { version: 1, title: 'Door, right front', promiseAt: null, vehicle: 'Grey estate' };
+    const changed: Job = (await api.as(office).patch(`${base}/${id}`).send(change).expect(200)).body;
+    expect(changed).toMatchObject({ version: 2, title: 'Door, right front', promiseAt: null });
+    expect(changed.history[0]).toMatchObject({
+      kind: 'job-changed',
+      detail: {
+        before: { title: 'Door, left front', promiseAt: '2026-03-06T16:00:00.000Z' },
+        after: { title: 'Door, right front', promiseAt: null },
+      },
+    });
+    // The same request again finds nothing to do, although its version is old.
+    const again: Job = (await api.as(office).patch(`${base}/${id}`).send(change).expect(200)).body;
+    expect(again.version).toBe(2);
+    expect(again.history).toHaveLength(2);
+  });
+
+  test('with an old version is refused, with the job as it is now', async () => {
+    const { id } = await create(newJob(await aSheet(api.deps.db, shop)));
+    await api.as(office).patch(`${base}/${id}`).send({ version: 1, weight: 3 }).expect(200);
+    const stale = await api.as(office).patch(`${base}/${id}`).send({ version: 1, title: 'Mine' }).expect(409);
+    expect(stale.body.error).toMatchObject({ code: 'stale', current: { id, version: 2, weight: 3 } });
+  });
+
+  test('of two at once one wins', async () => {
+    const { id } = await create(newJob(await aSheet(api.deps.db, shop)));
+    const both = await Promise.all(
+      ['A', 'B'].map((title) => api.as(office).patch(`${base}/${id}`).send({ version: 1, title })),
+    );
+    expect(both.map((answer) => answer.status).sort()).toEqual([200, 409]);
+  });
+
+  test('a promise before the arrival, unknown fields and unknown jobs are refused', async () => {
+    const { id } = await create(newJob(await aSheet(api.deps.db, shop)));
+    const early = await api
+      .as(office)
+      .patch(`${base}/${id}`)
+      .send({ version: 1, promiseAt: '2026-03-01T00:00:00Z' })
+      .expect(400);
+    expect(early.body.error.fields[0].path).toBe('body.promiseAt');
+    await api.as(office).patch(`${base}/${id}`).send({ version: 1, state: 'done' }).expect(400);
+    await api.as(office).patch(`${base}/${randomUUID()}`).send({ version: 1, title: 'x' }).expect(404);
+  });
+});
+
+describe('withdrawing a job', () => {
+  const booked = async () => {
+    const job = await aJob(api.deps.db, shop);
+    for (const [i, stage] of job.stages.entries())
+      await aBooking(api.deps.db, shop, {
+        stage,
+        place: shop.prep,
+        person: shop.painter,
+        from: new Date(`2026-03-03T${i + 10}:00:00Z`),
+      });
+    return job;
+  };
+
+  test('cancels its bookings, frees what they held, and takes it out of the draft', async () => {
+    const job = await booked();
+    const draft = await aDraft(api.deps.db, shop);
+    await aBooking(api.deps.db, shop, {
+      stage: job.stages[0] ?? '',
+      place: shop.prep,
+      from: new Date('2026-03-04T10:00:00Z'),
+      draft,
+    });
+    const gone: Job = (await api.as(office).post(`${base}/${job.id}/withdraw`).send({ version: 1 }).expect(200)).body;
+    expect(gone).toMatchObject({ state: 'withdrawn', version: 2, endsAt: null, late: false });
+    expect(gone.stages.every((stage) => stage.booking === null)).toBe(true);
+    expect(gone.history[0]).toMatchObject({ kind: 'job-withdrawn', detail: { bookings: 2 } });
+    expect(await rows('occupancy')).toEqual([]);
+    expect((await rows('booking')).map((row) => row.state)).toEqual(['cancelled', 'cancelled']);
+    expect(await rows('draft_item')).toEqual([]);
+    expect(await rows('draft')).toMatchObject([{ version: 2 }]);
+    expect((await rows('change')).map((row) => row.kind).sort()).toEqual(['draft-changed', 'job-withdrawn']);
+    expect(await titles('')).toEqual([]);
+    expect(await titles('?state=withdrawn')).toEqual(['Job 1']);
+    // twice is once
+    await api.as(office).post(`${base}/${job.id}/withdraw`).send({ version: 1 }).expect(200);
+    expect(await rows('change', { kind: 'job-withdrawn' })).toHaveLength(1);
+  });
+
+  test('is refused while somebody works on it, and with an old version', async () => {
+    const job = await booked();
+    const lead = await aMember(api.deps.db, shop, { role: 'lead' });
+    await api.as(office).post(`${base}/${job.id}/withdraw`).send({ version: 7 }).expect(409);
+    await api.as(lead).post(`/api/shops/${shop.id}/stages/${job.stages[0]}/start`).send({ version: 1 }).expect(200);
+    const refused = await api.as(office).post(`${base}/${job.id}/withdraw`).send({ version: 1 }).expect(422);
+    expect(refused.body.error.reasons).toMatchObject([{ code: 'stage-running', stageId: job.stages[0] }]);
+    expect(await rows('occupancy')).toHaveLength(2);
+    await api.as(office).patch(`${base}/${job.id}`).send({ version: 1, notes: 'still here' }).expect(200);
+  });
+
+  test('keeps what was done', async () => {
+    const job = await booked();
+    const lead = await aMember(api.deps.db, shop, { role: 'lead' });
+    const stage = `/api/shops/${shop.id}/stages/${job.stages[0]}`;
+    await api.as(lead).post(`${stage}/start`).send({ version: 1 }).expect(200);
+    await api.as(lead).post(`${stage}/finish`).send({ version: 2 }).expect(200);
+    const gone: Job = (await api.as(office).post(`${base}/${job.id}/withdraw`).send({ version: 1 }).expect(200)).body;
+    expect(gone.stages.map((s) => [s.state, s.booking?.state])).toEqual([
+      ['done', 'done'],
+      ['waiting', undefined],
+    ]);
+    const late = await api.as(office).patch(`${base}/${job.id}`).send({ version: 2, title: 'x' }).expect(422);
+    expect(late.body.error.reasons[0].code).toBe('job-withdrawn');
+  });
+});
