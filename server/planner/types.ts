@@ -112,14 +112,75 @@ export type Plan = {
 
 export type CostParts = Record<keyof Objective, number>;
 
+/** What can be wrong with a plan; the rule's number is in `Violation.rule`. `ids` and `minutes` are listed beside each code. */
+export type ViolationCode =
+  // 1 Order
+  | 'unknown-stage'
+  | 'assigned-twice'
+  | 'half-unplaced'
+  | 'unplaced-without-reason'
+  | 'stage-missing'
+  | 'unknown-mode' // ids: mode
+  | 'phase-count' // minutes: given, needed
+  | 'not-whole-minutes'
+  | 'ends-not-of-phases'
+  | 'before-now' // minutes: start, now
+  | 'after-horizon' // minutes: end, horizon
+  | 'before-release' // minutes: start, release
+  | 'unknown-place' // ids: place
+  | 'place-not-allowed' // ids: place
+  | 'previous-missing'
+  | 'phase-wait' // minutes: phase, idle, most
+  | 'phase-length' // minutes: phase, given, needed
+  // 2 Windows
+  | 'too-soon' // ids: previous stage; minutes: gap, least
+  | 'too-late' // ids: previous stage; minutes: gap, most
+  // 3 Holding a place
+  | 'moved-while-staying' // ids: place
+  // 4 One load at a time
+  | 'does-not-fit' // ids: place; minutes: units wanted, units there
+  | 'place-taken' // ids: place, other stage; minutes: start, other's end of hold
+  | 'rack-full' // ids: place; minutes: from
+  // 5 Loads
+  | 'load-not-shared'
+  | 'load-differs'
+  | 'load-kinds-differ'
+  | 'load-too-big' // ids: place; minutes: units wanted, units there
+  | 'load-parts' // the next stages do not all stay as one load
+  | 'load-is-fixed'
+  // 6 Clean-up
+  | 'clean-up' // ids: place, other stage; minutes: there, needed
+  // 7 Closed
+  | 'place-closed' // ids: place; minutes: closed from, to
+  | 'lamp-closed' // ids: lamp; minutes: closed from, to
+  // 8 Hands
+  | 'person-not-allowed' // ids: person
+  | 'person-not-needed' // ids: person
+  | 'off-shift' // ids: person; minutes: phase, from, to
+  | 'person-busy' // ids: person, other stage; minutes: from, other's from, other's to
+  // 9 On the premises
+  | 'nobody-there' // minutes: phase, from, to
+  // 10 Lamps
+  | 'wrong-lamps' // ids: lamps given; minutes: lamps wanted
+  | 'no-lamp-in-mode' // minutes: phase
+  | 'unknown-lamp' // ids: lamp
+  | 'lamp-busy' // ids: lamp, other stage; minutes: from, other's to, minutes to move
+  // 11 Circuits
+  | 'circuit-full' // ids: circuit; minutes: from
+  // 12 Spray and lamps
+  | 'spray-meets-lamp' // ids: zone, spraying stage; minutes: lamp from, to, spray from, to
+  // 13 Fixed
+  | 'fixed-missing'
+  | 'fixed-changed';
+
 /**
  * One broken rule of a plan: the rule's number (1 to 13), a code that a catalogue turns into a sentence, the stage it
- * is about, the ids of what it clashes with, and the minutes that explain it. No sentences here: the reader's language
- * and clock belong to whoever shows it.
+ * is about (the job where a whole job is meant), the ids of what it clashes with, and the minutes that explain it.
+ * No sentences here: the reader's language and clock belong to whoever shows it.
  */
 export type Violation = {
   rule: number;
-  code: string;
+  code: ViolationCode;
   stage: string;
   ids: string[];
   minutes: Minutes[];

@@ -1,0 +1,156 @@
+import { NEVER } from './calendar.ts';
+import { floorOf, placeChain } from './chain.ts';
+import { makePlacer, type Placer, takeOut } from './placer.ts';
+import { type Block, BOOTH, type Shop, type Variant } from './shop.ts';
+import { copyStage, enter, type Placing } from './state.ts';
+
+/** A placer with what a whole schedule needs: which jobs are out, which variant each block takes, and the cost so far. */
+export type Decoder = Placer & {
+  /** Variant of each block; -1: try all and take the one that ends first. */
+  choice: Int32Array;
+  /** Per job: 1 where it found no room. */
+  out: Uint8Array;
+  /** Per job the stage that found no room. */
+  outStage: Int32Array;
+};
+
+export function makeDecoder(shop: Shop): Decoder {
+  return {
+    ...makePlacer(shop),
+    choice: new Int32Array(shop.blocks.length).fill(-1),
+    out: new Uint8Array(shop.jobs.length),
+    outStage: new Int32Array(shop.jobs.length).fill(-1),
+  };
+}
+
+/** Lists a job as unplaced: all that is not fixed of it leaves the schedule. */
+function leaveOut(d: Decoder, job: number, stage: number): void {
+  const { first, last } = d.shop.jobs[job]!;
+  for (let s = first; s <= last; s++) if (d.shop.fixedAt[s]! < 0 && d.state.at.way[s]) takeOut(d, s);
+  d.out[job] = 1;
+  d.outStage[job] = stage;
+}
+
+/** Places the next block of a job, or leaves the job out. Blocks of one job come in their order. */
+export function decodeBlock(d: Decoder, id: number): void {
+  const block = d.shop.blocks[id]!;
+  if (d.out[block.job]) return;
+  const floor = lowest(d, block);
+  const chosen = d.choice[id]!;
+  const variant = chosen >= 0 ? block.variants[chosen] : undefined;
+  if (variant && block.variants.length > 1) {
+    // Two tries: the variant as chosen, and any, if that one does not fit here.
+    keepBefore(d, block, floor);
+    if (placeChain(d, block, variant, NEVER) < 0) return;
+    putBack(d, block, floor);
+  }
+  const failed = placeBest(d, block, floor);
+  if (failed >= 0) leaveOut(d, block.job, failed);
+}
+
+/** Minutes of booth that the placed stages of a block take. */
+function boothMinutes(d: Decoder, block: Block): number {
+  const { at } = d.state;
+  let sum = 0;
+  for (let s = block.first; s <= block.last; s++)
+    if (d.shop.placeKind[at.place[s]!] === BOOTH) sum += at.holdTo[s]! - at.holdFrom[s]!;
+  return sum;
+}
+
+/** Tries each variant; the earliest end wins, of equals the one that takes less booth. Returns the stage without room, or -1. */
+function placeBest(d: Decoder, block: Block, floor: number): number {
+  if (block.variants.length === 0) return firstImpossible(d.shop, block);
+  const only = block.variants.length === 1;
+  let best = -1;
+  let bestEnd = NEVER;
+  let bestBooth = 0;
+  let failed = block.first;
+  keepBefore(d, block, floor);
+  for (let v = 0; v < block.variants.length; v++) {
+    const stuck = placeChain(d, block, block.variants[v]!, bestEnd < NEVER ? bestEnd + 1 : NEVER);
+    if (only && stuck < 0) {
+      d.choice[block.id] = 0;
+      return -1;
+    }
+    if (stuck >= 0) failed = Math.max(failed, stuck);
+    else {
+      const end = d.state.at.end[block.last]!;
+      const booth = boothMinutes(d, block);
+      if (end < bestEnd || booth < bestBooth) {
+        best = v;
+        bestEnd = end;
+        bestBooth = booth;
+        keepThis(d, block, floor);
+      }
+    }
+    putBack(d, block, floor);
+  }
+  if (best < 0) return failed;
+  d.choice[block.id] = best;
+  takeKept(d, block, floor, block.variants[best]!);
+  return -1;
+}
+
+/** The first stage of a block that no way can do at all. */
+function firstImpossible(shop: Shop, block: Block): number {
+  for (let s = block.first; s <= block.last; s++) {
+    const some = shop.ways[s]!.some(
+      (w) => (w.stay || w.places.length > 0) && w.lamps.length >= w.lampCount && (!w.hands || w.people.length > 0),
+    );
+    if (!some) return s;
+  }
+  return block.first;
+}
+
+/** The first stage that any variant of the block may push. */
+const lowest = (d: Decoder, block: Block): number =>
+  floorOf(
+    d,
+    block,
+    block.variants.reduce((most, v) => Math.min(most, v.ways[0]!.gapMax), NEVER),
+  );
+
+/** Remembers where the stages stand that a block may push later. */
+function keepBefore(d: Decoder, block: Block, floor: number): void {
+  for (let s = floor; s < block.first; s++) copyStage(d.shop, d.state.at, d.before, s);
+}
+
+/** Takes the block out and puts earlier stages back where they stood. */
+function putBack(d: Decoder, block: Block, floor: number): void {
+  const { at } = d.state;
+  for (let s = block.first; s <= block.last; s++) if (at.way[s]) takeOut(d, s);
+  for (let s = floor; s < block.first; s++) restore(d, s, d.before);
+}
+
+function keepThis(d: Decoder, block: Block, floor: number): void {
+  for (let s = floor; s <= block.last; s++) copyStage(d.shop, d.state.at, d.kept, s);
+}
+
+function takeKept(d: Decoder, block: Block, floor: number, variant: Variant): void {
+  for (let s = floor; s < block.first; s++) restore(d, s, d.kept);
+  for (let s = block.first; s <= block.last; s++) {
+    d.wayOf[s] = variant.ways[s - block.first]!;
+    d.pinOf[s] = variant.pins[s - block.first]!;
+    restore(d, s, d.kept);
+  }
+}
+
+/** Puts a stage where another record says. */
+export function restore(d: Placer, s: number, from: Placing): void {
+  const { at } = d.state;
+  const way = from.way[s]!;
+  if (
+    way &&
+    at.way[s] === way &&
+    at.start[s] === from.start[s] &&
+    at.end[s] === from.end[s] &&
+    at.place[s] === from.place[s] &&
+    at.person[s] === from.person[s] &&
+    way.lampCount === 0
+  )
+    return;
+  takeOut(d, s);
+  if (!way) return;
+  copyStage(d.shop, from, at, s);
+  enter(d.state, s, way);
+}

@@ -1,0 +1,93 @@
+import type { Mode, Phase } from '../types.ts';
+import { NEVER } from './calendar.ts';
+import { HANDS, NONE, ONSITE, PAUSED, type Way } from './shop.ts';
+
+/** Where a mode's ids stand in the compiled shop. */
+export type Indexes = {
+  place: Map<string, number>;
+  person: Map<string, number>;
+  lamp: Map<string, number>;
+  family: Map<string, number>;
+  placeUnits: Float64Array;
+};
+
+const needOf = (phase: Phase, split: boolean): number => {
+  if (phase.minutes === 0 || phase.attendance === 'none') return NONE;
+  if (phase.attendance === 'onsite') return ONSITE;
+  return split ? PAUSED : HANDS;
+};
+
+type Segments = { minutes: number[]; need: number[]; wait: number[]; seg: number[]; offset: number[] };
+
+/** Merges phases that follow back to back and ask the same of people. A paused phase stays alone: its length varies. */
+function mergePhases(phases: readonly Phase[], split: boolean, apart: boolean): Segments {
+  const s: Segments = { minutes: [], need: [], wait: [], seg: [], offset: [] };
+  for (const phase of phases) {
+    const need = needOf(phase, split);
+    const last = s.need.length - 1;
+    const joins = !apart && last >= 0 && s.wait[last] === 0 && s.need[last] === need && need !== PAUSED;
+    if (!joins) {
+      s.minutes.push(0);
+      s.need.push(need);
+      s.wait.push(0);
+    }
+    const at = s.need.length - 1;
+    s.seg.push(at);
+    s.offset.push(s.minutes[at]!);
+    s.minutes[at]! += phase.minutes;
+    s.wait[at] = phase.wait ?? 0;
+  }
+  return s;
+}
+
+const where = (list: readonly string[], index: Map<string, number>): number[] =>
+  list.flatMap((id) => index.get(id) ?? []);
+
+/** Compiles one mode. Places too small for it are left out. `apart`: no phases merged, as a fixed assignment needs. */
+export function compileWay(id: number, mode: Mode, at: Indexes, apart = false): Way {
+  const s = mergePhases(mode.phases, mode.split, apart);
+  const indices = (wanted: (p: Phase) => boolean): number[] => mode.phases.flatMap((p, k) => (wanted(p) ? [k] : []));
+  const sprays = indices((p) => p.kind === 'spray');
+  return {
+    id,
+    stay: mode.stay,
+    places: Int32Array.from(where(mode.places, at.place).filter((p) => mode.units <= at.placeUnits[p]!)),
+    people: Int32Array.from(where(mode.people, at.person)),
+    lamps: Int32Array.from(where(mode.lamps, at.lamp)),
+    lampCount: mode.lampCount,
+    units: mode.units,
+    family: mode.family === null ? -1 : (at.family.get(mode.family) ?? -1),
+    gapMin: mode.gap.min,
+    gapMax: mode.gap.max ?? NEVER,
+    settle: mode.gap.settle,
+    hands: mode.phases.some((p) => p.attendance === 'hands'),
+    segments: s.need.length,
+    segMinutes: Int32Array.from(s.minutes),
+    segNeed: Int32Array.from(s.need),
+    segWait: Int32Array.from(s.wait),
+    phaseSeg: Int32Array.from(s.seg),
+    phaseOffset: Int32Array.from(s.offset),
+    phaseMinutes: Int32Array.from(mode.phases, (p) => p.minutes),
+    lit: Int32Array.from(mode.lampCount > 0 ? indices((p) => p.lamp === true) : []),
+    firstSpray: sprays[0] ?? -1,
+    lastSpray: sprays[sprays.length - 1] ?? -1,
+    minutes: mode.phases.reduce((sum, p) => sum + p.minutes, 0),
+    rigid: s.need.every((need, k) => need !== PAUSED && (s.wait[k] === 0 || k === s.need.length - 1)),
+    apart,
+  };
+}
+
+/** Puts the least flexible first, so that a free choice leaves the sought-after ones to others. */
+export function sortByDemand(ways: readonly Way[], placeCount: number, personCount: number, kw: Float64Array): void {
+  const places = new Float64Array(placeCount);
+  const people = new Float64Array(personCount);
+  for (const way of ways) {
+    for (const p of way.places) places[p]! += way.minutes / way.places.length;
+    if (way.hands) for (const q of way.people) people[q]! += way.minutes / way.people.length;
+  }
+  for (const way of ways) {
+    way.places.sort((x, y) => places[x]! - places[y]! || x - y);
+    way.people.sort((x, y) => people[x]! - people[y]! || x - y);
+    way.lamps.sort((x, y) => kw[x]! - kw[y]! || x - y);
+  }
+}
