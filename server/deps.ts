@@ -8,4 +8,6 @@ export type Deps = {
   db: Knex;
   log: Logger;
   now: () => Date;
+  /** What a password's hash costs; absent everywhere but in tests, which would spend most of their time on it. */
+  passwordCost?: { memoryCost: number; timeCost: number; parallelism: number };
 };

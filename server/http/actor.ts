@@ -1,9 +1,10 @@
 import type { Request } from 'express';
 import * as z from 'zod';
-import { findMembership } from '../db/memberships.ts';
 import type { Deps } from '../deps.ts';
-import { notFound, Refusal } from '../errors.ts';
+import { notFound } from '../errors.ts';
 import type { Actor } from '../policies.ts';
+import { findActor } from '../services/find-signed-in.ts';
+import { mustBeSignedIn } from './signed-in.ts';
 
 const uuid = z.uuid();
 
@@ -12,10 +13,10 @@ const uuid = z.uuid();
  * @throws {Refusal} not-signed-in, or not-found where the account is no member of that shop.
  */
 export async function actorOf(deps: Deps, req: Request): Promise<Actor> {
-  if (!req.isAuthenticated()) throw new Refusal('not-signed-in');
-  const shopId = uuid.safeParse(req.params.shopId);
+  const account = mustBeSignedIn(req);
+  const shopId = uuid.safeParse(req.params['shopId']);
   if (!shopId.success) throw notFound();
-  const membership = await findMembership(deps.db, { accountId: req.user.id, shopId: shopId.data });
-  if (!membership) throw notFound();
-  return { accountId: req.user.id, shopId: shopId.data, role: membership.role, personId: membership.personId };
+  const actor = await findActor(deps, account.id, shopId.data);
+  if (!actor) throw notFound();
+  return actor;
 }

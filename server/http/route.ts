@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import type { NextFunction, Request, Response, Router } from 'express';
 import type * as z from 'zod';
 import type { Endpoint } from '#contracts/endpoint.ts';
@@ -5,7 +6,9 @@ import { nothing } from '#contracts/endpoint.ts';
 import type { Deps } from '../deps.ts';
 import { Refusal } from '../errors.ts';
 import type { Actor } from '../policies.ts';
+import { once } from '../services/once.ts';
 import { actorOf } from './actor.ts';
+import { mustBeSignedIn } from './signed-in.ts';
 
 /** `public`: anybody. `account`: signed in, no shop. A predicate: a member of the shop in the address who may. */
 export type Access = 'public' | 'account' | ((actor: Actor) => boolean);
@@ -34,12 +37,15 @@ export class Routes {
   /** A route without a shop. */
   open<E extends Endpoint>(endpoint: E, access: 'public' | 'account', handle: (call: Call<E>) => Reply<E>): void {
     this.#add(endpoint, access, async (req, res) => {
-      if (access === 'account' && !req.isAuthenticated()) throw new Refusal('not-signed-in');
-      return handle(parse(endpoint, req, res));
+      if (access === 'account') mustBeSignedIn(req);
+      return endpoint.reply.parse(await handle(parse(endpoint, req, res)));
     });
   }
 
-  /** A route in a shop: who is not a member is told the same as for a shop that does not exist. */
+  /**
+   * A route in a shop: who is not a member is told the same as for a shop that does not exist. A write that comes with an
+   * Idempotency-Key is done once, however often it is sent.
+   */
   shop<E extends Endpoint>(
     endpoint: E,
     access: (actor: Actor) => boolean,
@@ -48,11 +54,31 @@ export class Routes {
     this.#add(endpoint, access, async (req, res) => {
       const actor = await actorOf(this.#deps, req);
       if (!access(actor)) throw new Refusal('forbidden');
-      return handle({ ...parse(endpoint, req, res), actor });
+      const call = parse(endpoint, req, res);
+      const answer = async () => endpoint.reply.parse(await handle({ ...call, actor }));
+      const key = endpoint.method === 'GET' ? undefined : keyOf(req);
+      return key === undefined ? answer() : once(this.#deps, actor, keyed(key, endpoint, call), answer);
     });
   }
 
-  #add(endpoint: Endpoint, access: Access, answer: (req: Request, res: Response) => Promise<unknown>): void {
+  /** A stream in a shop that answers for itself. */
+  stream(
+    stream: { name: string; method: 'GET'; path: string },
+    access: (actor: Actor) => boolean,
+    handle: (call: { actor: Actor; req: Request; res: Response }) => Promise<void>,
+  ): void {
+    this.#add({ ...stream, reply: nothing }, access, async (req, res) => {
+      const actor = await actorOf(this.#deps, req);
+      if (!access(actor)) throw new Refusal('forbidden');
+      await handle({ actor, req, res });
+    });
+  }
+
+  #add(
+    endpoint: Pick<Endpoint, 'name' | 'method' | 'reply'> & { path: string },
+    access: Access,
+    answer: (req: Request, res: Response) => Promise<unknown>,
+  ): void {
     this.list.push({ name: endpoint.name, method: endpoint.method, path: endpoint.path, access });
     const method = endpoint.method.toLowerCase() as 'get' | 'post' | 'patch' | 'delete';
     this.#router[method](endpoint.path, async (req: Request, res: Response, next: NextFunction) => {
@@ -60,12 +86,29 @@ export class Routes {
         const reply = await answer(req, res);
         if (res.headersSent) return;
         if (endpoint.reply === nothing) res.status(204).end();
-        else res.json(endpoint.reply.parse(reply));
+        else res.json(reply);
       } catch (error) {
         next(error);
       }
     });
   }
+}
+
+function keyOf(req: Request): string | undefined {
+  const key = req.get('idempotency-key');
+  if (key !== undefined && !/^[\x21-\x7e]{8,120}$/.test(key))
+    throw new Refusal('bad-request', {
+      fields: [{ path: 'headers.idempotency-key', message: 'must be 8 to 120 visible ASCII characters' }],
+    });
+  return key;
+}
+
+/** What makes two requests the same: the route and everything that was read from the request. */
+function keyed(key: string, endpoint: Endpoint, { params, query, body }: Call<Endpoint>) {
+  const hash = createHash('sha256')
+    .update(JSON.stringify([params, query, body]))
+    .digest();
+  return { key, route: `${endpoint.method} ${endpoint.path}`, hash };
 }
 
 function parse<E extends Endpoint>(endpoint: E, req: Request, res: Response): Call<E> {
