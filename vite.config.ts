@@ -6,8 +6,10 @@ const port = Number(process.env['PORT'] ?? 5180);
 const api = process.env['OVENBIRD_API'] ?? 'http://127.0.0.1:5181';
 
 // Tests that need no database and no document; they start at once and run in parallel.
-const pureTests = ['tests/{planner,chemistry,borders,contracts}/**/*.test.{ts,tsx}'];
+const pureTests = ['tests/{planner,chemistry,borders,contracts}/**/*.test.ts', 'src/**/*.test.ts'];
 const browserTests = ['tests/browser/**/*.test.{ts,tsx}'];
+// Against hanging, not against slowness: a busy machine fails no test.
+const patience = { testTimeout: 60_000, hookTimeout: 120_000 };
 const withPostgres: TestProjectInlineConfiguration['test'] = {
   environment: 'node',
   pool: 'forks',
@@ -40,15 +42,14 @@ export default defineConfig({
   },
   test: {
     projects: [
-      { test: { name: 'pure', environment: 'node', include: pureTests } },
+      { test: { name: 'pure', environment: 'node', include: pureTests, ...patience } },
       {
         test: {
           name: 'server',
           ...withPostgres,
           include: ['tests/**/*.test.{ts,tsx}'],
           exclude: [...pureTests, ...browserTests],
-          testTimeout: 20_000,
-          hookTimeout: 60_000,
+          ...patience,
         },
       },
       {
@@ -56,7 +57,8 @@ export default defineConfig({
         test: {
           name: 'web',
           environment: 'jsdom',
-          include: ['src/**/*.test.{ts,tsx}'],
+          include: ['src/**/*.test.tsx'],
+          ...patience,
           setupFiles: ['src/testing/setup.ts'],
         },
       },

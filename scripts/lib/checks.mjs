@@ -7,10 +7,12 @@ import { run, tool } from './run.mjs';
 
 /** @typedef {{ passed: number, failed: number, skipped: number }} Counts */
 
-const plain = { NO_COLOR: '1', FORCE_COLOR: '0' };
+// For every tool started below: what they print is read by programs too.
+process.env['NO_COLOR'] = '1';
+delete process.env['FORCE_COLOR'];
 
 /** @param {string[]} args @param {NodeJS.ProcessEnv} [more] */
-const node = (args, more = {}) => run(process.execPath, args, { ...process.env, ...plain, ...more });
+const node = (args, more = {}) => run(process.execPath, args, { ...process.env, ...more });
 
 export const checks = {
   types: () => node([tool('typescript/bin/tsc'), '--build', '--pretty', 'false']),

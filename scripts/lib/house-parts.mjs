@@ -59,11 +59,16 @@ export async function withMail(house, command, env, dataDir) {
 /** @param {import('node:child_process').ChildProcess} child that prints {"ready":true,"port":N} @returns {Promise<number>} */
 async function readyPort(child) {
   if (!child.stdout) throw new Error('no output to read');
+  /** @type {number | undefined} */
+  let port;
   for await (const line of createInterface({ input: child.stdout })) {
     if (!line.startsWith('{"ready":true')) continue;
-    child.stdout.resume();
-    return JSON.parse(line).port;
+    port = JSON.parse(line).port;
+    break;
   }
+  // Leaving the loop pauses the stream, and a full pipe would stop the server at its next words.
+  child.stdout.resume();
+  if (port !== undefined) return port;
   throw new Fault('The local mail server did not start.');
 }
 

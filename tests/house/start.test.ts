@@ -14,10 +14,10 @@ let dataDir: string;
 const running: Run[] = [];
 
 beforeAll(async () => {
+  dataDir = mkdtempSync(path.join(tmpdir(), 'ovenbird-start-'));
   // Does nothing where what was built is of these sources.
   await buildServer();
   await buildWeb();
-  dataDir = mkdtempSync(path.join(tmpdir(), 'ovenbird-start-'));
 }, 120_000);
 
 afterAll(async () => {
