@@ -49,4 +49,6 @@ test('hours shown reach from the first thing to the last, and what dries overnig
     toMinute: 1020,
   });
   expect(hoursWorthShowing(zone, [])).toEqual({ fromMinute: 420, toMinute: 1080 });
+  expect(hoursWorthShowing(zone, [], 3)).toEqual({ fromMinute: 420, toMinute: 1140 });
+  expect(hoursWorthShowing(zone, [span('2027-03-11', 900, 1439)], 12)).toEqual({ fromMinute: 720, toMinute: 1440 });
 });

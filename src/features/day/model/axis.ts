@@ -23,9 +23,14 @@ type Stretch = { from: number; to: number };
 
 /**
  * The clock hours worth showing: from the hour in which the first thing of any day begins to the hour in which the last
- * one ends, with half an hour of air. What runs through a midnight does not stretch them.
+ * one ends, with half an hour of air. What runs through a midnight does not stretch them. Their number is a multiple of
+ * `multiple` hours (a divisor of 24), so that hour labels fall on the same clock times every day.
  */
-export function hoursWorthShowing(zone: string, busy: readonly Stretch[]): { fromMinute: number; toMinute: number } {
+export function hoursWorthShowing(
+  zone: string,
+  busy: readonly Stretch[],
+  multiple = 1,
+): { fromMinute: number; toMinute: number } {
   let first = Infinity;
   let last = -Infinity;
   for (const { from, to } of busy) {
@@ -35,10 +40,16 @@ export function hoursWorthShowing(zone: string, busy: readonly Stretch[]): { fro
     last = Math.max(last, minuteOf(start));
     if (Math.floor(start / dayMs) === Math.floor((end - 1) / dayMs)) last = Math.max(last, minuteOf(end - 1) + 1);
   }
-  if (first === Infinity) return { fromMinute: 7 * 60, toMinute: 18 * 60 };
+  if (first === Infinity) [first, last] = [8 * 60, 17 * 60];
   const fromMinute = Math.max(0, Math.floor((first - 30) / 60) * 60);
-  const toMinute = Math.min(dayMinutes, Math.ceil((last + 30) / 60) * 60);
-  return { fromMinute, toMinute: Math.max(toMinute, Math.min(dayMinutes, fromMinute + 240)) };
+  const toMinute = Math.min(dayMinutes, Math.max(Math.ceil((last + 30) / 60) * 60, fromMinute + 240));
+  return stretched(fromMinute, toMinute, multiple * 60);
+}
+
+function stretched(fromMinute: number, toMinute: number, unit: number): { fromMinute: number; toMinute: number } {
+  const length = Math.ceil((toMinute - fromMinute) / unit) * unit;
+  const end = Math.min(dayMinutes, fromMinute + length);
+  return { fromMinute: end - length, toMinute: end };
 }
 
 const minuteOf = (wall: number) => Math.floor((((wall % dayMs) + dayMs) % dayMs) / minuteMs);
