@@ -37,7 +37,7 @@ export async function bookingsForUse(
        order by n.position limit 1
      ) next on true
      where b.shop_id = :shopId and b.state <> 'cancelled'
-       and (b.during && tstzrange(:from - interval '7 days', :to + interval '7 days')
+       and (b.during && tstzrange(:from::timestamptz - interval '7 days', :to::timestamptz + interval '7 days')
             or (s.started_at < :to and coalesce(s.finished_at, :now) > :from))
      order by lower(b.during), b.id`,
     { shopId, ...range },

@@ -35,12 +35,12 @@ const stageOf = (job: TestJob, i: number): string => job.stages[i] ?? '';
 const tap = (account: string, stage: string, what: 'start' | 'finish', version: number) =>
   api.as(account).post(`/api/shops/${shop.id}/stages/${stage}/${what}`).send({ version });
 const bench = async (account: string, query = ''): Promise<BenchView> =>
-  (await api.as(account).get(`/api/shops/${shop.id}/bench${query}`).expect(200)).body;
+  (await api.as(account).get(`/api/shops/${shop.id}/bench${query}`).expect(200)).body as BenchView;
 const job = async (id: string): Promise<Job> =>
-  (await api.as(lead).get(`/api/shops/${shop.id}/jobs/${id}`).expect(200)).body;
+  (await api.as(lead).get(`/api/shops/${shop.id}/jobs/${id}`).expect(200)).body as Job;
 const changes = (kind: string) =>
   inShop(api.deps.db, { shopId: shop.id, accountId: null }, (trx) =>
-    trx('change').where({ shop_id: shop.id, kind }).orderBy('seq'),
+    trx('change').where({ shop_id: shop.id, kind }).orderBy('seq').select<{ ids: string[] }[]>('ids'),
   );
 
 /** Two stages at the prep station, 09:00 and 10:00 UTC, both the painter's. */
@@ -94,7 +94,7 @@ describe('starting and finishing', () => {
     const made = await twoStages();
     const stage = stageOf(made, 0);
     const taps = await Promise.all([1, 2, 3].map(() => tap(painter, stage, 'start', 1)));
-    expect(taps.map((answer) => [answer.status, answer.body.version])).toEqual(Array(3).fill([200, 2]));
+    expect(taps.map((answer) => [answer.status, answer.body as unknown])).toEqual(Array(3).fill([200, { version: 2 }]));
     api.setClock('2026-03-02T09:30:00.000Z');
     await tap(painter, stage, 'start', 1).expect(200);
     await tap(painter, stage, 'finish', 2).expect(200);

@@ -35,7 +35,7 @@ export async function testApi(register: (routes: Routes, deps: Deps) => void, no
     setClock: (time) => {
       clock = new Date(time);
     },
-    as: (accountId) => request.agent(app).set('x-test-account', accountId) as unknown as Agent,
+    as: (accountId) => request.agent(app).set('x-test-account', accountId),
     close: async () => {
       await deps.db.destroy();
       await database.drop();

@@ -192,7 +192,7 @@ export type TestBooking = {
 };
 
 /** Books a stage in the posted plan, or in a draft, and takes its place for the time it lasts. */
-export async function aBooking(db: Knex, shop: { id: string }, given: TestBooking): Promise<string> {
+export async function aBooking(db: Knex, shop: { id: string; rack?: string }, given: TestBooking): Promise<string> {
   const id = randomUUID();
   const phases = pairs(given.phases ?? [60]);
   const to = new Date(given.from.getTime() + (phases.at(-1)?.[1] ?? 0) * MINUTE);
@@ -213,6 +213,8 @@ export async function aBooking(db: Knex, shop: { id: string }, given: TestBookin
   await inShop(db, { shopId: shop.id, accountId: null }, async (trx) => {
     if (given.draft !== undefined) return trx('draft_item').insert({ ...row, draft_id: given.draft });
     await trx('booking').insert({ ...row, plan_number: 1 });
+    // Racks are counted, not occupied.
+    if (given.place === shop.rack) return undefined;
     return trx('occupancy').insert({
       shop_id: shop.id,
       id: randomUUID(),
