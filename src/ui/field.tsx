@@ -1,0 +1,62 @@
+import { CircleAlert } from 'lucide-react';
+import { useId, type ReactNode } from 'react';
+import { cx } from '#src/lib/cx.ts';
+
+/** What the control inside has to carry, so that label, hint and error are read out with it. */
+export type FieldIds = { id: string; 'aria-describedby'?: string; 'aria-invalid'?: true; required?: true };
+
+export type FieldProps = {
+  label: string;
+  hint?: ReactNode;
+  /** What is wrong and how it would be right; absent or empty: nothing is. */
+  error?: string | undefined;
+  /** Marks what may be left empty; most fields are needed. */
+  optional?: boolean;
+  /** The label is only read out. */
+  hideLabel?: boolean;
+  className?: string | undefined;
+};
+
+export function Field({
+  label,
+  hint,
+  error,
+  optional,
+  hideLabel,
+  className,
+  children,
+}: FieldProps & { children: (ids: FieldIds) => ReactNode }) {
+  const id = useId();
+  const described = [hint ? `${id}-hint` : '', error ? `${id}-error` : ''].filter(Boolean).join(' ');
+  return (
+    <div className={cx('flex min-w-0 flex-col gap-1', className)}>
+      <label htmlFor={id} className={hideLabel ? 'sr-only' : 'text-[0.8125rem] font-semibold'}>
+        {label}
+        {optional && <span className="font-normal text-muted"> (optional)</span>}
+      </label>
+      {children({
+        id,
+        ...(described ? { 'aria-describedby': described } : {}),
+        ...(error ? { 'aria-invalid': true } : {}),
+      })}
+      {hint && (
+        <p id={`${id}-hint`} className="text-xs text-muted">
+          {hint}
+        </p>
+      )}
+      {error && (
+        <p id={`${id}-error`} className="flex items-start gap-1.5 text-xs font-semibold text-crimson">
+          <CircleAlert size={14} className="mt-px shrink-0" aria-hidden="true" />
+          {error}
+        </p>
+      )}
+    </div>
+  );
+}
+
+/** Look of a box one types into. */
+export const boxClasses = cx(
+  'w-full min-h-control rounded border border-edge bg-surface px-3 text-ink placeholder:text-muted',
+  'aria-invalid:border-crimson aria-invalid:bg-crimson-soft disabled:cursor-not-allowed disabled:opacity-60',
+  'read-only:bg-paper max-sm:text-base',
+);
