@@ -1,10 +1,8 @@
 import { checkPlan } from './check-plan.ts';
 import { compileShop } from './engine/compile.ts';
-import { type Decoder, decodeBlock, makeDecoder } from './engine/decode.ts';
 import { extractAssignments } from './engine/extract.ts';
-import { blocksInOrder, jobOrders, runningFirst } from './engine/orders.ts';
-import { costNow } from './engine/run-cost.ts';
 import { whyUnplaced } from './reasons.ts';
+import { type Found, searchPlan } from './search/search-plan.ts';
 import type { Job, Plan, PlanOptions, Problem, Unplaced, Violation } from './types.ts';
 
 /**
@@ -12,47 +10,19 @@ import type { Job, Plan, PlanOptions, Problem, Unplaced, Violation } from './typ
  * job without room is listed as unplaced with the reason. Same problem, seed and evaluations: same plan.
  */
 export function plan(problem: Problem, options: PlanOptions): Plan {
-  const shop = compileShop(problem);
-  const stop = options.stop ?? (() => false);
-  const most = options.evaluations ?? Infinity;
-  let best: { jobs: number[]; cost: number } | null = null;
-  let evaluations = 0;
-  let improvements = 0;
-  for (const jobs of jobOrders(shop)) {
-    if (best && (evaluations >= most || stop())) break;
-    let order = runningFirst(shop, jobs);
-    for (let round = 0; round < 4; round++) {
-      const d = decodeAll(makeDecoder(shop), order);
-      const cost = costNow(d);
-      evaluations++;
-      if (!best || cost < best.cost) {
-        best = { jobs: order, cost };
-        improvements++;
-        options.onProgress?.({ cost, bound: null, evaluations, unplaced: d.out.reduce((x, y) => x + y, 0) });
-      }
-      const out = order.filter((j) => d.out[j]);
-      if (out.length === 0 || stop()) break;
-      order = [...out, ...order.filter((j) => !d.out[j])];
-    }
-  }
-  const d = decodeAll(makeDecoder(shop), best!.jobs);
-  return finish(problem, d, { evaluations, improvements });
-}
-
-function decodeAll(d: Decoder, jobs: readonly number[]): Decoder {
-  for (const id of blocksInOrder(d.shop, jobs)) decodeBlock(d, id);
-  return d;
+  const found = searchPlan(compileShop(problem), options);
+  return finish(problem, found);
 }
 
 /** The plan as it leaves the planner: asked of every rule once more, and what breaks one is left out with its reason. */
-function finish(problem: Problem, d: Decoder, stats: Plan['stats']): Plan {
+function finish(problem: Problem, { d, bound, stats }: Found): Plan {
   const { shop } = d;
   const unplaced = shop.jobs.flatMap((_job, j): Unplaced[] =>
     d.out[j]
       ? [{ job: problem.jobs[j]!.id, stage: shop.stageIds[d.outStage[j]!]!, reason: whyUnplaced(d, j, d.outStage[j]!) }]
       : [],
   );
-  let made: Plan = { version: 1, assignments: extractAssignments(d), unplaced, cost: 0, stats };
+  let made: Plan = { version: 1, assignments: extractAssignments(d), unplaced, cost: 0, bound, stats };
   for (;;) {
     const verdict = checkPlan(problem, made);
     const guilty = verdict.violations.flatMap((v) => culprit(problem, made, v) ?? [])[0];

@@ -196,6 +196,11 @@ export type PlanOptions = {
   evaluations?: number;
   /** Asked often; true ends the search with the best so far. */
   stop?: () => boolean;
+  /**
+   * How much of the time is gone, 0 to 1: with it the search cools down in time for the end that `stop` sets. Without it
+   * the evaluations tell, and without those it runs in rounds that grow.
+   */
+  share?: () => number;
   /** Called for the first plan and for each improvement. */
   onProgress?: (progress: Progress) => void;
 };

@@ -13,6 +13,11 @@ function familiesOf(problem: Problem): Map<string, number> {
   return new Map([...names].map((name, i) => [name, i]));
 }
 
+function loadsOf(problem: Problem): Map<string, number> {
+  const modes = problem.jobs.flatMap((job) => job.stages.flatMap((s) => s.modes));
+  return new Map([...new Set(modes.flatMap((m) => m.load ?? []))].map((key, i) => [key, i]));
+}
+
 function cleanupTable(problem: Problem, family: Map<string, number>): Int32Array {
   const table = new Int32Array(family.size * family.size);
   for (const c of problem.cleanups) table[family.get(c.from)! * family.size + family.get(c.to)!] = c.minutes;
@@ -39,6 +44,7 @@ export function compileShop(problem: Problem): Shop {
     person: indexOf(problem.people),
     lamp: indexOf(problem.lamps),
     family,
+    load: loadsOf(problem),
     placeUnits,
   };
   const circuit = indexOf(problem.circuits);

@@ -137,20 +137,20 @@ function takeKept(d: Decoder, block: Block, floor: number, variant: Variant): vo
 
 /** Puts a stage where another record says. */
 export function restore(d: Placer, s: number, from: Placing): void {
-  const { at } = d.state;
   const way = from.way[s]!;
-  if (
-    way &&
-    at.way[s] === way &&
-    at.start[s] === from.start[s] &&
-    at.end[s] === from.end[s] &&
-    at.place[s] === from.place[s] &&
-    at.person[s] === from.person[s] &&
-    way.lampCount === 0
-  )
-    return;
+  if (way && way.rigid && way.lampCount === 0 && d.state.at.way[s] === way && standsAs(d.state.at, from, s)) return;
   takeOut(d, s);
   if (!way) return;
-  copyStage(d.shop, from, at, s);
+  copyStage(d.shop, from, d.state.at, s);
   enter(d.state, s, way);
 }
+
+/** Same times, place, person and hold; enough for ways whose segments and lamps cannot differ then. */
+const standsAs = (a: Placing, b: Placing, s: number): boolean =>
+  a.start[s] === b.start[s] &&
+  a.place[s] === b.place[s] &&
+  a.person[s] === b.person[s] &&
+  a.holdFrom[s] === b.holdFrom[s] &&
+  a.holdTo[s] === b.holdTo[s] &&
+  a.goesOn[s] === b.goesOn[s] &&
+  a.units[s] === b.units[s];

@@ -1,37 +1,64 @@
 import type { Decoder } from './decode.ts';
-import { BOOTH } from './shop.ts';
+import type { Shop } from './shop.ts';
 
 /** Weight of a job without room, on top of the problem's own: a plan that leaves nothing out always comes first. */
 export const OUT = 1e9;
 
-/** The cost of what stands now, like `checkPlan` counts it, with `OUT` for each job left out. */
-export function costNow(d: Decoder): number {
-  const { shop, state } = d;
-  const { at } = state;
-  const w = shop.problem.objective;
-  let cost = 0;
-  let end = 0;
-  shop.jobs.forEach((job, j) => {
-    if (d.out[j]) cost += OUT + w.unplaced * job.weight;
-    else {
-      const last = at.end[job.last]!;
-      if (job.due >= 0 && last > job.due) cost += w.tardiness * job.weight * (last - job.due);
-      cost += w.flow * job.weight * (last - job.release);
-      if (last > end) end = last;
-    }
-  });
-  cost += w.makespan * end;
-  if (w.booth > 0 || w.moves > 0)
-    for (let s = 0; s < shop.stageCount; s++) {
-      if (!at.way[s]) continue;
-      if (shop.placeKind[at.place[s]!] === BOOTH) cost += w.booth * (at.holdTo[s]! - at.holdFrom[s]!);
-      if (shop.basePlace[s]! >= 0 && moved(d, s)) cost += w.moves;
-    }
-  return cost;
+/**
+ * The running cost of a schedule, complete or not: each job counts from the earliest end that is still possible for it,
+ * so that a schedule is given up as soon as it cannot become good enough.
+ */
+export type Ledger = {
+  /** Earliest possible end of each job, as placed so far. */
+  est: Int32Array;
+  /** Cost of each job at that end. */
+  part: Float64Array;
+  /** Sum of the parts. */
+  sum: number;
+  /** Latest of the ends. */
+  last: number;
+  /** Earliest end of each job in an empty shop. */
+  alone: Int32Array;
+};
+
+export function makeLedger(shop: Shop, alone: Int32Array): Ledger {
+  const n = shop.jobs.length;
+  return { est: new Int32Array(n).fill(-1), part: new Float64Array(n), sum: 0, last: 0, alone };
 }
 
-export const moved = (d: Decoder, s: number): boolean => {
-  const { at } = d.state;
-  const { basePlace, basePerson, baseStart } = d.shop;
-  return at.place[s] !== basePlace[s] || at.person[s] !== basePerson[s] || at.start[s] !== baseStart[s];
-};
+/** Notes a job's earliest possible end. */
+export function setEnd(l: Ledger, shop: Shop, j: number, end: number): void {
+  if (l.est[j] === end) return;
+  const job = shop.jobs[j]!;
+  const w = shop.problem.objective;
+  let part = w.flow * job.weight * (end - job.release);
+  if (job.due >= 0 && end > job.due) part += w.tardiness * job.weight * (end - job.due);
+  setPart(l, j, end, part);
+  if (end > l.last) l.last = end;
+}
+
+/** Notes that a job has found no room. */
+export const setOut = (l: Ledger, shop: Shop, j: number): void =>
+  setPart(l, j, -2, OUT + shop.problem.objective.unplaced * shop.jobs[j]!.weight);
+
+function setPart(l: Ledger, j: number, est: number, part: number): void {
+  l.sum += part - l.part[j]!;
+  l.part[j] = part;
+  l.est[j] = est;
+}
+
+/** Sums and maxima from scratch: decrements leave rounding and a stale maximum behind. */
+export function settleLedger(l: Ledger): void {
+  l.sum = 0;
+  l.last = 0;
+  for (let j = 0; j < l.est.length; j++) {
+    l.sum += l.part[j]!;
+    if (l.est[j]! > l.last) l.last = l.est[j]!;
+  }
+}
+
+/** The cost as far as it is known; the whole cost once every block is placed. */
+export function costOf(d: Decoder, l: Ledger): number {
+  const w = d.shop.problem.objective;
+  return l.sum + w.makespan * l.last + w.booth * d.state.boothMinutes + w.moves * d.state.moves;
+}

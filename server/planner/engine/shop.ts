@@ -22,6 +22,8 @@ export type Way = {
   lampCount: number;
   units: number;
   family: number;
+  /** Stages whose ways have the same number here may run as one load; -1: never. */
+  load: number;
   gapMin: number;
   gapMax: number;
   settle: number;

@@ -1,5 +1,5 @@
 import type { Assignment } from '../types.ts';
-import { HANDS, PAUSED, RACK, type Shop, type Way } from './shop.ts';
+import { BOOTH, HANDS, PAUSED, RACK, type Shop, type Way } from './shop.ts';
 import { firstEnding, insertUse, makeTrack, removeUse, type Track } from './track.ts';
 
 /** Where each stage stands; `way[s]` is null while it has no place. Flat lists: one slot per segment, one per lamp. */
@@ -31,6 +31,9 @@ export type State = {
   circuits: Track[];
   glow: Track[];
   mist: Track[];
+  /** Minutes that booths are held, and stages that stand elsewhere than in the baseline. */
+  boothMinutes: number;
+  moves: number;
 };
 
 export function makePlacing(shop: Shop): Placing {
@@ -81,6 +84,8 @@ export function makeState(shop: Shop): State {
     circuits: tracks(shop.circuitCount),
     glow: tracks(shop.zoneCount),
     mist: tracks(shop.zoneCount),
+    boothMinutes: 0,
+    moves: 0,
   };
   placeFixed(state);
   return state;
@@ -142,10 +147,22 @@ function eachLampUse(state: State, s: number, way: Way, zone: number, edit: Edit
   }
 }
 
+/** Keeps the sums that the objective weighs. */
+function count(state: State, s: number, sign: number): void {
+  const { shop, at } = state;
+  if (shop.placeKind[at.place[s]!] === BOOTH) state.boothMinutes += sign * (at.holdTo[s]! - at.holdFrom[s]!);
+  if (shop.basePlace[s]! >= 0 && moved(state, s)) state.moves += sign;
+}
+
+/** Whether a placed stage stands elsewhere than in the baseline. */
+export const moved = ({ shop, at }: State, s: number): boolean =>
+  at.place[s] !== shop.basePlace[s] || at.person[s] !== shop.basePerson[s] || at.start[s] !== shop.baseStart[s];
+
 /** Enters a stage whose slots in `at` are filled into the tracks. */
 export function enter(state: State, s: number, way: Way): void {
   state.at.way[s] = way;
   eachUse(state, s, way, insertUse);
+  count(state, s, 1);
 }
 
 /** Takes a placed stage out of the tracks. */
@@ -153,6 +170,7 @@ export function remove(state: State, s: number): void {
   const way = state.at.way[s];
   if (!way) return;
   eachUse(state, s, way, removeUse);
+  count(state, s, -1);
   state.at.way[s] = null;
 }
 

@@ -8,6 +8,7 @@ export type Indexes = {
   person: Map<string, number>;
   lamp: Map<string, number>;
   family: Map<string, number>;
+  load: Map<string, number>;
   placeUnits: Float64Array;
 };
 
@@ -57,6 +58,7 @@ export function compileWay(id: number, mode: Mode, at: Indexes, apart = false): 
     lampCount: mode.lampCount,
     units: mode.units,
     family: mode.family === null ? -1 : (at.family.get(mode.family) ?? -1),
+    load: mode.load === null ? -1 : at.load.get(mode.load)!,
     gapMin: mode.gap.min,
     gapMax: mode.gap.max ?? NEVER,
     settle: mode.gap.settle,

@@ -1,0 +1,113 @@
+import { below, type Random } from '../random.ts';
+import type { Search } from './candidate.ts';
+
+/** Changes `s.order` or the genes in the decoder. Returns the first changed position, or -1 where nothing changed. */
+export type Move = (s: Search, random: Random) => number;
+
+/** Moves the block at position `from` to `to`, shifting those between. Returns the first changed position. */
+function shift(order: Int32Array, from: number, to: number): number {
+  const id = order[from]!;
+  if (from < to) order.copyWithin(from, from + 1, to + 1);
+  else order.copyWithin(to + 1, to, from);
+  order[to] = id;
+  return Math.min(from, to);
+}
+
+/** The positions between which a block may stand: after its job's previous block, before the next. */
+function range(s: Search, id: number): [number, number] {
+  const { blocks } = s.d.shop.jobs[s.d.shop.blocks[id]!.job]!;
+  const k = id - blocks[0]!; // a job's blocks are numbered in order
+  const lo = k > 0 ? s.at[blocks[k - 1]!]! + 1 : 0;
+  const hi = k < blocks.length - 1 ? s.at[blocks[k + 1]!]! - 1 : s.order.length - 1;
+  return [lo, hi];
+}
+
+/** One block to another position, mostly near. */
+export const moveBlock: Move = (s, random) => {
+  const from = below(random, s.order.length);
+  const id = s.order[from]!;
+  let [lo, hi] = range(s, id);
+  if (random() < 0.6) {
+    const reach = 3 + below(random, 12);
+    lo = Math.max(lo, from - reach);
+    hi = Math.min(hi, from + reach);
+  }
+  if (hi <= lo) return -1;
+  const to = lo + below(random, hi - lo + 1);
+  return to === from ? -1 : shift(s.order, from, to);
+};
+
+const gone = (s: Search, job: number, out: Uint8Array): void => {
+  out[job] = 1;
+  for (const id of s.d.shop.jobs[job]!.blocks) {
+    s.d.choice[id] = -1; // place and way are chosen anew
+    const { first, last } = s.d.shop.blocks[id]!;
+    s.d.handOf.fill(-1, first, last + 1);
+  }
+};
+
+/** Takes the blocks of the marked jobs out of the order and puts them back, job by job, each at a position of its own. */
+function reinsert(s: Search, random: Random, jobs: readonly number[], out: Uint8Array, spread: number): number {
+  const { shop } = s.d;
+  const { order } = s;
+  let kept = 0;
+  let first = order.length;
+  for (let i = 0; i < order.length; i++) {
+    if (out[shop.blocks[order[i]!]!.job]) first = Math.min(first, i);
+    else order[kept++] = order[i]!;
+  }
+  for (const job of jobs) {
+    const to = spread < 0 ? below(random, kept + 1) : Math.max(0, Math.min(kept, spread + below(random, 9) - 4));
+    const { blocks } = shop.jobs[job]!;
+    order.copyWithin(to + blocks.length, to, kept);
+    blocks.forEach((id, k) => (order[to + k] = id));
+    kept += blocks.length;
+    first = Math.min(first, to);
+  }
+  return first;
+}
+
+/** One whole job to another position, its blocks together, everything about it chosen anew. */
+export const moveJob: Move = (s, random) => ruin(s, random, 1);
+
+/** Two to four jobs that stand near each other taken out and put back. */
+export const ruinJobs: Move = (s, random) => ruin(s, random, 2 + below(random, 3));
+
+function ruin(s: Search, random: Random, count: number): number {
+  const { shop } = s.d;
+  if (shop.jobs.length < 2) return -1;
+  const out = new Uint8Array(shop.jobs.length);
+  const jobs: number[] = [];
+  const around = below(random, s.order.length);
+  const reach = Math.max(8, count * 6);
+  for (let tries = 0; tries < count * 3 && jobs.length < count; tries++) {
+    const i = tries === 0 ? around : around - reach + below(random, 2 * reach + 1);
+    if (i < 0 || i >= s.order.length) continue;
+    const { job } = shop.blocks[s.order[i]!]!;
+    if (!out[job]) jobs.push(job);
+    gone(s, job, out);
+  }
+  return reinsert(s, random, jobs, out, count > 1 && random() < 0.5 ? around : -1);
+}
+
+/** Another way of doing a block, or whichever ends first. */
+export const changeWay: Move = (s, random) => {
+  const from = below(random, s.order.length);
+  const id = s.order[from]!;
+  const n = s.d.shop.blocks[id]!.variants.length;
+  if (n < 2) return -1;
+  const next = below(random, n);
+  s.d.choice[id] = next === s.d.choice[id] ? -1 : next;
+  return from;
+};
+
+/** Another person for a stage, or whoever is free first. */
+export const changeHands: Move = (s, random) => {
+  const { shop } = s.d;
+  const stage = below(random, shop.stageCount);
+  const block = shop.blockOf[stage]!;
+  const way = s.heldPlacing.way[stage];
+  if (block < 0 || !way || way.people.length < 2) return -1;
+  s.d.handOf[stage] = random() < 0.4 ? -1 : way.people[below(random, way.people.length)]!;
+  return s.at[block]!;
+};

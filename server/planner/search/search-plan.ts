@@ -1,0 +1,117 @@
+import { lowerBounds } from '../bounds.ts';
+import type { Decoder } from '../engine/decode.ts';
+import { blocksInOrder, jobOrders, runningFirst } from '../engine/orders.ts';
+import type { Shop } from '../engine/shop.ts';
+import { makeRandom, type Random } from '../random.ts';
+import type { PlanOptions, Stats } from '../types.ts';
+import { anneal } from './anneal.ts';
+import { makeSearch, type Search, startFrom } from './candidate.ts';
+import { costShown, type Kept, keepHeld, makeKept, standOn } from './kept.ts';
+
+export type Found = { d: Decoder; bound: number; stats: Stats };
+
+/** Looks at the clock only every so many evaluations. */
+const LOOK = 16;
+/** Evaluations of the first round where nobody says when the end comes; each next one is twice as long. */
+const FIRST_ROUND = 4000;
+
+type Run = {
+  s: Search;
+  options: PlanOptions;
+  random: Random;
+  bound: number;
+  best: Kept;
+  improvements: number;
+  over: boolean;
+};
+
+/** Builds first plans by rules of thumb, then anneals in rounds from the best. Ends early where the bound is met. */
+export function searchPlan(shop: Shop, options: PlanOptions): Found {
+  const bounds = lowerBounds(shop);
+  const s = makeSearch(shop, bounds.alone);
+  const run: Run = {
+    s,
+    options,
+    random: makeRandom(options.seed),
+    bound: bounds.cost,
+    best: makeKept(s),
+    improvements: 0,
+    over: false,
+  };
+  firstPlans(run);
+  rounds(run);
+  standOn(s, run.best);
+  return { d: s.d, bound: run.bound, stats: { evaluations: s.evaluations, improvements: run.improvements } };
+}
+
+/** Whether the search has to end: budget, stop, or nothing left to gain. */
+function isOver(run: Run): boolean {
+  const { s, options } = run;
+  if (run.over) return true;
+  const spent = s.evaluations >= (options.evaluations ?? Infinity);
+  const stopped = s.evaluations % LOOK === 0 && options.stop?.() === true;
+  const proved = run.best.cost <= run.bound + 1e-9;
+  const endless = options.evaluations === undefined && options.stop === undefined;
+  run.over = spent || stopped || proved || endless;
+  return run.over;
+}
+
+/** Keeps the search's schedule if it is the best so far. */
+function keep(run: Run): void {
+  const { s, best } = run;
+  if (s.cost >= best.cost - 1e-9) return;
+  run.improvements++;
+  keepHeld(s, best);
+  const unplaced = best.out.reduce((x, y) => x + y, 0);
+  run.options.onProgress?.({ cost: costShown(best), bound: run.bound, evaluations: s.evaluations, unplaced });
+}
+
+function firstPlans(run: Run): void {
+  const { s } = run;
+  const { shop } = s.d;
+  for (const jobs of jobOrders(shop)) {
+    if (run.best.cost < Infinity && isOver(run)) return;
+    let order = runningFirst(shop, jobs);
+    for (let round = 0; round < 4; round++) {
+      startFrom(s, blocksInOrder(shop, order));
+      keep(run);
+      const out = order.filter((j) => s.heldOut[j]);
+      if (out.length === 0 || isOver(run)) break;
+      order = [...out, ...order.filter((j) => !s.heldOut[j])]; // who found no room goes first
+    }
+  }
+}
+
+/** Share of the whole budget that is gone; null where nobody knows the end. */
+function shareGone(run: Run): number | null {
+  const { options, s } = run;
+  if (options.share) return options.share();
+  return options.evaluations === undefined ? null : s.evaluations / options.evaluations;
+}
+
+/** Anneals: one long run where the end is known, else in rounds that grow, each from the best so far. */
+function rounds(run: Run): void {
+  const { s } = run;
+  if (s.d.shop.blocks.length < 2) return;
+  for (let round = 0; !isOver(run); round++) {
+    standOn(s, run.best);
+    const begun = s.evaluations;
+    const length = FIRST_ROUND * 2 ** round;
+    const from = shareGone(run);
+    let share = 0;
+    let tick = 0;
+    anneal(s, run.random, {
+      share: () => {
+        if (isOver(run)) return 1;
+        if (tick++ % LOOK === 0) {
+          const gone = from === null ? null : shareGone(run);
+          share = gone === null || from === null ? (s.evaluations - begun) / length : (gone - from) / (1 - from);
+        }
+        return share;
+      },
+      hot: 1000,
+      cold: 1,
+      onBetter: () => keep(run),
+    });
+  }
+}
