@@ -39,7 +39,7 @@ export async function insertAccount(
 export async function updateAccount(
   db: Knex,
   id: string,
-  changed: Partial<Pick<AccountRow, 'name' | 'temperatureUnit' | 'clock'>>,
+  changed: { [K in 'name' | 'temperatureUnit' | 'clock']?: AccountRow[K] | undefined },
 ): Promise<void> {
   const { name, temperatureUnit, clock } = changed;
   const row = { name, temperature_unit: temperatureUnit, clock };

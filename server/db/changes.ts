@@ -12,8 +12,12 @@ export async function recordChange(
   scope: Scope,
   change: { kind: ChangeKind; ids: string[]; detail?: Record<string, unknown> },
 ): Promise<number> {
-  const [shop] = await trx('shop').where({ id: scope.shopId }).increment('change_seq', 1).returning('change_seq');
-  const seq = Number(shop.change_seq);
+  const [shop] = await trx('shop')
+    .where({ id: scope.shopId })
+    .increment('change_seq', 1)
+    .returning<{ change_seq: number }[]>('change_seq');
+  if (!shop) throw new Error(`no shop ${scope.shopId} to record a change in`);
+  const seq = shop.change_seq;
   await trx('change').insert({
     shop_id: scope.shopId,
     seq,
@@ -34,4 +38,10 @@ export async function changesSince(trx: Trx, shopId: string, seq: number, limit:
     .orderBy('seq')
     .limit(limit)
     .select('seq', 'kind', 'ids');
+}
+
+/** The number of the shop's newest change; 0 where nothing has happened yet or the shop is not to be seen. */
+export async function currentSeq(trx: Trx, shopId: string): Promise<number> {
+  const shop = await trx('shop').where({ id: shopId }).first<{ seq: number } | undefined>({ seq: 'change_seq' });
+  return shop?.seq ?? 0;
 }

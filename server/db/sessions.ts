@@ -9,13 +9,10 @@ export async function touchSession(db: Knex, sid: string, at: Date): Promise<voi
     .update({ sess: db.raw(`jsonb_set(sess, '{seenAt}', to_jsonb(?::bigint))`, [at.getTime()]) });
 }
 
-/** Ends the sessions of an account, but for the one named. Live streams of those end too, in every process. */
-export async function endSessionsOf(db: Knex, accountId: string, but: string | null): Promise<void> {
-  await db('session')
-    .where({ account_id: accountId })
-    .modify((query) => void (but !== null && query.whereNot({ sid: but })))
-    .delete();
-  await db.raw(`select pg_notify(?, ?)`, [SESSION_CHANNEL, accountId]);
+/** Ends the sessions of an account. Its live streams end too, in every process. */
+export async function endSessionsOf(db: Knex, accountId: string): Promise<void> {
+  await db('session').where({ account_id: accountId }).delete();
+  await tellSessionEnded(db, accountId);
 }
 
 export type SessionRow = { accountId: string | null; signedInAt: number | null; seenAt: number | null };

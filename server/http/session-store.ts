@@ -17,6 +17,9 @@ export const isHttps = (config: Config): boolean => config.PUBLIC_URL.startsWith
 /** A browser takes a __Host- cookie only over https, for this very host and every path. */
 export const cookieName = (config: Config): string => (isHttps(config) ? '__Host-ovenbird' : 'ovenbird');
 
+export const cookieKind = (config: Config) =>
+  ({ path: '/', httpOnly: true, sameSite: 'lax', secure: isHttps(config) }) as const;
+
 export type SessionPool = NonNullable<connectPgSimple.PGStoreOptions['pool']>;
 
 /**
@@ -39,13 +42,7 @@ export function sessionStore(deps: Deps, pool: SessionPool): RequestHandler {
     resave: false,
     saveUninitialized: false,
     proxy: isHttps(config) || config.BEHIND_PROXY,
-    cookie: {
-      path: '/',
-      httpOnly: true,
-      sameSite: 'lax',
-      secure: isHttps(config),
-      maxAge: config.SESSION_ABSOLUTE_HOURS * 3_600_000,
-    },
+    cookie: { ...cookieKind(config), maxAge: config.SESSION_ABSOLUTE_HOURS * 3_600_000 },
   });
 }
 

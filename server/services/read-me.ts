@@ -6,7 +6,7 @@ import type { Deps } from '../deps.ts';
 import { Refusal } from '../errors.ts';
 
 /** What the browser knows of who is signed in. */
-export async function readMe(deps: Deps, accountId: string): Promise<Me> {
+export async function readMe(deps: Deps, accountId: string, localMailbox: boolean): Promise<Me> {
   const account = await findAccount(deps.db, accountId);
   if (!account) throw new Refusal('not-signed-in');
   const shops = await asAccount(deps.db, accountId, (trx) => listOwnShops(trx, accountId));
@@ -15,6 +15,6 @@ export async function readMe(deps: Deps, accountId: string): Promise<Me> {
     account: { id, email, name, temperatureUnit, clock },
     shops,
     serverTime: deps.now().toISOString(),
-    localMailbox: deps.config.DEV_MAILBOX_DIR !== undefined,
+    localMailbox,
   };
 }

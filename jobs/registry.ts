@@ -1,0 +1,28 @@
+import type { TaskKind } from '#server/db/tasks.ts';
+import { openPlannerThreads } from '#server/planning/planner-threads.ts';
+import type { TaskDefinition } from './task-function.ts';
+import { letterIsDead } from './tasks/deliver.ts';
+import { prune } from './tasks/prune.ts';
+import { planWith } from './tasks/run-plan.ts';
+import { sendInvitation } from './tasks/send-invitation.ts';
+import { sendLetter } from './tasks/send-letter.ts';
+import { sendReset } from './tasks/send-reset.ts';
+
+/** What the worker knows to do, by kind. Ten attempts with growing delays are about three hours. */
+export const registry: Partial<Record<TaskKind, TaskDefinition>> = {
+  'send-letter': { run: sendLetter, attempts: 10, onDead: letterIsDead },
+  'send-invitation': { run: sendInvitation, attempts: 10, onDead: letterIsDead },
+  // Who waits for a link has asked again, or given up, after that.
+  'send-reset': { run: sendReset, attempts: 7 },
+  'run-plan': planWith(openPlannerThreads()),
+  prune: { run: prune, attempts: 5 },
+};
+
+export type Lane = { kinds: readonly TaskKind[]; runners: number };
+
+/** What runs beside what: letters wait for the network, a plan run for the processor. */
+export const lanes: readonly Lane[] = [
+  { kinds: ['send-letter', 'send-invitation', 'send-reset'], runners: 4 },
+  { kinds: ['run-plan'], runners: 1 },
+  { kinds: ['prune'], runners: 1 },
+];

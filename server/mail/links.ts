@@ -1,0 +1,8 @@
+import type { Config } from '../config.ts';
+
+/** Where links in letters lead. A token stands behind #, so that it is in no log and no Referer. */
+export const linkTo = (config: Config) => ({
+  reset: (token: string) => `${config.PUBLIC_URL}/password-reset#${token}`,
+  invitation: (token: string) => `${config.PUBLIC_URL}/invitation#${token}`,
+  bench: () => `${config.PUBLIC_URL}/bench`,
+});
