@@ -43,7 +43,7 @@ export async function loadDraftItems(trx: Trx, shopId: string, draftId: string):
 /** Undefined where somebody opened one a moment earlier. */
 export async function insertDraft(
   trx: Trx,
-  draft: { shopId: string; id: string; planNumber: number; accountId: string | null },
+  draft: { shopId: string; id: string; planNumber: number; accountId: string | null; now: Date },
 ): Promise<{ id: string; version: number } | undefined> {
   const rows = await trx('draft')
     .insert({
@@ -52,6 +52,8 @@ export async function insertDraft(
       plan_number: draft.planNumber,
       created_by: draft.accountId,
       updated_by: draft.accountId,
+      created_at: draft.now,
+      updated_at: draft.now,
     })
     // The index allows one open draft a shop.
     .onConflict(trx.raw(`(shop_id) where state = 'open'`))

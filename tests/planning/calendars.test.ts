@@ -185,9 +185,9 @@ describe('the zone of the process', () => {
       env: { ...process.env, TZ },
       encoding: 'utf8',
     });
-  it.each(['America/New_York', 'Pacific/Kiritimati', 'Australia/Lord_Howe'])('%s changes nothing', (zone) => {
+  it('changes nothing', () => {
     const utc = run('UTC');
     expect(JSON.parse(utc)).toHaveLength(5);
-    expect(run(zone)).toBe(utc);
+    for (const zone of ['America/New_York', 'Pacific/Kiritimati', 'Australia/Lord_Howe']) expect(run(zone)).toBe(utc);
   });
 });

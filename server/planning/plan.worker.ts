@@ -1,0 +1,21 @@
+import { parentPort } from 'node:worker_threads';
+import { plan } from '#planner/index.ts';
+import type { PlanMessage, PlanOrder } from './thread-messages.ts';
+
+/** A thread of its own for the planner, so that a search never holds up anything else. One order at a time. */
+const port = parentPort;
+if (!port) throw new Error('plan.worker runs in a worker thread only.');
+
+const say = (message: PlanMessage): void => port.postMessage(message);
+
+port.on('message', ({ problem, seed, milliseconds, evaluations, flags }: PlanOrder) => {
+  const stopped = new Int32Array(flags);
+  const end = performance.now() + milliseconds;
+  const made = plan(problem, {
+    seed,
+    ...(evaluations === undefined ? {} : { evaluations }),
+    stop: () => Atomics.load(stopped, 0) !== 0 || performance.now() >= end,
+    onProgress: (progress) => say({ kind: 'progress', progress }),
+  });
+  say({ kind: 'plan', plan: made });
+});
