@@ -29,11 +29,6 @@ export async function findMemberByEmail(trx: Trx, shopId: string, email: string)
   return member;
 }
 
-/** Keeps two changes of the shop's members apart, so that its last owner stays. */
-export async function lockShop(trx: Trx, shopId: string): Promise<void> {
-  await trx('shop').where({ id: shopId }).forUpdate().first('id');
-}
-
 export async function countOtherOwners(trx: Trx, shopId: string, id: string): Promise<number> {
   const owners = await members(trx, shopId).andWhere({ 'membership.role': 'owner' }).whereNot({ 'membership.id': id });
   return owners.filter((owner) => !owner.disabled).length;

@@ -2,7 +2,8 @@ import type { BodyOf } from '#contracts/endpoint.ts';
 import type { changeMember as contract, Member } from '#contracts/session.ts';
 import { recordChange } from '../db/changes.ts';
 import { inShop } from '../db/in-shop.ts';
-import { countOtherOwners, findMember, lockShop, updateMember } from '../db/members.ts';
+import { lockShop } from '../db/locks.ts';
+import { countOtherOwners, findMember, updateMember } from '../db/members.ts';
 import { tellSessionEnded } from '../db/sessions.ts';
 import type { Deps } from '../deps.ts';
 import { notFound, Refusal } from '../errors.ts';
@@ -19,6 +20,7 @@ export function changeMember(
   changed: BodyOf<typeof contract>,
 ): Promise<Member> {
   return inShop(deps.db, actor, async (trx) => {
+    // One at a time, or two owners could each take the other's place away.
     await lockShop(trx, actor.shopId);
     const before = await findMember(trx, actor.shopId, memberId);
     if (!before) throw notFound();
