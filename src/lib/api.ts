@@ -39,6 +39,15 @@ export async function call<E extends Endpoint>(endpoint: E, input: CallInput<E>)
   return (await replyOf(endpoint, response)) as ReplyOf<E>;
 }
 
+/** A file that was built along with the pages. @throws {ApiError} */
+export async function readBuilt(path: string, signal: AbortSignal): Promise<unknown> {
+  const response = await send(path, { signal });
+  const isJson = response.headers.get('content-type')?.includes('json') ?? false;
+  if (!response.ok || !isJson)
+    throw new ApiError(response.ok ? 'not-found' : 'unreadable', { status: response.status });
+  return response.json();
+}
+
 /** The path with its params filled in, and the query behind it without what is undefined. */
 export function addressOf(path: string, params: object = {}, query: object = {}): string {
   const given = new Map<string, unknown>(Object.entries(params));

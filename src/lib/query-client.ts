@@ -15,11 +15,14 @@ export function makeQueryClient(onSignedOut: Lost): QueryClient {
       queries: {
         // Live notices say when something changed; this only bounds what a missed notice could cost.
         staleTime: 30_000,
+        // Tried in any case: a failure is said and can be tried again, a pause would look like work that never ends.
+        networkMode: 'always',
+        refetchOnReconnect: true,
         retry: (failures, error) => isWorthRetrying(error) && failures < 3,
         retryDelay: (failures) => Math.min(8_000, 500 * 2 ** failures),
       },
       // A write is sent again only by the person, who sees what came of it, with the key that makes it count once.
-      mutations: { retry: false },
+      mutations: { retry: false, networkMode: 'always' },
     },
   });
 }

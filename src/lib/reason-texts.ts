@@ -20,7 +20,8 @@ type ServiceCode =
   | 'stage-running'
   | 'not-booked'
   | 'previous-not-done'
-  | 'not-started';
+  | 'not-started'
+  | 'last-owner';
 
 type Say = (
   r: { names: Get; at: Get; minutes: (i: number) => number; count: number; rule: number | null },
@@ -120,6 +121,7 @@ const texts: Record<ViolationCode | ServiceCode, Say> = {
   'previous-not-done': ({ names, count }) =>
     count > 0 ? `${names(0)} comes before it and is not done.` : 'The stage before it is not done.',
   'not-started': () => 'It has not been started.',
+  'last-owner': ({ names }) => `${names(0)} is the only owner. Make somebody else an owner first.`,
 };
 
 const rules = [

@@ -1,0 +1,4 @@
+import { Shell } from './shell.tsx';
+
+/** Large, for gloves and a phone in the bay. */
+export const BayShell = () => <Shell place="bay" />;

@@ -1,0 +1,33 @@
+/** Every address of the program. `search` is what the page reads after the `?`. */
+const withSearch = (path: string, search?: URLSearchParams | Record<string, string>): string => {
+  const text = search === undefined ? '' : new URLSearchParams(search).toString();
+  return text === '' ? path : `${path}?${text}`;
+};
+type Search = URLSearchParams | Record<string, string>;
+
+export const paths = {
+  home: () => '/',
+  day: (search?: Search) => withSearch('/day', search),
+  jobs: (search?: Search) => withSearch('/jobs', search),
+  newJob: () => '/jobs/new',
+  job: (jobId: string) => `/jobs/${jobId}`,
+  bench: (search?: Search) => withSearch('/bench', search),
+  use: (search?: Search) => withSearch('/use', search),
+  account: () => '/account',
+  members: () => '/shop/members',
+  letters: () => '/shop/letters',
+  mailbox: (letterId?: string) => withSearch('/mailbox', letterId === undefined ? undefined : { letter: letterId }),
+  licences: () => '/licences',
+  /** `to`: where one wanted to go. */
+  signIn: (to?: string) => withSearch('/sign-in', to === undefined || to === '/' ? undefined : { to }),
+  forgotten: () => '/forgotten',
+  reset: () => '/password-reset',
+  invitation: () => '/invitation',
+};
+
+/** Where to go after signing in: only ever a place of our own, whatever the address says. */
+export function ownPlace(to: string | null): string {
+  if (to === null || !/^\/(?![/\\])/.test(to)) return paths.home();
+  const url = new URL(to, 'https://here.invalid');
+  return url.host === 'here.invalid' ? url.pathname + url.search + url.hash : paths.home();
+}

@@ -1,0 +1,71 @@
+import type { QueryClient } from '@tanstack/react-query';
+import { createBrowserRouter, redirect, type LoaderFunctionArgs, type RouteObject } from 'react-router-dom';
+import { meQuery } from '#src/lib/session.ts';
+import { paths } from './paths.ts';
+import { NotFound, RouteError } from './error-screens.tsx';
+import { BayShell } from './bay-shell.tsx';
+import { DeskShell } from './desk-shell.tsx';
+import { FrontDoor } from './front-door.tsx';
+import { Home } from './home.tsx';
+import { OpenShell } from './open-shell.tsx';
+import { PageSkeleton } from './page-skeleton.tsx';
+import { SignedIn } from './signed-in.tsx';
+
+const atDesk: RouteObject[] = [
+  { path: '/day', lazy: () => import('#src/features/day/day-page.tsx') },
+  { path: '/jobs', lazy: () => import('#src/features/jobs/jobs-page.tsx') },
+  { path: '/jobs/new', lazy: () => import('#src/features/jobs/new-job-page.tsx') },
+  { path: '/jobs/:jobId', lazy: () => import('#src/features/jobs/job-page.tsx') },
+  { path: '/use', lazy: () => import('#src/features/use/use-page.tsx') },
+  { path: '/account', lazy: () => import('#src/features/account/account-page.tsx') },
+  { path: '/shop/members', lazy: () => import('#src/features/account/members-page.tsx') },
+  { path: '/shop/letters', lazy: () => import('#src/features/account/letters-page.tsx') },
+  { path: '*', Component: NotFound },
+];
+const inBay: RouteObject[] = [{ path: '/bench', lazy: () => import('#src/features/bench/bench-page.tsx') }];
+const atDoor: RouteObject[] = [
+  { path: '/sign-in', lazy: () => import('#src/features/session/sign-in-page.tsx') },
+  { path: '/forgotten', lazy: () => import('#src/features/session/forgotten-page.tsx') },
+  { path: '/password-reset', lazy: () => import('#src/features/session/reset-page.tsx') },
+  { path: '/invitation', lazy: () => import('#src/features/session/invitation-page.tsx') },
+];
+const open: RouteObject[] = [
+  { path: '/licences', lazy: () => import('#src/features/account/licences-page.tsx') },
+  { path: '/mailbox', lazy: () => import('#src/features/account/mailbox-page.tsx') },
+];
+
+// A fault of one page leaves the shell around it standing.
+const guarded = (children: RouteObject[]): RouteObject => ({ ErrorBoundary: RouteError, children });
+
+/** Who is signed in is asked before any page that needs it; nobody leads to the sign-in and back again afterwards. */
+const signedInOnly =
+  (client: QueryClient) =>
+  async ({ request }: LoaderFunctionArgs) => {
+    const me = await client.ensureQueryData(meQuery);
+    const { pathname, search, hash } = new URL(request.url);
+    return me === null ? redirect(paths.signIn(pathname + search + hash)) : null;
+  };
+
+export const routes = (client: QueryClient): RouteObject[] => [
+  {
+    HydrateFallback: PageSkeleton,
+    ErrorBoundary: RouteError,
+    children: [
+      { Component: FrontDoor, children: [guarded(atDoor)] },
+      { Component: OpenShell, children: [guarded(open)] },
+      {
+        Component: SignedIn,
+        loader: signedInOnly(client),
+        // Asked once and then kept by the query cache; a change of page need not ask again.
+        shouldRevalidate: () => false,
+        children: [
+          { path: '/', Component: Home },
+          { Component: BayShell, children: [guarded(inBay)] },
+          { Component: DeskShell, children: [guarded(atDesk)] },
+        ],
+      },
+    ],
+  },
+];
+
+export const makeRouter = (client: QueryClient) => createBrowserRouter(routes(client));

@@ -1,0 +1,44 @@
+import { useQuery } from '@tanstack/react-query';
+import { useMemo, useState } from 'react';
+import { Navigate, Outlet, useLocation } from 'react-router-dom';
+import type { Me } from '#contracts/session.ts';
+import { formatsFor } from '#src/lib/formats.ts';
+import { useLive } from '#src/lib/live.ts';
+import { meQuery, rememberedShop, rememberShop, ShopContext } from '#src/lib/session.ts';
+import { paths } from './paths.ts';
+import { NoShop } from './no-shop.tsx';
+import { PageSkeleton } from './page-skeleton.tsx';
+
+/** Around every page that needs an account: leads to the sign-in when the session ends, and settles on a shop. */
+export function SignedIn() {
+  const { data: me } = useQuery(meQuery);
+  const { pathname, search, hash } = useLocation();
+  if (me === undefined) return <PageSkeleton />;
+  if (me === null) return <Navigate to={paths.signIn(pathname + search + hash)} replace />;
+  if (me.shops.length === 0) return <NoShop me={me} />;
+  return <InShop me={me} />;
+}
+
+function InShop({ me }: { me: Me }) {
+  const [chosen, setChosen] = useState(rememberedShop);
+  const shop = me.shops.find(({ id }) => id === chosen) ?? me.shops[0]!;
+  const { clock, temperatureUnit: unit } = me.account;
+  useLive(shop.id);
+  const choice = useMemo(
+    () => ({
+      shop,
+      formats: formatsFor({ zone: shop.timeZone, clock, unit }),
+      choose: (shopId: string) => {
+        rememberShop(shopId);
+        setChosen(shopId);
+      },
+    }),
+    [shop, clock, unit],
+  );
+  return (
+    <ShopContext value={choice}>
+      {/* Another shop is another world: nothing of a page's state may carry over. */}
+      <Outlet key={shop.id} />
+    </ShopContext>
+  );
+}
