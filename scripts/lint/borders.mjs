@@ -35,6 +35,7 @@ export const layers = [
     mayUse: ['errors', ...pure, 'db', 'planning', 'mail', 'realtime'],
     never: webServer,
   },
+  { name: 'program', at: /^server\/program\.ts$/, mayUse: [...kernel, 'db'], never: [...webServer, ...mailers] },
   { name: 'db', at: /^server\/db\//, mayUse: [...kernel, 'migrations'], never: [...webServer, ...mailers] },
   { name: 'planning', at: /^server\/planning\//, mayUse: [...kernel, 'db'], never: [...webServer, ...mailers] },
   { name: 'mail', at: /^server\/mail\//, mayUse: [...kernel, 'db'], never: webServer },
@@ -54,7 +55,7 @@ export const layers = [
   {
     name: 'jobs',
     at: /^jobs\//,
-    mayUse: [...kernel, 'services', 'mail', 'db', 'planning', 'realtime'],
+    mayUse: [...kernel, 'program', 'services', 'mail', 'db', 'planning', 'realtime'],
     never: webServer,
   },
   { name: 'migrations', at: /^migrations\//, mayUse: [], only: ['knex'] },
