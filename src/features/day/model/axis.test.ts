@@ -1,11 +1,11 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import { fractionAt, hoursWorthShowing, type Axis } from './axis.ts';
-import { instantOf } from './wall-time.ts';
+import { instantOf } from '#src/lib/wall-clock.ts';
 
 const zone = 'Europe/Berlin';
 const one: Axis = { zone, days: ['2027-03-11'], fromMinute: 7 * 60, toMinute: 17 * 60 };
-const at = (day: string, minute: number) => instantOf(zone, day, minute);
+const at = (day: string, minute: number) => instantOf(day, minute, zone);
 
 test('the middle of the shown hours is the middle of the axis', () => {
   expect(fractionAt(one, at('2027-03-11', 12 * 60))).toBe(0.5);

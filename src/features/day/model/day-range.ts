@@ -1,12 +1,10 @@
-import { dayMs, instantOf } from './wall-time.ts';
+import { addDays, instantOf } from '#src/lib/wall-clock.ts';
 
 export const spans = ['day', 'three', 'week'] as const;
 /** How much of the calendar is shown at once. */
 export type SpanKind = (typeof spans)[number];
 
 const utc = (day: string) => Date.parse(`${day}T00:00:00Z`);
-export const addDays = (day: string, days: number): string =>
-  new Date(utc(day) + days * dayMs).toISOString().slice(0, 10);
 
 /** Monday of the week (ISO 8601) in which the day lies. */
 const mondayOf = (day: string) => addDays(day, -((new Date(utc(day)).getUTCDay() + 6) % 7));
@@ -27,7 +25,7 @@ export function rangeOf(days: readonly string[], zone: string): { from: string; 
   const first = days[0] ?? '1970-01-01';
   const last = days.at(-1) ?? first;
   return {
-    from: new Date(instantOf(zone, first)).toISOString(),
-    to: new Date(instantOf(zone, addDays(last, 1))).toISOString(),
+    from: new Date(instantOf(first, 0, zone)).toISOString(),
+    to: new Date(instantOf(addDays(last, 1), 0, zone)).toISOString(),
   };
 }

@@ -1,8 +1,8 @@
 import type { Drawn } from './board.ts';
 import type { Bar, DayRow } from '#contracts/day.ts';
 
-/** How times are said: the shop's zone and the reader's clock. */
-export type Say = { time: (at: number) => string; moment: (at: number) => string };
+/** How times (ms) are said: in the shop's zone, by the reader's clock. `moment` is day and time, `day` the day in full. */
+export type Say = { time: (at: number) => string; moment: (at: number) => string; day: (at: number) => string };
 
 const stateWords: Record<Bar['state'], string> = { planned: 'planned', running: 'running now', done: 'done' };
 

@@ -1,5 +1,4 @@
 import { travellers } from './move-in-view.ts';
-import { windowOf } from './window-of.ts';
 import type { Bar, DayView } from '#contracts/day.ts';
 
 /** What is plainly in the way where a bar is about to land. A hint while dragging: the server knows all the rules. */
@@ -11,9 +10,10 @@ export type Hint =
 
 /** Null where nothing is seen to be in the way. `start` in milliseconds. */
 export function hintAt(view: DayView, moved: Bar, placeId: string, start: number): Hint | null {
-  const window = windowOf([moved]);
-  if (window.earliest !== null && start < window.earliest) return { kind: 'too-early', at: window.earliest };
-  if (window.latest !== null && start > window.latest) return { kind: 'too-late', at: window.latest };
+  const earliest = moved.window.earliest === null ? -Infinity : Date.parse(moved.window.earliest);
+  const latest = moved.window.latest === null ? Infinity : Date.parse(moved.window.latest);
+  if (start < earliest) return { kind: 'too-early', at: earliest };
+  if (start > latest) return { kind: 'too-late', at: latest };
   const by = start - Date.parse(moved.from);
   const stretch = { from: start, to: Date.parse(moved.heldTo) + by };
   return closedAt(view, placeId, stretch) ?? takenAt(view, moved, placeId, stretch);

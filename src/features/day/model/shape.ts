@@ -1,7 +1,8 @@
 import { fractionAt, type Axis } from './axis.ts';
 import type { Item } from './items.ts';
-import { toneOf, windowOf, type Tone } from './window-of.ts';
+import { windowOf } from './window-of.ts';
 import type { PhaseKind } from '#contracts/common.ts';
+import { windowTone, type WindowTone } from '#src/lib/window-tone.ts';
 
 /** All figures in per cent of the bar's own width, from its left edge; they may lie outside 0 to 100. */
 export type Stretch = { left: number; width: number };
@@ -14,7 +15,7 @@ export type Shape = {
   labelRoom: number;
   /** Where hidden hours are cut out of the bar. */
   seams: readonly number[];
-  tone: Tone;
+  tone: WindowTone;
   /** The window at its true length. */
   window: WindowLine;
   /** The same, cut so that it cannot run into the neighbours' lines. */
@@ -36,8 +37,8 @@ export function shapeOf(item: Item, { before, after }: Neighbours, axis: Axis): 
   const stacked = item.rowKind === 'rack';
 
   const window = windowOf(item.members);
-  const from = window.earliest === null ? 0 : fractionAt(axis, window.earliest);
-  const to = window.latest === null ? 1 : fractionAt(axis, window.latest);
+  const from = window.earliest === null ? 0 : fractionAt(axis, Date.parse(window.earliest));
+  const to = window.latest === null ? 1 : fractionAt(axis, Date.parse(window.latest));
   const lineFrom = Math.min(from, start);
   const lineTo = Math.max(to, start);
   const leastLeft = stacked ? start : Math.min(start, (edgeBefore + start) / 2);
@@ -47,7 +48,7 @@ export function shapeOf(item: Item, { before, after }: Neighbours, axis: Axis): 
     tail: tailOf(item, after, axis, stretch),
     labelRoom: stacked ? 100 : Math.max(100, at(edgeAfter)),
     seams: seamsOf(axis, start, end).map(at),
-    tone: toneOf(window, item.from),
+    tone: windowTone(window, item.from),
     window: {
       ...stretch(lineFrom, lineTo),
       goesOnLeft: window.earliest === null,

@@ -1,4 +1,5 @@
-import { instantOf, minuteMs } from '../model/wall-time.ts';
+import { instantOf } from '#src/lib/wall-clock.ts';
+import { minuteMs } from '../model/wall-time.ts';
 import type { PhaseKind } from '#contracts/common.ts';
 import type { Bar, DayRow, DayView } from '#contracts/day.ts';
 
@@ -8,7 +9,7 @@ export const day = '2027-03-11';
 
 export const uuid = (kind: number, n: number): string =>
   `0190${kind.toString(16).padStart(4, '0')}-0000-7000-8000-${n.toString(16).padStart(12, '0')}`;
-export const at = (minute: number, on = day): string => new Date(instantOf(zone, on, minute)).toISOString();
+export const at = (minute: number, on = day): string => new Date(instantOf(on, minute, zone)).toISOString();
 const plus = (from: string, minutes: number) => new Date(Date.parse(from) + minutes * minuteMs).toISOString();
 
 const plain = { units: null, zone: null, kilowatts: null, circuitId: null, closed: [], working: null };

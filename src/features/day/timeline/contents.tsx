@@ -23,7 +23,7 @@ export function rowLabel({ resource }: ResourceLabelContentArg) {
   return (
     <span className="row-label">
       <b>{resource.title}</b>
-      <small>{String(props(resource)['facts'] ?? '')}</small>
+      <small>{props(resource)['facts'] as string}</small>
     </span>
   );
 }

@@ -2,10 +2,10 @@ import interaction from '@fullcalendar/interaction';
 import luxon from '@fullcalendar/luxon3';
 import FullCalendar from '@fullcalendar/react';
 import resourceTimeline from '@fullcalendar/resource-timeline';
-import { memo, useMemo, useRef, useState } from 'react';
+import { memo, useMemo, useRef } from 'react';
 import type { Drawn } from '../model/board.ts';
 import { closedTimes } from '../model/closed-times.ts';
-import { addDays } from '../model/day-range.ts';
+import { addDays } from '#src/lib/wall-clock.ts';
 import { useBoardContext, useBoardData } from './board-context.ts';
 import { eventContent, groupLabel, laneContent, rowLabel, slotLabel } from './contents.tsx';
 import { rowsOf } from './rows.ts';
@@ -14,6 +14,7 @@ import { useAccessible } from './use-accessible.ts';
 import { useArrows } from './use-arrows.ts';
 import { useDrag } from './use-drag.ts';
 import { useKeepCentre } from './use-keep-centre.ts';
+import { useSame } from '../use-same.ts';
 import { useNowLine } from './use-now-line.ts';
 import { useTimelineEvents } from './use-timeline-events.ts';
 import { useWidth } from './use-width.ts';
@@ -96,10 +97,4 @@ export const Timeline = memo(function Timeline(props: TimelineProps) {
   );
 });
 
-/** The first of values that say the same, so that the calendar library does not build its rows anew for nothing. */
-function useSame<T>(value: T): T {
-  const [kept, keep] = useState(value);
-  if (kept === value || JSON.stringify(kept) === JSON.stringify(value)) return kept;
-  keep(value);
-  return value;
-}
+export default Timeline;

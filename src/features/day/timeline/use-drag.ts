@@ -41,8 +41,8 @@ const itemOf = (event: { extendedProps: Record<string, unknown> }) => event.exte
 function light(frame: HTMLElement | null, item: Drawn | undefined, axis: Axis): void {
   if (!frame || !item) return;
   const window = windowOf(item.members);
-  const from = window.earliest === null ? 0 : fractionAt(axis, window.earliest);
-  const to = window.latest === null ? 1 : fractionAt(axis, window.latest);
+  const from = window.earliest === null ? 0 : fractionAt(axis, Date.parse(window.earliest));
+  const to = window.latest === null ? 1 : fractionAt(axis, Date.parse(window.latest));
   frame.dataset['dragging'] = 'yes';
   frame.style.setProperty('--land-from', String(from));
   frame.style.setProperty('--land-to', String(Math.max(from, to)));

@@ -13,13 +13,7 @@ export function useNowLine(
 ): void {
   useEffect(() => {
     const show = () => {
-      const element = frame.current;
-      if (!element) return;
-      const now = Date.now() + skew;
-      const fraction = fractionAt(axis, now);
-      element.dataset['now'] = fraction > 0 && fraction < 1 ? 'shown' : 'elsewhere';
-      element.style.setProperty('--now', String(fraction));
-      element.style.setProperty('--now-text', `"${sayTime(now)}"`);
+      if (frame.current) draw(frame.current, fractionAt(axis, Date.now() + skew), sayTime(Date.now() + skew));
     };
     show();
     const timer = setInterval(show, 15_000);
@@ -29,4 +23,10 @@ export function useNowLine(
       document.removeEventListener('visibilitychange', show);
     };
   }, [frame, axis, skew, sayTime]);
+}
+
+function draw(frame: HTMLElement, fraction: number, time: string): void {
+  frame.dataset['now'] = fraction > 0 && fraction < 1 ? 'shown' : 'elsewhere';
+  frame.style.setProperty('--now', String(fraction));
+  frame.style.setProperty('--now-text', `"${time}"`);
 }

@@ -22,7 +22,12 @@ export function useTimelineEvents(
     // A calendar made anew (or new rights) has been told nothing.
     const afresh = told.current.by !== by || told.current.movable !== movable;
     if (afresh) by.getApi().removeAllEvents();
-    const things = syncEvents(by.getApi(), afresh ? new Map() : told.current.things, [...board, ...closed], movable);
+    const things = syncEvents(
+      by.getApi(),
+      afresh ? new Map<string, never>() : told.current.things,
+      [...board, ...closed],
+      movable,
+    );
     told.current = { by, movable, things };
   }, [calendar, board, closed, movable]);
 }
