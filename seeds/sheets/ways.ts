@@ -1,0 +1,160 @@
+import type { Way } from '#contracts/sheets.ts';
+import type { Gap, Phase, StageSeed } from './types.ts';
+
+const hands = (kind: Phase['kind'], minutes: number): Phase => ({ kind, minutes, attendance: 'hands' });
+const onsite = (kind: Phase['kind'], minutes: number, lamp = false): Phase => ({
+  kind,
+  minutes,
+  attendance: 'onsite',
+  ...(lamp ? { lamp } : {}),
+});
+const alone = (kind: Phase['kind'], minutes: number): Phase => ({ kind, minutes, attendance: 'none' });
+
+/** No wait before it and no limit after. */
+export const free: Gap = { min: 0, max: null, settle: 0 };
+
+const plain: Way = {
+  id: 'by-hand',
+  label: 'By hand',
+  placeKinds: [],
+  stay: false,
+  skill: null,
+  lampCount: 0,
+  family: null,
+  load: null,
+  gap: free,
+  split: false,
+  bakeCelsius: null,
+  phases: [],
+};
+
+const stage = (given: Pick<StageSeed, 'key' | 'kind' | 'title' | 'ways'> & Partial<StageSeed>): StageSeed => ({
+  option: null,
+  coating: null,
+  ...given,
+});
+export const withOption = (option: string, given: StageSeed): StageSeed => ({ ...given, option });
+
+type Work = { minutes: number; skill?: string; gap?: Gap };
+
+/** Work at a prep station, which may go on after a break or the next day. */
+export const handwork = (key: string, kind: string, title: string, work: Work): StageSeed =>
+  stage({
+    key,
+    kind,
+    title,
+    ways: [
+      {
+        ...plain,
+        placeKinds: ['prep'],
+        skill: work.skill ?? 'prep',
+        gap: work.gap ?? free,
+        split: true,
+        phases: [hands('work', work.minutes)],
+      },
+    ],
+  });
+
+/** Coats with a flash between; the painter stays by it. */
+const coats = (count: number, spray: number, flash: number): Phase[] =>
+  Array.from({ length: count }, (_, i) => [
+    hands('spray', spray),
+    ...(i < count - 1 ? [hands('flash', flash)] : []),
+  ]).flat();
+
+type Spraying = {
+  coating: string;
+  setup: number;
+  coats: number;
+  minutes: number;
+  flash: number;
+  family: 'primer' | 'colour';
+  /** Where; absent: on the spot, where the stage before left it. */
+  places?: Way['placeKinds'];
+  gap?: Gap;
+  load?: string;
+};
+
+export const spraying = (key: string, title: string, given: Spraying): StageSeed =>
+  stage({
+    key,
+    kind: key,
+    title,
+    coating: given.coating,
+    ways: [
+      {
+        ...plain,
+        id: 'spray',
+        label: given.places ? 'Sprayed' : 'Sprayed on the spot',
+        placeKinds: given.places ?? [],
+        stay: given.places === undefined,
+        skill: 'paint',
+        family: given.family,
+        load: given.load ?? null,
+        gap: given.gap ?? free,
+        phases: [
+          ...(given.setup > 0 ? [hands('setup', given.setup)] : []),
+          ...coats(given.coats, given.minutes, given.flash),
+        ],
+      },
+    ],
+  });
+
+/** Baked in the booth where it was sprayed: purge, bake, cool-down, and nobody moves it before. */
+export const boothBake = (given: { minutes: number; celsius: number; load?: string }): Way => ({
+  ...plain,
+  id: 'booth-bake',
+  label: 'Booth bake',
+  stay: true,
+  family: 'colour',
+  load: given.load ?? null,
+  gap: { min: 10, max: 60, settle: 10 },
+  bakeCelsius: given.celsius,
+  phases: [alone('purge', 5), onsite('bake', given.minutes), alone('cool', 15)],
+});
+
+/** Under one or two lamps at a prep station. */
+export const lampCure = (given: { minutes: number; celsius: number; lamps?: number; gap: Gap }): Way => ({
+  ...plain,
+  id: 'lamp',
+  label: given.lamps === 2 ? 'Two lamps' : 'Lamp',
+  placeKinds: ['prep'],
+  lampCount: given.lamps ?? 1,
+  gap: given.gap,
+  bakeCelsius: given.celsius,
+  phases: [onsite('bake', given.minutes, true), alone('cool', 15)],
+});
+
+export const airDry = (given: { minutes: number; gap: Gap }): Way => ({
+  ...plain,
+  id: 'air',
+  label: 'Air dry',
+  placeKinds: ['rack', 'prep'],
+  gap: given.gap,
+  phases: [alone('flash', given.minutes)],
+});
+
+export const cure = (key: string, title: string, ways: Way[]): StageSeed => stage({ key, kind: 'cure', title, ways });
+
+/** Primer: flashed off before it is moved under the lamp or left to dry. */
+export const afterPrimer: Gap = { min: 15, max: 720, settle: 15 };
+/** Clear: dust-free before it leaves the booth. */
+export const afterClear: Gap = { min: 35, max: 720, settle: 35 };
+
+export const primerCure = (lamps = 1): StageSeed =>
+  cure('primer-cure', 'Primer bake', [
+    lampCure({ minutes: 25, celsius: 60, lamps, gap: afterPrimer }),
+    airDry({ minutes: 180, gap: afterPrimer }),
+  ]);
+
+/** `spot`: small enough for a lamp. */
+export const clearCure = (given: { spot?: boolean; load?: string } = {}): StageSeed =>
+  cure('clear-cure', 'Bake clear', [
+    boothBake({ minutes: 40, celsius: 60, ...(given.load === undefined ? {} : { load: given.load }) }),
+    ...(given.spot ? [lampCure({ minutes: 20, celsius: 60, gap: afterClear })] : []),
+    airDry({ minutes: 720, gap: afterClear }),
+  ]);
+
+export const polish = (minutes: number): StageSeed =>
+  handwork('polish', 'polish', 'Polish', { minutes, skill: 'polish', gap: { min: 30, max: null, settle: 0 } });
+export const refit = (minutes: number): StageSeed => handwork('refit', 'refit', 'Refit', { minutes, skill: 'polish' });
