@@ -1,8 +1,8 @@
+import { QueryClientProvider } from '@tanstack/react-query';
 import { setNonce } from 'get-nonce';
 import { StrictMode } from 'react';
 import { createRoot } from 'react-dom/client';
 import { RouterProvider } from 'react-router-dom';
-import { Providers } from './app/providers.tsx';
 import { makeRouter } from './app/router.tsx';
 import { makeQueryClient } from './lib/query-client.ts';
 import { meQuery } from './lib/session.ts';
@@ -20,8 +20,8 @@ const root = document.getElementById('root');
 if (!root) throw new Error('index.html has no #root');
 createRoot(root).render(
   <StrictMode>
-    <Providers client={client}>
+    <QueryClientProvider client={client}>
       <RouterProvider router={makeRouter(client)} />
-    </Providers>
+    </QueryClientProvider>
   </StrictMode>,
 );

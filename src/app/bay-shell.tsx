@@ -1,4 +1,4 @@
 import { Shell } from './shell.tsx';
 
 /** Large, for gloves and a phone in the bay. */
-export const BayShell = () => <Shell place="bay" />;
+export const Component = () => <Shell place="bay" />;

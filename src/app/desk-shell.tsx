@@ -1,4 +1,4 @@
 import { Shell } from './shell.tsx';
 
 /** Dense, for the desk. */
-export const DeskShell = () => <Shell place="desk" />;
+export const Component = () => <Shell place="desk" />;

@@ -3,7 +3,7 @@ import { Mark } from '#src/ui/mark.tsx';
 import { paths } from './paths.ts';
 
 /** Around the screens before one is in: the mark, one card, and what is always owed. */
-export function FrontDoor() {
+export function Component() {
   return (
     <div className="flex min-h-dvh flex-col items-center px-4 py-8 sm:justify-center">
       <header className="mb-6 flex items-center gap-3">

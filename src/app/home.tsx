@@ -3,7 +3,7 @@ import { useShop } from '#src/lib/session.ts';
 import { paths } from './paths.ts';
 
 /** Everybody begins where their day happens. */
-export function Home() {
+export function Component() {
   const { role } = useShop();
   switch (role) {
     case 'painter':

@@ -3,7 +3,7 @@ import { Mark } from '#src/ui/mark.tsx';
 import { paths } from './paths.ts';
 
 /** Around pages that anybody may read, signed in or not. */
-export function OpenShell() {
+export function Component() {
   return (
     <>
       <header className="border-b border-line bg-surface px-5">

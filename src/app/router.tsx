@@ -3,13 +3,7 @@ import { createBrowserRouter, redirect, type LoaderFunctionArgs, type RouteObjec
 import { meQuery } from '#src/lib/session.ts';
 import { paths } from './paths.ts';
 import { NotFound, RouteError } from './error-screens.tsx';
-import { BayShell } from './bay-shell.tsx';
-import { DeskShell } from './desk-shell.tsx';
-import { FrontDoor } from './front-door.tsx';
-import { Home } from './home.tsx';
-import { OpenShell } from './open-shell.tsx';
 import { PageSkeleton } from './page-skeleton.tsx';
-import { SignedIn } from './signed-in.tsx';
 
 const atDesk: RouteObject[] = [
   { path: '/day', lazy: () => import('#src/features/day/day-page.tsx') },
@@ -46,22 +40,23 @@ const signedInOnly =
     return me === null ? redirect(paths.signIn(pathname + search + hash)) : null;
   };
 
+// Everything but this list comes in pieces, fetched side by side: who signs in does not wait for the booth day.
 export const routes = (client: QueryClient): RouteObject[] => [
   {
     HydrateFallback: PageSkeleton,
     ErrorBoundary: RouteError,
     children: [
-      { Component: FrontDoor, children: [guarded(atDoor)] },
-      { Component: OpenShell, children: [guarded(open)] },
+      { lazy: () => import('./front-door.tsx'), children: [guarded(atDoor)] },
+      { lazy: () => import('./open-shell.tsx'), children: [guarded(open)] },
       {
-        Component: SignedIn,
+        lazy: () => import('./signed-in.tsx'),
         loader: signedInOnly(client),
         // Asked once and then kept by the query cache; a change of page need not ask again.
         shouldRevalidate: () => false,
         children: [
-          { path: '/', Component: Home },
-          { Component: BayShell, children: [guarded(inBay)] },
-          { Component: DeskShell, children: [guarded(atDesk)] },
+          { path: '/', lazy: () => import('./home.tsx') },
+          { lazy: () => import('./bay-shell.tsx'), children: [guarded(inBay)] },
+          { lazy: () => import('./desk-shell.tsx'), children: [guarded(atDesk)] },
         ],
       },
     ],

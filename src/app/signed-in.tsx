@@ -6,11 +6,12 @@ import { formatsFor } from '#src/lib/formats.ts';
 import { useLive } from '#src/lib/live.ts';
 import { meQuery, rememberedShop, rememberShop, ShopContext } from '#src/lib/session.ts';
 import { paths } from './paths.ts';
+import { Overlays } from './overlays.tsx';
 import { NoShop } from './no-shop.tsx';
 import { PageSkeleton } from './page-skeleton.tsx';
 
 /** Around every page that needs an account: leads to the sign-in when the session ends, and settles on a shop. */
-export function SignedIn() {
+export function Component() {
   const { data: me } = useQuery(meQuery);
   const { pathname, search, hash } = useLocation();
   if (me === undefined) return <PageSkeleton />;
@@ -37,8 +38,10 @@ function InShop({ me }: { me: Me }) {
   );
   return (
     <ShopContext value={choice}>
-      {/* Another shop is another world: nothing of a page's state may carry over. */}
-      <Outlet key={shop.id} />
+      <Overlays>
+        {/* Another shop is another world: nothing of a page's state may carry over. */}
+        <Outlet key={shop.id} />
+      </Overlays>
     </ShopContext>
   );
 }

@@ -1,4 +1,4 @@
-import { QueryClient } from '@tanstack/react-query';
+import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
 import { render } from '@testing-library/react';
 import type { ReactNode } from 'react';
 import { createMemoryRouter, RouterProvider } from 'react-router-dom';
@@ -6,7 +6,7 @@ import type { Role } from '#contracts/common.ts';
 import type { Me } from '#contracts/session.ts';
 import { formatsFor } from '#src/lib/formats.ts';
 import { meQuery, ShopContext } from '#src/lib/session.ts';
-import { Providers } from '#src/app/providers.tsx';
+import { Overlays } from '#src/app/overlays.tsx';
 
 export const shopId = '018f3a00-0000-7000-8000-000000000001';
 
@@ -57,9 +57,11 @@ export function renderPage(page: ReactNode, { me = meAs('lead'), at = '/', patte
     initialEntries: [at],
   });
   const view = render(
-    <Providers client={client}>
-      <RouterProvider router={router} />
-    </Providers>,
+    <QueryClientProvider client={client}>
+      <Overlays>
+        <RouterProvider router={router} />
+      </Overlays>
+    </QueryClientProvider>,
   );
   return { ...view, router, client };
 }
