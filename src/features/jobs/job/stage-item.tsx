@@ -1,0 +1,126 @@
+import { Check, Pin, Play } from 'lucide-react';
+import type { JobStage } from '#contracts/jobs.ts';
+import { cx } from '#src/lib/cx.ts';
+import { phasesInWords } from '#src/lib/phase-words.ts';
+import { useFormats } from '#src/lib/session.ts';
+import { PhaseBar } from '#src/ui/phase-bar.tsx';
+import { WindowGauge, windowWords } from '#src/ui/window-gauge.tsx';
+import { latenessWords, minutesLater, piecesOf } from '../model/stage-times.ts';
+import { WaysOnOffer } from './ways-on-offer.tsx';
+
+type StageItemProps = { stage: JobStage; isLast: boolean; isWithdrawn: boolean };
+
+/** A knot on the line: when and where the stage is, its phases, its window, its other ways, how it went. */
+export function StageItem({ stage, isLast, isWithdrawn }: StageItemProps) {
+  const { duration } = useFormats();
+  const pieces = piecesOf(stage);
+  const minutes = pieces.reduce((sum, piece) => sum + piece.size, 0);
+  const words = phasesInWords(
+    pieces.map(({ kind, size }) => ({ kind, minutes: size })),
+    duration,
+  );
+  return (
+    <li className="grid grid-cols-[1.75rem_minmax(0,1fr)] gap-x-3">
+      <Knot state={stage.state} isLast={isLast} />
+      <div className={cx('flex min-w-0 flex-col gap-1.5', isLast ? '' : 'pb-6')}>
+        <div className="flex items-baseline justify-between gap-3">
+          <h3 className="text-[0.9375rem] font-bold">{stage.title}</h3>
+          <span className="figures shrink-0 text-muted">{duration(minutes)}</span>
+        </div>
+        <Booked stage={stage} isWithdrawn={isWithdrawn} />
+        <PhaseBar pieces={pieces} label={words} className={cx(stage.state === 'done' && 'opacity-55')} />
+        <Happened stage={stage} />
+        {stage.state === 'waiting' && <Window stage={stage} />}
+        {stage.state === 'waiting' && <WaysOnOffer ways={stage.ways} chosen={stage.booking?.way ?? null} />}
+      </div>
+    </li>
+  );
+}
+
+const knots = {
+  waiting: { look: 'border-edge bg-surface', word: 'Waiting', mark: null },
+  running: {
+    look: 'border-ember bg-ember text-on-ember',
+    word: 'Running',
+    mark: <Play size={13} aria-hidden="true" />,
+  },
+  done: { look: 'border-moss bg-moss text-surface', word: 'Done', mark: <Check size={15} aria-hidden="true" /> },
+};
+
+function Knot({ state, isLast }: { state: JobStage['state']; isLast: boolean }) {
+  const { look, word, mark } = knots[state];
+  return (
+    <div className="relative flex justify-center">
+      {!isLast && (
+        <i
+          aria-hidden="true"
+          className={cx('absolute top-1 -bottom-0.5 w-0.5', state === 'done' ? 'bg-moss' : 'bg-line')}
+        />
+      )}
+      <span className={cx('relative mt-px flex size-6 items-center justify-center rounded-full border-2', look)}>
+        {mark}
+        <span className="sr-only">{word}</span>
+      </span>
+    </div>
+  );
+}
+
+function Booked({ stage, isWithdrawn }: { stage: JobStage; isWithdrawn: boolean }) {
+  const { span, dayOf, today, date } = useFormats();
+  const { booking } = stage;
+  if (!booking) return <p className="text-muted">{isWithdrawn ? 'Not booked any more' : 'Not planned yet'}</p>;
+  const day = dayOf(booking.from) === today() ? 'today' : date(booking.from);
+  const who = booking.personName ?? (booking.personId === null ? null : 'nobody yet');
+  return (
+    <p className="flex flex-wrap items-center gap-x-2">
+      <span className="figures font-semibold">
+        {day} {span(booking.from, booking.to)}
+      </span>
+      <span className="text-muted">
+        {[booking.placeName, who, ...booking.lampNames, booking.wayLabel].filter(Boolean).join(' · ')}
+      </span>
+      {booking.pinned && (
+        <span className="inline-flex items-center gap-1 text-xs font-semibold text-muted">
+          <Pin size={12} aria-hidden="true" /> pinned
+        </span>
+      )}
+    </p>
+  );
+}
+
+function Happened({ stage }: { stage: JobStage }) {
+  const { dateTime, time, dayOf, duration } = useFormats();
+  const { startedAt, finishedAt, booking } = stage;
+  if (startedAt === null) return null;
+  const later =
+    finishedAt === null
+      ? minutesLater(startedAt, booking?.from ?? null)
+      : minutesLater(finishedAt, booking?.to ?? null);
+  const end =
+    finishedAt === null
+      ? ''
+      : `, done ${dayOf(finishedAt) === dayOf(startedAt) ? time(finishedAt) : dateTime(finishedAt)}`;
+  const words = latenessWords(later, duration);
+  return (
+    <p className="figures text-[0.8125rem]">
+      Started {dateTime(startedAt)}
+      {end}
+      {words && <span className={later !== null && later > 15 ? 'text-amber' : 'text-muted'}> · {words}</span>}
+    </p>
+  );
+}
+
+function Window({ stage }: { stage: JobStage }) {
+  const formats = useFormats();
+  const { window, booking } = stage;
+  if (window.earliest === null && window.latest === null) return null;
+  if (!booking) return null;
+  return (
+    <div className="flex flex-col gap-0.5">
+      <WindowGauge window={window} start={booking.from} formats={formats} />
+      <p aria-hidden="true" className="text-xs text-muted">
+        {windowWords(window, booking.from, formats)}
+      </p>
+    </div>
+  );
+}

@@ -1,0 +1,5 @@
+/**
+ * Held by the planner where nothing is recorded for a vehicle with a battery: 120 F, as several vehicle makers print
+ * it, and 45 min in all. The same as in server/planning.
+ */
+export const assumedLimit = { celsius: ((120 - 32) * 5) / 9, minutes: 45 } as const;
