@@ -57,6 +57,7 @@ export async function buildWeb() {
       'server/planner',
       'vite.config.ts',
       'tailwind.config.ts',
+      '.env',
       ...always,
     ],
     product: 'dist/web/index.html',
