@@ -14,7 +14,7 @@ export function openDraft(deps: Deps, actor: Actor): Promise<DraftHead> {
   return inShop(deps.db, actor, (trx) => openDraftIn(trx, actor, deps.now()));
 }
 
-export async function openDraftIn(trx: Trx, scope: Scope, now: Date): Promise<DraftHead> {
+async function openDraftIn(trx: Trx, scope: Scope, now: Date): Promise<DraftHead> {
   const open = await findOpenDraft(trx, scope.shopId, { lock: false });
   if (open) return { id: open.id, version: open.version };
   const planNumber = await findPlanNumber(trx, scope.shopId);

@@ -4,7 +4,7 @@ import { recordChange } from '../db/changes.ts';
 import { closeDraft } from '../db/drafts.ts';
 import { inShop, type Trx } from '../db/in-shop.ts';
 import { queueLetter } from '../db/letters.ts';
-import { lockResources, lockShop } from '../db/locks.ts';
+import { lockOpenStages, lockResources, lockShop } from '../db/locks.ts';
 import { insertOccupancy, releaseFrom } from '../db/occupancy.ts';
 import { accountsOfPeople } from '../db/people-told.ts';
 import { insertPostedPlan } from '../db/posted-plans.ts';
@@ -26,7 +26,7 @@ export type Posted = { planNumber: number; changed: number; letters: number };
 
 /**
  * Makes the draft what everyone works by, in one transaction: bookings, what they take, the plan whole, history, and one
- * letter for each account whose work changes. Locks the draft, the shop, then places, lamps and people in id order.
+ * letter for each account whose work changes. Locks in the order of db/locks.ts.
  * @throws {Refusal} stale; ground-shifted with what has changed under the draft; refused with the rules it breaks.
  */
 export function postDraft(deps: Deps, actor: Actor, version: number): Promise<Posted> {
@@ -34,9 +34,10 @@ export function postDraft(deps: Deps, actor: Actor, version: number): Promise<Po
 }
 
 async function post(trx: Trx, actor: Actor, version: number, now: Date): Promise<Posted> {
+  await lockOpenStages(trx, actor.shopId);
   const draft = await seenDraft(trx, actor.shopId, version, { lock: true });
-  const shop = await lockShop(trx, actor.shopId);
   await lockResources(trx, actor.shopId);
+  const shop = await lockShop(trx, actor.shopId);
   const facts = await loadFacts(trx, actor.shopId, now);
   const shifts = groundShifts(facts, draft, shop.planNumber);
   if (shifts) throw new Refusal('ground-shifted', { current: shifts });

@@ -2,7 +2,7 @@ import { setTimeout as sleep } from 'node:timers/promises';
 import { v7 as uuid } from 'uuid';
 import type { Plan, Progress } from '#planner/types.ts';
 import { recordChange } from '../db/changes.ts';
-import { deleteDraftItems, findOpenDraft, insertDraftItems, touchDraft } from '../db/drafts.ts';
+import { deleteDraftItems, findOpenDraft, insertDraft, insertDraftItems, touchDraft } from '../db/drafts.ts';
 import { inShop, type Scope, type Trx } from '../db/in-shop.ts';
 import { loadOpenJobs } from '../db/open-jobs.ts';
 import { changePlanRun, findPlanRun, type RunRow, type RunState } from '../db/plan-runs.ts';
@@ -14,7 +14,6 @@ import { PlannerThreadDied, type PlannerThreads, type Search } from '../planning
 import type { Built } from '../planning/problem/build-problem.ts';
 import { problemToPlan } from '../planning/problem/problem-to-plan.ts';
 import { readPlan, readUnplaced } from '../planning/read-plan.ts';
-import { openDraftIn } from './open-draft.ts';
 
 /** How often a run looks whether it shall stop and, where there is something new, tells how far it is. */
 const LOOK_MILLISECONDS = 150;
@@ -138,8 +137,8 @@ function store(deps: Deps, { run, scope, facts, built }: Begun, plan: Plan): Pro
       draft?.id === facts.draft?.id &&
       draft?.version === facts.draft?.version &&
       (await findPlanNumber(trx, shopId)) === facts.resources.shop.planNumber;
-    if (!same) return end(trx, scope, now, { state: 'failed', failure: SAID.overtaken, at });
-    const head = draft ?? (await openDraftIn(trx, scope, at));
+    const head = same ? (draft ?? (await newDraft(trx, scope, at))) : undefined;
+    if (!head) return end(trx, scope, now, { state: 'failed', failure: SAID.overtaken, at });
     // What has begun or was withdrawn meanwhile is not the draft's business.
     const jobs = await loadOpenJobs(trx, shopId);
     const waiting = new Set(
@@ -155,7 +154,7 @@ function store(deps: Deps, { run, scope, facts, built }: Begun, plan: Plan): Pro
       bound: plan.bound ?? null,
       unplaced: readUnplaced(facts, built, plan),
     });
-    await recordChange(trx, scope, { kind: 'draft-changed', ids: [head.id] });
+    await recordChange(trx, scope, { kind: draft ? 'draft-changed' : 'draft-opened', ids: [head.id] });
     const progress = {
       cost: plan.cost,
       bound: plan.bound ?? null,
@@ -165,6 +164,12 @@ function store(deps: Deps, { run, scope, facts, built }: Begun, plan: Plan): Pro
     await changePlanRun(trx, shopId, run.id, { progress, draftId: head.id });
     await end(trx, scope, now, { state: now.stopRequested ? 'stopped' : 'done', failure: null, at });
   });
+}
+
+/** Undefined where somebody has opened one this moment. */
+async function newDraft(trx: Trx, scope: Scope, now: Date): Promise<{ id: string } | undefined> {
+  const planNumber = await findPlanNumber(trx, scope.shopId);
+  return insertDraft(trx, { ...scope, id: uuid(), planNumber, now });
 }
 
 async function end(
