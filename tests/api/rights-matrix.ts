@@ -1,0 +1,126 @@
+/**
+ * Who may do what, as data. A new route needs a row here.
+ *
+ * `may`: the door opens (the test then sends nonsense and expects to be told so, 400). A number: the door stays shut with
+ * that status. To another shop's owner and to who was put out a shop looks as if it did not exist: 404.
+ */
+export type Cell = 'may' | 401 | 403 | 404;
+export const who = [
+  'anonymous',
+  'painter',
+  'office',
+  'lead',
+  'owner',
+  'otherOwner',
+  'disabledMember',
+  'disabledAccount',
+] as const;
+export type Who = (typeof who)[number];
+export type Row = Record<Who, Cell>;
+
+const inShop = (painter: Cell, office: Cell, lead: Cell, owner: Cell): Row => ({
+  anonymous: 401,
+  painter,
+  office,
+  lead,
+  owner,
+  otherOwner: 404,
+  disabledMember: 404,
+  disabledAccount: 401,
+});
+const everyone = inShop('may', 'may', 'may', 'may');
+const planners = inShop(403, 403, 'may', 'may');
+const jobKeepers = inShop(403, 'may', 'may', 'may');
+const stageWorkers = inShop('may', 403, 'may', 'may');
+const owners = inShop(403, 403, 403, 'may');
+
+const all = (cell: Cell): Row => Object.fromEntries(who.map((one) => [one, cell])) as Row;
+const anybody = all('may');
+const signedIn: Row = { ...anybody, anonymous: 401, disabledAccount: 401 };
+
+export const rights: Readonly<Record<string, Row>> = {
+  'read-health': anybody,
+  'read-ready': anybody,
+  'sign-in': anybody,
+  'sign-out': anybody,
+  'read-session': signedIn,
+  'change-account': signedIn,
+  'change-password': signedIn,
+  'ask-for-reset': anybody,
+  'reset-password': anybody,
+  'read-invitation': anybody,
+  'accept-invitation': anybody,
+  'list-mailbox': anybody,
+  'read-mailbox-letter': anybody,
+
+  'list-members': owners,
+  invite: owners,
+  'change-member': owners,
+  'list-letters': owners,
+  live: everyone,
+
+  'list-jobs': everyone,
+  'read-job': everyone,
+  'create-job': jobKeepers,
+  'change-job': jobKeepers,
+  'withdraw-job': jobKeepers,
+  'list-sheets': everyone,
+  'list-coatings': everyone,
+
+  'read-day': everyone,
+  'open-draft': planners,
+  'drop-draft': planners,
+  'move-stage': planners,
+  'compare-draft': planners,
+  'post-draft': planners,
+  'start-plan-run': planners,
+  'read-plan-run': everyone,
+  'stop-plan-run': planners,
+
+  'read-bench': stageWorkers,
+  'start-stage': stageWorkers,
+  'finish-stage': stageWorkers,
+  'read-use': planners,
+};
+
+/** Ids of rows that the test makes in another shop; the same names stand in paths. */
+export type ForeignIds = Record<
+  'jobId' | 'stageId' | 'memberId' | 'runId' | 'sheetId' | 'placeId' | 'personId',
+  string
+>;
+
+/**
+ * For each route that takes an id beside the shop's: a request that is right but for the ids. The test sends it with another
+ * shop's ids and with ids of nothing, and the answers must be the same to the byte.
+ */
+export const withForeignIds: Readonly<Record<string, (ids: ForeignIds) => { body?: object; query?: string }>> = {
+  'change-member': () => ({ body: { disabled: true } }),
+  invite: ({ personId }) => ({ body: { email: 'new@shop.test', role: 'painter', personId } }),
+  'read-job': () => ({}),
+  'create-job': ({ sheetId }) => ({
+    body: {
+      id: '0190a0a0-0000-7000-8000-000000000001',
+      sheetId,
+      options: [],
+      parts: [{ name: 'Wing', substrate: 'steel', units: 1 }],
+      title: 'Wing',
+      vehicle: '',
+      colourNote: '',
+      notes: '',
+      releaseAt: '2026-03-10T13:00:00Z',
+      promiseAt: null,
+      weight: 1,
+      electric: false,
+      heatLimitCelsius: null,
+      heatLimitMinutes: null,
+    },
+  }),
+  'change-job': () => ({ body: { version: 1, title: 'Mine now' } }),
+  'withdraw-job': () => ({ body: { version: 1 } }),
+  'move-stage': ({ placeId }) => ({ body: { version: 1, start: '2026-03-11T13:00:00Z', placeId } }),
+  'read-plan-run': () => ({}),
+  'stop-plan-run': () => ({ body: {} }),
+  'read-bench': ({ personId }) => ({ query: `?personId=${personId}` }),
+  'start-stage': () => ({ body: { version: 1 } }),
+  'finish-stage': () => ({ body: { version: 1 } }),
+};
