@@ -11,8 +11,9 @@ export type Placer = {
   /** The way that each stage has or had last, and the place it is bound to (-1: free to choose). */
   wayOf: (Way | null)[];
   pinOf: Int32Array;
-  /** Person that each stage is bound to (-1: free to choose). */
+  /** Person and place that the search binds each stage to (-1: free to choose). */
   handOf: Int32Array;
+  spotOf: Int32Array;
   notBefore: Int32Array;
   endAtLeast: Int32Array;
   ask: Ask;
@@ -41,6 +42,7 @@ export function makePlacer(shop: Shop): Placer {
     wayOf: new Array<Way | null>(n).fill(null),
     pinOf: new Int32Array(n).fill(-1),
     handOf: new Int32Array(n).fill(-1),
+    spotOf: new Int32Array(n).fill(-1),
     notBefore: new Int32Array(n),
     endAtLeast: new Int32Array(n),
     ask: {
@@ -113,8 +115,11 @@ function tryOne(p: Placer, place: number, person: number, at: number, needEnd: n
 export function bestFit(p: Placer, at: number, needEnd: number, limit: number): boolean {
   const { ask } = p;
   const { way, stage } = ask;
-  const pin = p.pinOf[stage]!;
-  const hand = p.handOf[stage]!;
+  // The search's wishes count as far as the way knows them; a chain's place is part of the variant.
+  const spot = p.spotOf[stage]!;
+  const pin = p.pinOf[stage]! >= 0 ? p.pinOf[stage]! : spot >= 0 && way.places.includes(spot) ? spot : -1;
+  const wish = p.handOf[stage]!;
+  const hand = wish >= 0 && way.people.includes(wish) ? wish : -1;
   let bestEnd = limit;
   p.bestPlace = -1;
   let chainFrom = NEVER;

@@ -1,11 +1,11 @@
 import type { Random } from '../random.ts';
 import { attempt, type Search } from './candidate.ts';
-import { changeHands, changeWay, type Move, moveBlock, moveJob, ruinJobs } from './moves.ts';
+import { changeHands, changePlace, changeWay, type Move, moveBlock, moveJob, ruinJobs } from './moves.ts';
 
 type Choice = { move: Move; weight: number; gain: number; tries: number };
 
 export const makeChoices = (): Choice[] =>
-  [moveBlock, moveJob, ruinJobs, changeWay, changeHands].map((move) => ({ move, weight: 1, gain: 0, tries: 0 }));
+  [moveBlock, moveJob, ruinJobs, changeWay, changeHands, changePlace].map((move) => ({ move, weight: 1, gain: 0, tries: 0 }));
 
 function pickChoice(choices: readonly Choice[], random: Random): Choice {
   let at = random() * choices.reduce((sum, c) => sum + c.weight, 0);
@@ -36,11 +36,13 @@ export type Cooling = {
 export function anneal(s: Search, random: Random, cooling: Cooling): void {
   const choices = makeChoices();
   let best = s.cost;
+  let heat0 = 0;
   for (let n = 0; ; n++) {
     const share = cooling.share();
     if (share >= 1) return;
-    if (n % 200 === 199) adapt(choices);
-    const heat = cooling.hot * Math.pow(cooling.cold / cooling.hot, share);
+    if (n % 200 === 199 && (globalThis as any).T?.adapt) adapt(choices);
+    if ((globalThis as any).T?.stats && n % 3000 === 2999) { console.log(heat0.toFixed(0), s.cost, best, choices.map((c) => c.move.name + ' ' + c.tries + ' ' + (c as any).acc + ' ' + c.gain).join(', ')); for (const c of choices) { c.tries = c.gain = 0; (c as any).acc = 0; } }
+    const heat = heat0 = cooling.hot * Math.pow(cooling.cold / cooling.hot, share);
     const choice = pickChoice(choices, random);
     const from = choice.move(s, random);
     choice.tries++;
@@ -48,7 +50,8 @@ export function anneal(s: Search, random: Random, cooling: Cooling): void {
     const before = s.cost;
     const limit = before - heat * Math.log(1 - random());
     if (!attempt(s, from, limit)) continue;
-    if (s.cost !== before) choice.gain++;
+    (choice as any).acc = ((choice as any).acc ?? 0) + 1;
+    if (s.cost < before - 1e-9) choice.gain++;
     if (s.cost < best - 1e-9) {
       best = s.cost;
       cooling.onBetter();

@@ -5,7 +5,7 @@ import type { Shop } from '../engine/shop.ts';
 import { copyStage, makePlacing, type Placing } from '../engine/state.ts';
 
 /** Everything that makes a schedule again: the order of blocks, and what is chosen for them. */
-export type Genes = { order: Int32Array; choice: Int32Array; hand: Int32Array };
+export type Genes = { order: Int32Array; choice: Int32Array; hand: Int32Array; spot: Int32Array };
 
 /**
  * The schedule that the search stands on, and the candidate it tries. A candidate shares the front of the order with it:
@@ -39,6 +39,7 @@ export function makeSearch(shop: Shop, alone: Int32Array): Search {
       order: new Int32Array(blocks),
       choice: new Int32Array(blocks).fill(-1),
       hand: new Int32Array(shop.stageCount).fill(-1),
+      spot: new Int32Array(shop.stageCount).fill(-1),
     },
     heldPlacing: makePlacing(shop),
     heldPins: new Int32Array(shop.stageCount).fill(-1),
@@ -125,6 +126,7 @@ function accept(s: Search, from: number): void {
   }
   held.choice.set(d.choice);
   held.hand.set(d.handOf);
+  held.spot.set(d.spotOf);
   s.heldOut.set(d.out);
   s.heldOutStage.set(d.outStage);
   s.cost = costOf(d, s.ledger);
@@ -149,6 +151,7 @@ function settleGenes(s: Search, all: boolean): void {
   }
   d.choice.set(held.choice);
   d.handOf.set(held.hand);
+  d.spotOf.set(held.spot);
   d.out.set(s.heldOut);
   d.outStage.set(s.heldOutStage);
   for (let j = 0; j < shop.jobs.length; j++) {
@@ -171,5 +174,6 @@ export function startFrom(s: Search, order: Int32Array): void {
   if (s.cost === Infinity) s.held.order.set(order);
   s.d.choice.fill(-1);
   s.d.handOf.fill(-1);
+  s.d.spotOf.fill(-1);
   attempt(s, 0, Infinity);
 }

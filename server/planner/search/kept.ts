@@ -18,7 +18,7 @@ export function makeKept({ d, held }: Search): Kept {
   const { shop } = d;
   return {
     cost: Infinity,
-    genes: { order: held.order.slice(), choice: held.choice.slice(), hand: held.hand.slice() },
+    genes: { order: held.order.slice(), choice: held.choice.slice(), hand: held.hand.slice(), spot: held.spot.slice() },
     placing: makePlacing(shop),
     pins: new Int32Array(shop.stageCount),
     out: new Uint8Array(shop.jobs.length),
@@ -33,6 +33,7 @@ export function keepHeld(s: Search, kept: Kept): void {
   kept.genes.order.set(s.held.order);
   kept.genes.choice.set(s.held.choice);
   kept.genes.hand.set(s.held.hand);
+  kept.genes.spot.set(s.held.spot);
   for (let k = 0; k < shop.stageCount; k++) copyStage(shop, s.heldPlacing, kept.placing, k);
   kept.pins.set(s.heldPins);
   kept.out.set(s.heldOut);
@@ -52,6 +53,7 @@ export function standOn(s: Search, kept: Kept): void {
   held.order.set(kept.genes.order);
   held.choice.set(kept.genes.choice);
   held.hand.set(kept.genes.hand);
+  held.spot.set(kept.genes.spot);
   s.heldPins.set(kept.pins);
   s.heldOut.set(kept.out);
   s.heldOutStage.set(kept.outStage);

@@ -43,6 +43,7 @@ const gone = (s: Search, job: number, out: Uint8Array): void => {
     s.d.choice[id] = -1; // place and way are chosen anew
     const { first, last } = s.d.shop.blocks[id]!;
     s.d.handOf.fill(-1, first, last + 1);
+    s.d.spotOf.fill(-1, first, last + 1);
   }
 };
 
@@ -109,5 +110,16 @@ export const changeHands: Move = (s, random) => {
   const way = s.heldPlacing.way[stage];
   if (block < 0 || !way || way.people.length < 2) return -1;
   s.d.handOf[stage] = random() < 0.4 ? -1 : way.people[below(random, way.people.length)]!;
+  return s.at[block]!;
+};
+
+/** Another place for a stage, or whichever is free first. */
+export const changePlace: Move = (s, random) => {
+  const { shop } = s.d;
+  const stage = below(random, shop.stageCount);
+  const block = shop.blockOf[stage]!;
+  const way = s.heldPlacing.way[stage];
+  if (block < 0 || !way || way.stay || way.places.length < 2) return -1;
+  s.d.spotOf[stage] = random() < 0.4 ? -1 : way.places[below(random, way.places.length)]!;
   return s.at[block]!;
 };

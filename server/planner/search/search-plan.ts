@@ -109,8 +109,8 @@ function rounds(run: Run): void {
         }
         return share;
       },
-      hot: 1000,
-      cold: 1,
+      hot: (globalThis as any).T?.hot ?? 1000,
+      cold: (globalThis as any).T?.cold ?? 1,
       onBetter: () => keep(run),
     });
   }
