@@ -19,21 +19,43 @@ export type Happened = { stageId: string; personId: string | null; at: Date; kin
 export async function liveWeek(trx: Trx, shopId: string, now: Date): Promise<Happened[]> {
   const bookings = (await loadOpenBookings(trx, shopId)).filter((booking) => booking.from <= now);
   const loose = await loadsFollowed(trx, shopId, now);
-  const happened: Happened[] = [];
-  for (const booking of bookings) {
+  const facts = bookings.map((booking) => {
     const { start, end } = times(booking, loose.has(booking.loadId));
-    const done = end <= now;
-    const state = { state: done ? 'done' : 'running', version: done ? 3 : 2 };
-    await trx('stage')
-      .where({ shop_id: shopId, id: booking.stageId })
-      .update({ ...state, started_at: start, finished_at: done ? end : null });
-    await trx('booking').where({ shop_id: shopId, id: booking.id }).update(state);
-    const { stageId, personId } = booking;
-    happened.push({ stageId, personId, at: start, kind: 'stage-started' });
-    if (done) happened.push({ stageId, personId, at: end, kind: 'stage-finished' });
-  }
+    return {
+      bookingId: booking.id,
+      stageId: booking.stageId,
+      personId: booking.personId,
+      start,
+      end,
+      done: end <= now,
+    };
+  });
+  await markStages(trx, shopId, facts);
   await finishJobs(trx, shopId);
-  return happened;
+  return facts.flatMap(({ stageId, personId, start, end, done }): Happened[] => [
+    { stageId, personId, at: start, kind: 'stage-started' },
+    ...(done ? [{ stageId, personId, at: end, kind: 'stage-finished' } as const] : []),
+  ]);
+}
+
+type Fact = { bookingId: string; stageId: string; start: Date; end: Date; done: boolean };
+
+async function markStages(trx: Trx, shopId: string, facts: Fact[]): Promise<void> {
+  const given = { shopId, facts: JSON.stringify(facts) };
+  await trx.raw(
+    `update stage set state = case when f.done then 'done' else 'running' end, started_at = f.start,
+            finished_at = case when f.done then f."end" end, version = case when f.done then 3 else 2 end
+     from jsonb_to_recordset(:facts::jsonb) f ("stageId" uuid, start timestamptz, "end" timestamptz, done boolean)
+     where stage.shop_id = :shopId and stage.id = f."stageId"`,
+    given,
+  );
+  await trx.raw(
+    `update booking set state = case when f.done then 'done' else 'running' end,
+            version = case when f.done then 3 else 2 end
+     from jsonb_to_recordset(:facts::jsonb) f ("bookingId" uuid, done boolean)
+     where booking.shop_id = :shopId and booking.id = f."bookingId"`,
+    given,
+  );
 }
 
 /** Loads of which every member has a later stage that has begun by now. */

@@ -68,7 +68,7 @@ export async function findJob(trx: Trx, shopId: string, jobId: string): Promise<
 
 /** Holds the job against other writers until the transaction ends. */
 export const lockJob = (trx: Trx, shopId: string, jobId: string): Promise<{ id: string } | undefined> =>
-  trx('job').where({ shop_id: shopId, id: jobId }).forUpdate().first<{ id: string } | undefined>('id');
+  trx('job').where({ shop_id: shopId, id: jobId }).forNoKeyUpdate().first<{ id: string } | undefined>('id');
 
 /** The next job number of the shop. Numbers have no gaps: a transaction that fails gives its number back. */
 export async function takeJobNumber(trx: Trx, shopId: string): Promise<number> {
@@ -80,11 +80,6 @@ export async function takeJobNumber(trx: Trx, shopId: string): Promise<number> {
   if (!row) throw new Error(`Shop ${shopId} is gone.`);
   return row.job_number;
 }
-
-/** Holds the shop's row, so that two who send the same new job are served one after the other. */
-export const lockShop = async (trx: Trx, shopId: string): Promise<void> => {
-  await trx('shop').where({ id: shopId }).forUpdate().first('id');
-};
 
 export type NewJobRow = JobFields & {
   id: string;

@@ -94,38 +94,65 @@ export type TappedStage = {
   jobState: 'open' | 'done' | 'withdrawn';
   bookingId: string | null;
   personId: string | null;
+  loadId: string | null;
   previousId: string | null;
   previousTitle: string | null;
   previousState: StageState | null;
 };
 
+const loadOf = `
+  s.id in (
+    select :stageId::uuid
+    union
+    select b.stage_id
+    from booking own
+    join booking b on b.shop_id = own.shop_id and b.place_id = own.place_id and b.load_id = own.load_id
+      and b.during && own.during and b.state <> 'cancelled'
+    where own.shop_id = :shopId and own.stage_id = :stageId and own.state <> 'cancelled')`;
+
 /**
- * The stage and the others of its load, held together with their jobs until the transaction ends; in one order for
- * everybody, so that two taps never wait for each other.
+ * The stage and the others of its load, held together with their jobs until the transaction ends, in the order of
+ * locks.ts. Read after they are held: whoever waited sees what the one before has written.
  */
 export async function lockTapped(trx: Trx, shopId: string, stageId: string): Promise<TappedStage[]> {
-  const { rows } = await trx.raw<{ rows: TappedStage[] }>(
-    `select s.id, s.job_id as "jobId", s.title, s.version, s.state, s.started_at as "startedAt", j.state as "jobState",
-            b.id as "bookingId", b.person_id as "personId",
-            previous.id as "previousId", previous.title as "previousTitle", previous.state as "previousState"
-     from stage s
-     join job j on j.shop_id = s.shop_id and j.id = s.job_id
-     left join booking b on b.shop_id = s.shop_id and b.stage_id = s.id and b.state <> 'cancelled'
-     left join lateral (
-       select p.id, p.title, p.state from stage p
-       where p.shop_id = s.shop_id and p.job_id = s.job_id and p.position < s.position
-       order by p.position desc limit 1
-     ) previous on true
-     where s.shop_id = :shopId
-       and (s.id = :stageId or exists (
-         select from booking own
-         where own.shop_id = :shopId and own.stage_id = :stageId and own.state <> 'cancelled'
-           and own.load_id = b.load_id and own.place_id = b.place_id and own.during && b.during))
-     order by s.id
-     for update of s, j`,
-    { shopId, stageId },
-  );
-  return rows;
+  const held = await trx('stage as s')
+    .where({ 's.shop_id': shopId })
+    .whereRaw(loadOf, { shopId, stageId })
+    .orderBy('s.id')
+    .forNoKeyUpdate()
+    .select<{ id: string; job_id: string }[]>('s.id', 's.job_id');
+  await trx('job')
+    .where({ shop_id: shopId })
+    .whereIn(
+      'id',
+      held.map((stage) => stage.job_id),
+    )
+    .orderBy('id')
+    .forNoKeyUpdate()
+    .select('id');
+  const { rows } = await trx.raw<{ rows: TappedStage[] }>(TAPPED, { shopId, stageIds: held.map(({ id }) => id) });
+  const load = rows.find(({ id }) => id === stageId)?.loadId;
+  return rows.filter((stage) => stage.id === stageId || (load !== null && stage.loadId === load));
+}
+
+const TAPPED = `
+  select s.id, s.job_id as "jobId", s.title, s.version, s.state, s.started_at as "startedAt", j.state as "jobState",
+         b.id as "bookingId", b.person_id as "personId", b.load_id as "loadId",
+         previous.id as "previousId", previous.title as "previousTitle", previous.state as "previousState"
+  from stage s
+  join job j on j.shop_id = s.shop_id and j.id = s.job_id
+  left join booking b on b.shop_id = s.shop_id and b.stage_id = s.id and b.state <> 'cancelled'
+  left join lateral (
+    select p.id, p.title, p.state from stage p
+    where p.shop_id = s.shop_id and p.job_id = s.job_id and p.position < s.position
+    order by p.position desc limit 1
+  ) previous on true
+  where s.shop_id = :shopId and s.id = any (:stageIds)
+  order by s.id`;
+
+/** Holds the stages of a job, in the order of locks.ts. */
+export async function lockStagesOf(trx: Trx, shopId: string, jobId: string): Promise<void> {
+  await trx('stage').where({ shop_id: shopId, job_id: jobId }).orderBy('id').forNoKeyUpdate().select('id');
 }
 
 export async function markStarted(trx: Trx, shopId: string, stageIds: string[], at: Date): Promise<void> {

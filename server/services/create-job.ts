@@ -5,7 +5,8 @@ import type { Job, newJob } from '#contracts/jobs.ts';
 import type { Sheet } from '#contracts/sheets.ts';
 import { recordChange } from '../db/changes.ts';
 import { inShop, type Trx } from '../db/in-shop.ts';
-import { askedFor, findJob, insertJob, lockShop, takeJobNumber } from '../db/jobs.ts';
+import { askedFor, findJob, insertJob, takeJobNumber } from '../db/jobs.ts';
+import { lockShop } from '../db/locks.ts';
 import { findSheet } from '../db/sheets.ts';
 import { insertStages } from '../db/stages.ts';
 import type { Deps } from '../deps.ts';
@@ -22,6 +23,7 @@ export type NewJobInput = z.output<typeof newJob>;
  */
 export function createJob(deps: Deps, actor: Actor, input: NewJobInput): Promise<Job> {
   return inShop(deps.db, actor, async (trx) => {
+    // Two who send the same new job are served one after the other.
     await lockShop(trx, actor.shopId);
     if (!(await wasMade(trx, actor.shopId, input))) await makeJob(trx, actor, input);
     return jobInShop(trx, actor.shopId, input.id, deps.now());

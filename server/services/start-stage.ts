@@ -1,6 +1,7 @@
 import { recordChange } from '../db/changes.ts';
 import { inShop } from '../db/in-shop.ts';
 import { markStarted, type TappedStage } from '../db/stages.ts';
+import { tryAgain } from '../db/try-again.ts';
 import type { Deps } from '../deps.ts';
 import type { Actor } from '../policies.ts';
 import { lockForTap, refuseStale, tapRefused } from './tap-stage.ts';
@@ -11,21 +12,23 @@ import { lockForTap, refuseStale, tapRefused } from './tap-stage.ts';
  * @throws {Refusal} not-found, forbidden, stale, or refused with what is in the way.
  */
 export function startStage(deps: Deps, actor: Actor, stageId: string, version: number): Promise<{ version: number }> {
-  return inShop(deps.db, actor, async (trx) => {
-    const { stage, load } = await lockForTap(trx, actor, stageId);
-    if (stage.state !== 'waiting') return { version: stage.version };
-    refuseStale(stage, version);
-    refuseUnready(stage);
-    const started = load.filter(isReady);
-    const ids = started.map((member) => member.id);
-    await markStarted(trx, actor.shopId, ids, deps.now());
-    await recordChange(trx, actor, {
-      kind: 'stage-started',
-      ids: [...ids, ...new Set(started.map((member) => member.jobId))],
-      detail: { stages: started.map((member) => member.title) },
-    });
-    return { version: stage.version + 1 };
-  });
+  return tryAgain(() =>
+    inShop(deps.db, actor, async (trx) => {
+      const { stage, load } = await lockForTap(trx, actor, stageId);
+      if (stage.state !== 'waiting') return { version: stage.version };
+      refuseStale(stage, version);
+      refuseUnready(stage);
+      const started = load.filter(isReady);
+      const ids = started.map((member) => member.id);
+      await markStarted(trx, actor.shopId, ids, deps.now());
+      await recordChange(trx, actor, {
+        kind: 'stage-started',
+        ids: [...ids, ...new Set(started.map((member) => member.jobId))],
+        detail: { stages: started.map((member) => member.title) },
+      });
+      return { version: stage.version + 1 };
+    }),
+  );
 }
 
 const isReady = (stage: TappedStage): boolean =>
