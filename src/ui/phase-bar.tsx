@@ -1,5 +1,6 @@
 import { cx } from '#src/lib/cx.ts';
 import { phaseWords, type PieceKind } from '#src/lib/phase-words.ts';
+import { phaseClass } from './phase-class.ts';
 
 type Piece = { kind: PieceKind; /** Any unit, the same for all pieces. */ size: number };
 type PhaseBarProps = {
@@ -13,18 +14,6 @@ type PhaseBarProps = {
 };
 
 const heights = { line: 'h-2', row: 'h-6', bay: 'h-12' };
-const drawn: Record<PieceKind, string> = {
-  setup: 'phase-setup',
-  work: 'phase-work',
-  spray: 'phase-spray',
-  flash: 'phase-flash',
-  purge: 'phase-purge',
-  bake: 'phase-bake',
-  cool: 'phase-cool',
-  held: 'phase-held',
-  free: '',
-};
-
 /** Phases side by side like coats in a film, each as wide as it lasts. */
 export function PhaseBar({ pieces, label, now = null, height = 'row', className }: PhaseBarProps) {
   const spoken = label === undefined ? { 'aria-hidden': true } : { role: 'img', 'aria-label': label };
@@ -35,7 +24,7 @@ export function PhaseBar({ pieces, label, now = null, height = 'row', className 
           // A hair between two pieces, so that two coats of one kind do not run into each other.
           <i
             key={i}
-            className={cx('h-full min-w-0.5 border-surface', i > 0 && 'border-l', drawn[piece.kind])}
+            className={cx('h-full min-w-0.5 border-surface', i > 0 && 'border-l', phaseClass[piece.kind])}
             style={{ flex: `${piece.size} 0 0` }}
           />
         ))}
@@ -54,7 +43,7 @@ export function PhaseBar({ pieces, label, now = null, height = 'row', className 
 export const PhaseSwatch = ({ kind, className }: { kind: PieceKind; className?: string }) => (
   <i
     aria-hidden="true"
-    className={cx('inline-block h-3.5 w-6 shrink-0 rounded-sm border border-edge', drawn[kind], className)}
+    className={cx('inline-block h-3.5 w-6 shrink-0 rounded-sm border border-edge', phaseClass[kind], className)}
   />
 );
 

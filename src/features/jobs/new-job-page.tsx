@@ -1,4 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
+import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import { v7 } from 'uuid';
 import { paths } from '#src/app/paths.ts';
@@ -36,7 +37,8 @@ const BackToJobs = () => (
 function FromSheets({ shopId }: { shopId: string }) {
   const formats = useFormats();
   const sheets = useQuery(sheetsQuery(shopId));
-  const draft = useLocalDraft(`new-job.${shopId}`, null, isJobForm);
+  const [empty] = useState(() => emptyForm(v7(), Date.now(), formats));
+  const draft = useLocalDraft(`new-job.${shopId}`, empty, isJobForm);
   if (sheets.data === undefined) {
     if (!sheets.error) return <FormToCome />;
     return (
@@ -57,7 +59,7 @@ function FromSheets({ shopId }: { shopId: string }) {
   return (
     <NewJobForm
       sheets={sheets.data.sheets}
-      start={draft.start ?? emptyForm(v7(), Date.now(), formats)}
+      start={draft.start}
       wasKept={draft.wasKept}
       keep={draft.keep}
       drop={draft.drop}

@@ -4,17 +4,6 @@ import type { PlaceUse } from '#contracts/use.ts';
 export const doings = ['spray', 'bake', 'purge', 'flash', 'cool', 'work', 'setup', 'held'] as const;
 export type Doing = (typeof doings)[number];
 
-export const doingWords: Record<Doing, string> = {
-  spray: 'Spray',
-  bake: 'Bake',
-  purge: 'Purge',
-  flash: 'Flash',
-  cool: 'Cool',
-  work: 'Hand work',
-  setup: 'Set-up',
-  held: 'Held, idle',
-};
-
 export type Figures = {
   hours: Record<Doing, number>;
   /** All that something was done, open hours or not. */
