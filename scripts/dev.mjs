@@ -39,6 +39,7 @@ async function dev() {
   const ownerUrl = env['DATABASE_OWNER_URL'] ?? '';
   await house.runOnce('Bringing the database up to date', once('migrate'), env);
   if (hasEntry('seed') && (await isEmpty(ownerUrl))) {
+    process.stdout.write('Putting in the demo shop ...\n');
     await house.runOnce('Putting in the demo shop', once('seed'), env);
     rememberDemo(dataDir, ownerUrl);
   }

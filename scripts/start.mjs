@@ -21,6 +21,7 @@ async function start() {
   const ownerUrl = env['DATABASE_OWNER_URL'] ?? '';
   await house.runOnce('Bringing the database up to date', command('migrate'), env);
   if (hasEntry('seed') && (await isEmpty(ownerUrl))) {
+    process.stdout.write('Putting in the demo shop ...\n');
     await house.runOnce('Putting in the demo shop', command('seed'), env);
     rememberDemo(dataDir, ownerUrl);
   }

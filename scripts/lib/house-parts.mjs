@@ -77,7 +77,7 @@ async function readyPort(child) {
  * @param {string} address @param {House} house
  */
 export async function untilHealthy(address, house) {
-  const end = Date.now() + 60_000;
+  const end = Date.now() + 180_000;
   while (!house.isClosing()) {
     const answer = await fetch(`${address}/api/health`).catch(() => undefined);
     if (answer?.status === 200) return;

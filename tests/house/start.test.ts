@@ -55,7 +55,7 @@ async function stop({ child, ended }: Run): Promise<number | null> {
 describe('npm start', () => {
   test(
     'brings up everything from nothing, stops it on SIGTERM, and finds its data again',
-    { timeout: 180_000 },
+    { timeout: 600_000 },
     async () => {
       const port = String(await freePort());
       const first = start({ PORT: port });
