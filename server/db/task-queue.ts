@@ -13,11 +13,11 @@ export type Task = {
 
 /**
  * Chooses a due task and counts the attempt at once, in a transaction of its own: a task that kills its worker each time
- * is given up in the end.
+ * is given up in the end. Nobody else chooses it in the three seconds that `holdTask` has to take its row.
  */
 export async function beginTask(db: Knex, kinds: readonly TaskKind[]): Promise<Task | undefined> {
   const { rows } = await db.raw<{ rows: Task[] }>(
-    `update task set attempts = attempts + 1
+    `update task set attempts = attempts + 1, run_at = now() + interval '3 seconds'
      where id = (
        select id from task
        where kind = any(?) and done_at is null and dead_at is null and run_at <= now()

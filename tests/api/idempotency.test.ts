@@ -125,7 +125,9 @@ describe('a crash between the effect and its record', () => {
         await trx('shop').where({ id: owner.shopId }).update({ name: 'Undone' });
         await trx.raw('select 1 / 0');
       }).catch(() => undefined);
-      return inShop(app.deps.db, actor(), (trx) => trx('shop').where({ id: owner.shopId }).first('name'));
+      return inShop(app.deps.db, actor(), async (trx) =>
+        trx('shop').where({ id: owner.shopId }).first<{ name: string }>('name'),
+      );
     });
     expect(done).toEqual({ name: 'Kept' });
   });
