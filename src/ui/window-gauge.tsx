@@ -50,11 +50,15 @@ export function windowWords(window: WindowGaugeProps['window'], start: string, f
   return `Window ${ends.filter(Boolean).join(' ') || 'open'}, starts ${near(start)}${verdict}`;
 }
 
+const hour = 3_600_000;
+
 /** Percent of the width for both ends of the window and the start; all of them are in sight. */
 function placed({ earliest, latest }: WindowGaugeProps['window'], start: string) {
   const at = Date.parse(start);
-  const from = earliest === null ? at : Date.parse(earliest);
-  const to = latest === null ? at : Date.parse(latest);
+  // An open end goes on for as long as the known side is, so that the start does not seem to be at the last minute.
+  const beyond = Math.max(hour, at - Date.parse(earliest ?? start), Date.parse(latest ?? start) - at);
+  const from = earliest === null ? at - beyond : Date.parse(earliest);
+  const to = latest === null ? at + beyond : Date.parse(latest);
   const low = Math.min(from, to, at);
   const length = Math.max(from, to, at) - low || 1;
   const percent = (ms: number) => 2 + ((ms - low) / length) * 96;

@@ -34,6 +34,7 @@ export function BenchView({ data, arrivedAt }: { data: View; arrivedAt: number }
       {data.stages.length === 0 && <NothingBooked view={data} isToday={isToday} />}
       <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
         <div className="flex min-w-0 flex-col gap-5">
+          {list.done.length > 0 && !list.next && list.now.length === 0 && <AllDone isToday={isToday} />}
           {list.now.map((stage) => (
             <RunningStage key={stage.id} stage={stage} now={now} waiting={waitFor(stage.id)} onTap={onTap} />
           ))}
@@ -55,6 +56,14 @@ export function BenchView({ data, arrivedAt }: { data: View; arrivedAt: number }
     </div>
   );
 }
+
+const AllDone = ({ isToday }: { isToday: boolean }) => (
+  <div className="card">
+    <EmptyState title={isToday ? 'All done for today' : 'All of this day was done'}>
+      If something new is posted for this bench, it appears here by itself.
+    </EmptyState>
+  </div>
+);
 
 function NothingBooked({ view, isToday }: { view: View; isToday: boolean }) {
   if (view.person === null)

@@ -1,5 +1,4 @@
 import { phaseWords } from '#src/lib/phase-words.ts';
-import { PhaseSwatch } from '#src/ui/phase-bar.tsx';
 import { Table, Td, Th } from '#src/ui/table.tsx';
 import { doings, hoursText, shareText, type Figures } from './model/shares.ts';
 import type { Group } from './report.tsx';
@@ -13,10 +12,7 @@ export function UseTable({ groups }: { groups: readonly Group[] }) {
           <Th>Place</Th>
           {doings.map((doing) => (
             <Th key={doing} number>
-              <span className="inline-flex items-center gap-1.5">
-                <PhaseSwatch kind={doing} className="w-4" />
-                <span className="inline-block first-letter:uppercase">{phaseWords[doing]}</span>
-              </span>
+              <span className="inline-block first-letter:uppercase">{phaseWords[doing]}</span>
             </Th>
           ))}
           <Th number>Open</Th>
@@ -53,7 +49,9 @@ function Row({ name, figures, isSum }: RowProps) {
       ))}
       <Td number>{hoursText(open)}</Td>
       <Td number>{hoursText(free)}</Td>
-      <Td number>{shareText(share)}</Td>
+      <Td number className="whitespace-nowrap">
+        {shareText(share)}
+      </Td>
       <Td number className="whitespace-nowrap">
         {recorded} of {bookings}
       </Td>

@@ -1,6 +1,7 @@
 import { Check, Pin, Play } from 'lucide-react';
 import type { JobStage } from '#contracts/jobs.ts';
 import { cx } from '#src/lib/cx.ts';
+import { formatNearDay } from '#src/lib/formats.ts';
 import { phasesInWords } from '#src/lib/phase-words.ts';
 import { useFormats } from '#src/lib/session.ts';
 import { PhaseBar } from '#src/ui/phase-bar.tsx';
@@ -28,7 +29,7 @@ export function StageItem({ stage, isLast, isWithdrawn }: StageItemProps) {
           <span className="figures shrink-0 text-muted">{duration(minutes)}</span>
         </div>
         <Booked stage={stage} isWithdrawn={isWithdrawn} />
-        <PhaseBar pieces={pieces} label={words} className={cx(stage.state === 'done' && 'opacity-55')} />
+        <PhaseBar pieces={pieces} label={words} height={stage.state === 'done' ? 'line' : 'row'} />
         <Happened stage={stage} />
         {stage.state === 'waiting' && <Window stage={stage} />}
         {stage.state === 'waiting' && <WaysOnOffer ways={stage.ways} chosen={stage.booking?.way ?? null} />}
@@ -66,15 +67,14 @@ function Knot({ state, isLast }: { state: JobStage['state']; isLast: boolean }) 
 }
 
 function Booked({ stage, isWithdrawn }: { stage: JobStage; isWithdrawn: boolean }) {
-  const { span, dayOf, today, date } = useFormats();
+  const { span, dayOf, today } = useFormats();
   const { booking } = stage;
   if (!booking) return <p className="text-muted">{isWithdrawn ? 'Not booked any more' : 'Not planned yet'}</p>;
-  const day = dayOf(booking.from) === today() ? 'today' : date(booking.from);
   const who = booking.personName ?? (booking.personId === null ? null : 'nobody yet');
   return (
     <p className="flex flex-wrap items-center gap-x-2">
       <span className="figures font-semibold">
-        {day} {span(booking.from, booking.to)}
+        {formatNearDay(dayOf(booking.from), today())} {span(booking.from, booking.to)}
       </span>
       <span className="text-muted">
         {[booking.placeName, who, ...booking.lampNames, booking.wayLabel].filter(Boolean).join(' · ')}

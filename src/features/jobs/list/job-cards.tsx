@@ -46,7 +46,7 @@ export function JobCards({ rows, sort, onSort }: JobCardsProps) {
             <StageSteps done={row.stagesDone} total={row.stagesTotal} />
             <dl className="grid grid-cols-2 gap-3">
               <div>
-                <dt className="text-xs text-muted">Next</dt>
+                <dt className="text-xs text-muted">Now or next</dt>
                 <dd>
                   <NextCell row={row} />
                 </dd>

@@ -24,7 +24,7 @@ export function JobsTable({ rows, sort, onSort }: JobsTableProps) {
           {head('title', 'Job')}
           <Th>State</Th>
           <Th>Stages</Th>
-          <Th>Next</Th>
+          <Th>Now or next</Th>
           {head('release', 'Arrives')}
           {head('promise', 'Promise')}
         </tr>
