@@ -47,9 +47,7 @@ async function putInDemo(trx: Trx, calendar: DemoCalendar): Promise<void> {
   await putInShop(trx, demoShopId, calendar);
   await putInAccounts(trx, demoShopId);
   const postedAt = calendar.at(-3, '06:30');
-  const history: Line[] = [
-    { at: postedAt, accountId: accountOf('Orlin'), kind: 'plan-posted', ids: [demoId('plan', '1')] },
-  ];
+  const history: Line[] = [];
   const enter = async (fates: string[]): Promise<void> => {
     for (const seed of jobs.filter(({ fate }) => fates.includes(fate))) {
       const at = enteredAt(seed, calendar, postedAt);
@@ -58,7 +56,14 @@ async function putInDemo(trx: Trx, calendar: DemoCalendar): Promise<void> {
     }
   };
   await enter(['planned', 'withdrawn']);
-  await postWeek(trx, demoShopId, postedAt);
+  const { stageIds } = await postWeek(trx, demoShopId, postedAt);
+  history.push({
+    at: postedAt,
+    accountId: accountOf('Orlin'),
+    kind: 'plan-posted',
+    ids: [demoId('plan', '1'), ...stageIds],
+    detail: { planNumber: 1, changed: stageIds.length },
+  });
   await enter(['new']);
   history.push(...(await withdraw(trx, calendar)), ...(await happen(trx, calendar.now)));
   await takeResources(trx, demoShopId, calendar.now);

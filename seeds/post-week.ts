@@ -12,7 +12,7 @@ import { accountOf } from './put-in-accounts.ts';
 const EVALUATIONS = 400;
 
 /** Lets the planner plan what is there, as of `at`, and posts it as plan 1. */
-export async function postWeek(trx: Trx, shopId: string, at: Date): Promise<void> {
+export async function postWeek(trx: Trx, shopId: string, at: Date): Promise<{ stageIds: string[] }> {
   const facts = await loadFacts(trx, shopId, at);
   const built = problemToPlan(facts, 'all', 0);
   const made = plan(built.problem, { seed: 1, evaluations: EVALUATIONS });
@@ -28,6 +28,7 @@ export async function postWeek(trx: Trx, shopId: string, at: Date): Promise<void
     at,
     accountId: accountOf('Orlin'),
     cost: made.cost,
-    body: bookings,
+    body: { bookings },
   });
+  return { stageIds: bookings.map(({ stageId }) => stageId) };
 }
