@@ -50,7 +50,7 @@ export function AccountMenu() {
         </MenuItem>
       ))}
       <MenuLine />
-      <MenuChoice label="Light" value={theme} onChange={chooseTheme} options={themes} />
+      <MenuChoice label="Theme" value={theme} onChange={chooseTheme} options={themes} />
       <MenuLine />
       <MenuItem icon={<LogOut size={16} className="text-muted" aria-hidden="true" />} onSelect={() => signOut.mutate()}>
         Sign out

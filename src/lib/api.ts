@@ -20,7 +20,7 @@ export type CallInput<E extends Endpoint> = Given<'params', z.input<E['params']>
 /**
  * The only fetch of the program.
  * @throws {ApiError} for every answer that is no success, and for none at all
- * @throws {DOMException} AbortError where `signal` was used
+ * @throws the signal's reason where it was used to stop the call
  */
 export async function call<E extends Endpoint>(endpoint: E, input: CallInput<E>): Promise<ReplyOf<E>> {
   const { signal, key, ...parts } = input;
@@ -67,7 +67,7 @@ async function send(address: string, init: RequestInit): Promise<Response> {
     reached(true);
     return response;
   } catch (error) {
-    if (error instanceof DOMException && error.name === 'AbortError') throw error;
+    if (init.signal?.aborted) throw error;
     reached(false);
     throw new ApiError('unreachable');
   }

@@ -1,6 +1,6 @@
 import { X } from 'lucide-react';
 import { Dialog as Radix } from 'radix-ui';
-import type { ReactNode } from 'react';
+import { useRef, type ReactNode } from 'react';
 import { cx } from '#src/lib/cx.ts';
 import { Button } from './button.tsx';
 
@@ -25,12 +25,21 @@ const shapes = {
 };
 
 export function Dialog({ open, onOpenChange, title, about, children, actions, shape = 'box' }: DialogProps) {
+  const cameFrom = useRef<Element | null>(null);
   return (
     <Radix.Root open={open} onOpenChange={onOpenChange}>
       <Radix.Portal>
         <Radix.Overlay className="fixed inset-0 z-40 bg-veil" />
         <Radix.Content
           {...(about ? {} : { 'aria-describedby': undefined })}
+          onOpenAutoFocus={() => {
+            cameFrom.current = document.activeElement;
+          }}
+          onCloseAutoFocus={(event) => {
+            // Without a trigger of its own the library would let the focus fall to the page's top.
+            event.preventDefault();
+            giveBackFocus(cameFrom.current);
+          }}
           className={cx(
             'rise fixed z-40 flex max-h-[88dvh] flex-col bg-surface shadow-float focus:outline-none',
             shape === 'panel' && 'sm:max-h-none',
@@ -59,6 +68,12 @@ export function Dialog({ open, onOpenChange, title, about, children, actions, sh
       </Radix.Portal>
     </Radix.Root>
   );
+}
+
+function giveBackFocus(to: Element | null): void {
+  // What had it may be gone, such as a menu's item or a row that was removed.
+  const target = to?.isConnected && to !== document.body ? to : document.getElementById('page');
+  if (target instanceof HTMLElement || target instanceof SVGElement) target.focus({ preventScroll: true });
 }
 
 type ConfirmProps = {

@@ -58,5 +58,5 @@ export function Field({
 export const boxClasses = cx(
   'w-full min-h-control rounded border border-edge bg-surface px-3 text-ink placeholder:text-muted',
   'aria-invalid:border-crimson aria-invalid:bg-crimson-soft disabled:cursor-not-allowed disabled:opacity-60',
-  'read-only:bg-paper max-sm:text-base',
+  '[&:is(input,textarea):read-only]:bg-paper max-sm:text-base',
 );

@@ -47,7 +47,7 @@ export function Component() {
             value={asked.temperatureUnit ?? account.temperatureUnit}
             onChange={(temperatureUnit) => change.mutate({ temperatureUnit })}
           />
-          <Choice label="Light (in this browser)" options={themes} value={theme} onChange={chooseTheme} />
+          <Choice label="Theme of this browser" options={themes} value={theme} onChange={chooseTheme} />
         </div>
         {change.isError && <ErrorNote error={change.error} what="The choice could not be kept." />}
       </Section>
