@@ -4,6 +4,7 @@ import type { Formats } from '#src/lib/formats.ts';
 import { hoursWorthShowing, type Axis } from './model/axis.ts';
 import { boardOf, type Drawn } from './model/board.ts';
 import type { SpanKind } from './model/day-range.ts';
+import { keepSame } from './model/keep-same.ts';
 import { describe, type Say } from './model/describe.ts';
 import type { Hint } from './model/landing.ts';
 import type { BoardContextValue } from './timeline/board-context.ts';
@@ -21,12 +22,16 @@ export function useAxis(view: DayView | undefined, days: string[], kind: SpanKin
   return useSame({ zone, days, ...hours });
 }
 
-export function useBoardItems(view: DayView | undefined, axis: Axis, people: boolean): Drawn[] {
-  return useMemo(() => {
-    if (!view) return [];
-    const board = boardOf(view, axis);
+export function useBoardItems(view: DayView | undefined, axis: Axis, people: boolean): readonly Drawn[] {
+  const next = useMemo(() => {
+    const board = view ? boardOf(view, axis) : [];
     return people ? board : board.filter((item) => item.kind !== 'hands');
   }, [view, axis, people]);
+  const [shown, show] = useState<{ of: readonly Drawn[]; items: readonly Drawn[] }>({ of: next, items: next });
+  if (shown.of === next) return shown.items;
+  const items = keepSame(shown.items, next);
+  show({ of: next, items });
+  return items;
 }
 
 /** What bars ask their board for; made anew only when a name or the reader's clock changes. */

@@ -7,9 +7,12 @@ export type Told = Map<string, Drawn | ClosedTime>;
 
 const isDrawn = (thing: Drawn | ClosedTime): thing is Drawn => 'shape' in thing;
 
+// Each single change is worked out against all events there are: beyond this many, once for all is quicker.
+const manyChanges = 40;
+
 /**
- * Tells the timeline only what differs from what it was told before. Handing it a new list instead would make it throw
- * away and draw again every bar of the day for one that moved.
+ * Tells the timeline what differs from what it was told before. Handing it a new list each time instead would make it
+ * throw away and draw again every bar of the day for one that moved.
  */
 export function syncEvents(
   api: CalendarApi,
@@ -18,15 +21,28 @@ export function syncEvents(
   movable: boolean,
 ): Told {
   const now: Told = new Map(next.map((thing) => [thing.id, thing]));
+  const gone = [...told.keys()].filter((id) => !now.has(id));
+  const changed = next.filter((thing) => !isTold(told.get(thing.id), thing));
   api.batchRendering(() => {
-    for (const id of told.keys()) if (!now.has(id)) api.getEventById(id)?.remove();
-    for (const thing of next) {
+    if (told.size === 0 || gone.length + changed.length > manyChanges) return tellAll(api, next, movable);
+    for (const id of gone) api.getEventById(id)?.remove();
+    for (const thing of changed) {
       const before = told.get(thing.id);
-      if (!before) api.addEvent(inputOf(thing, movable));
-      else if (before !== thing) change(api, before, thing, movable);
+      if (before) change(api, before, thing, movable);
+      else api.addEvent(inputOf(thing, movable));
     }
   });
   return now;
+}
+
+// Bars keep their object while they say the same (see model/keep-same.ts); closed times are made anew.
+const isTold = (before: Drawn | ClosedTime | undefined, thing: Drawn | ClosedTime): boolean =>
+  before === thing || (!isDrawn(thing) && JSON.stringify(before) === JSON.stringify(thing));
+
+function tellAll(api: CalendarApi, things: readonly (Drawn | ClosedTime)[], movable: boolean): void {
+  api.removeAllEvents();
+  api.removeAllEventSources();
+  api.addEventSource(things.map((thing) => inputOf(thing, movable)));
 }
 
 function inputOf(thing: Drawn | ClosedTime, movable: boolean) {

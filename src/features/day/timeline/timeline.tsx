@@ -2,7 +2,7 @@ import interaction from '@fullcalendar/interaction';
 import luxon from '@fullcalendar/luxon3';
 import FullCalendar from '@fullcalendar/react';
 import resourceTimeline from '@fullcalendar/resource-timeline';
-import { memo, useMemo, useRef } from 'react';
+import { memo, useRef } from 'react';
 import type { Drawn } from '../model/board.ts';
 import { closedTimes } from '../model/closed-times.ts';
 import { addDays } from '#src/lib/wall-clock.ts';
@@ -46,7 +46,7 @@ export const Timeline = memo(function Timeline(props: TimelineProps) {
   const width = useWidth(frame, calendar);
   const rows = useSame(rowsOf(view, people));
   const scale = scaleOf(axis, Math.max(320, width - rowNamesWidth), zoom);
-  const closed = useMemo(() => closedTimes(view), [view]);
+  const closed = useSame(closedTimes(view));
   const first = axis.days[0] ?? '';
   const range = useSame({ start: first, end: addDays(axis.days.at(-1) ?? first, 1) });
   useTimelineEvents(calendar, board, closed, movable);

@@ -1,4 +1,5 @@
 import { useEffect, useRef, type RefObject } from 'react';
+import type { CalendarApi } from '@fullcalendar/core';
 import type FullCalendar from '@fullcalendar/react';
 import type { Drawn } from '../model/board.ts';
 import type { ClosedTime } from '../model/closed-times.ts';
@@ -11,23 +12,17 @@ export function useTimelineEvents(
   closed: readonly ClosedTime[],
   movable: boolean,
 ): void {
-  const told = useRef<{ by: FullCalendar | null; movable: boolean; things: Told }>({
+  const told = useRef<{ by: CalendarApi | null; movable: boolean; things: Told }>({
     by: null,
     movable,
     things: new Map(),
   });
   useEffect(() => {
-    const by = calendar.current;
+    const by = calendar.current?.getApi();
     if (!by) return;
     // A calendar made anew (or new rights) has been told nothing.
     const afresh = told.current.by !== by || told.current.movable !== movable;
-    if (afresh) by.getApi().removeAllEvents();
-    const things = syncEvents(
-      by.getApi(),
-      afresh ? new Map<string, never>() : told.current.things,
-      [...board, ...closed],
-      movable,
-    );
-    told.current = { by, movable, things };
+    const before: Told = afresh ? new Map() : told.current.things;
+    told.current = { by, movable, things: syncEvents(by, before, [...board, ...closed], movable) };
   }, [calendar, board, closed, movable]);
 }
