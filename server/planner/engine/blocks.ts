@@ -67,7 +67,9 @@ function withPins(shop: Shop, ways: Way[]): Variant[] {
     const heads = !way.stay && ways[k + 1]?.stay ? placesForChain(shop, ways, k) : [-1];
     pinned = pinned.flatMap((pins) => heads.map((p) => [...pins, p]));
   });
-  return pinned.map((pins) => ({ ways, pins: Int32Array.from(pins) }));
+  const rest = new Int32Array(ways.length);
+  for (let k = ways.length - 2; k >= 0; k--) rest[k] = rest[k + 1]! + ways[k + 1]!.gapMin + ways[k + 1]!.minutes;
+  return pinned.map((pins) => ({ ways, pins: Int32Array.from(pins), rest }));
 }
 
 function placesForChain(shop: Shop, ways: readonly Way[], head: number): number[] {

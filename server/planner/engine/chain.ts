@@ -37,7 +37,8 @@ export function placeChain(p: Placer, block: Block, variant: Variant, limit: num
   let s = block.first;
   for (let steps = 0; s <= block.last; steps++) {
     if (steps > MOST_STEPS) return s;
-    const back = placeStage(p, block, s, s === block.last ? limit : NEVER);
+    const inBlock = s - block.first;
+    const back = placeStage(p, block, s, inBlock < 0 || limit >= NEVER ? NEVER : limit - variant.rest[inBlock]!);
     if (back === s + 1) s = back;
     else if (back < floor) return s;
     else {
@@ -99,7 +100,7 @@ function placeStage(p: Placer, block: Block, s: number, limit: number): number {
     const latest = at.start[deadline]! - onward.gapMax;
     if (latest > p.endAtLeast[s]!) p.endAtLeast[s] = latest;
   }
-  let from = Math.max(shop.now, p.notBefore[s]!, before ? at.end[s - 1]! + way.gapMin : job.release);
+  let from = Math.max(shop.now, p.notBefore[s]!, p.wishOf[s]!, before ? at.end[s - 1]! + way.gapMin : job.release);
   if (way.rigid) from = Math.max(from, p.endAtLeast[s]! - way.minutes);
   if (!bestFit(p, from, p.endAtLeast[s]!, limit)) return p.best.chainFrom >= 0 ? chainBack(p, s, p.best.chainFrom) : -1;
   const tooLate = before ? p.best.start - at.end[s - 1]! - way.gapMax : 0;

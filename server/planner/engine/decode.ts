@@ -31,21 +31,28 @@ function leaveOut(d: Decoder, job: number, stage: number): void {
   d.outStage[job] = stage;
 }
 
-/** Places the next block of a job, or leaves the job out. Blocks of one job come in their order. */
-export function decodeBlock(d: Decoder, id: number): void {
+/** What became of a block: it stands, its job found no room and is out, or it cannot end before the limit. */
+export const STANDS = 0;
+export const IS_OUT = 1;
+export const TOO_LATE = 2;
+
+/** Places the next block of a job so that it ends before `limit`; NEVER: where there is no room, the job is left out. */
+export function decodeBlock(d: Decoder, id: number, limit: number): number {
   const block = d.shop.blocks[id]!;
-  if (d.out[block.job]) return;
   const floor = lowest(d, block);
   const chosen = d.choice[id]!;
   const variant = chosen >= 0 ? block.variants[chosen] : undefined;
-  if (variant && block.variants.length > 1) {
-    // Two tries: the variant as chosen, and any, if that one does not fit here.
+  if (variant) {
     keepBefore(d, block, floor);
-    if (placeChain(d, block, variant, NEVER) < 0) return;
+    if (placeChain(d, block, variant, limit) < 0) return STANDS;
+    if (limit < NEVER) return TOO_LATE;
     putBack(d, block, floor);
   }
-  const failed = placeBest(d, block, floor);
-  if (failed >= 0) leaveOut(d, block.job, failed);
+  const failed = placeBest(d, block, floor, limit);
+  if (failed < 0) return STANDS;
+  if (limit < NEVER) return TOO_LATE;
+  leaveOut(d, block.job, failed);
+  return IS_OUT;
 }
 
 /** Minutes of booth that the placed stages of a block take. */
@@ -58,16 +65,16 @@ function boothMinutes(d: Decoder, block: Block): number {
 }
 
 /** Tries each variant; the earliest end wins, of equals the one that takes less booth. Returns the stage without room, or -1. */
-function placeBest(d: Decoder, block: Block, floor: number): number {
+function placeBest(d: Decoder, block: Block, floor: number, limit: number): number {
   if (block.variants.length === 0) return firstImpossible(d.shop, block);
   const only = block.variants.length === 1;
   let best = -1;
-  let bestEnd = NEVER;
+  let bestEnd = limit - 1;
   let bestBooth = 0;
   let failed = block.first;
   keepBefore(d, block, floor);
   for (let v = 0; v < block.variants.length; v++) {
-    const stuck = placeChain(d, block, block.variants[v]!, bestEnd < NEVER ? bestEnd + 1 : NEVER);
+    const stuck = placeChain(d, block, block.variants[v]!, limit >= NEVER && best < 0 ? NEVER : bestEnd + 1);
     if (only && stuck < 0) {
       d.choice[block.id] = 0;
       return -1;
@@ -76,7 +83,7 @@ function placeBest(d: Decoder, block: Block, floor: number): number {
     else {
       const end = d.state.at.end[block.last]!;
       const booth = boothMinutes(d, block);
-      if (end < bestEnd || booth < bestBooth) {
+      if (best < 0 || end < bestEnd || booth < bestBooth) {
         best = v;
         bestEnd = end;
         bestBooth = booth;

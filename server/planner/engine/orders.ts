@@ -1,3 +1,4 @@
+import { NEVER } from './calendar.ts';
 import type { Shop } from './shop.ts';
 
 /** Job orders to begin with, each by a rule of thumb: due date, slack, weighted due date, release, and work content. */
@@ -31,3 +32,14 @@ export function runningFirst(shop: Shop, order: readonly number[]): number[] {
 
 export const blocksInOrder = (shop: Shop, jobs: readonly number[]): Int32Array =>
   Int32Array.from(jobs.flatMap((j) => shop.jobs[j]!.blocks));
+
+/** Blocks in the order of the published plan; what it does not know comes last, by due date. */
+export function publishedOrder(shop: Shop): Int32Array {
+  const start = shop.blocks.map(({ first }) => (shop.basePlace[first]! >= 0 ? shop.baseStart[first]! : NEVER));
+  const due = (id: number): number => shop.jobs[shop.blocks[id]!.job]!.due;
+  // A job's blocks keep their order even where the published plan knows only some of them.
+  shop.jobs.forEach(({ blocks }) =>
+    blocks.slice(1).forEach((id, k) => (start[id] = Math.max(start[id]!, start[blocks[k]!]!))),
+  );
+  return Int32Array.from(shop.blocks.keys()).sort((x, y) => start[x]! - start[y]! || due(x) - due(y) || x - y);
+}

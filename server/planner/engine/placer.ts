@@ -14,6 +14,8 @@ export type Placer = {
   /** Person and place that the search binds each stage to (-1: free to choose). */
   handOf: Int32Array;
   spotOf: Int32Array;
+  /** Minute before which the search wants a stage not to start, so that it stays where it was published. */
+  wishOf: Int32Array;
   notBefore: Int32Array;
   endAtLeast: Int32Array;
   ask: Ask;
@@ -43,6 +45,7 @@ export function makePlacer(shop: Shop): Placer {
     pinOf: new Int32Array(n).fill(-1),
     handOf: new Int32Array(n).fill(-1),
     spotOf: new Int32Array(n).fill(-1),
+    wishOf: new Int32Array(n),
     notBefore: new Int32Array(n),
     endAtLeast: new Int32Array(n),
     ask: {
@@ -118,8 +121,8 @@ export function bestFit(p: Placer, at: number, needEnd: number, limit: number): 
   // The search's wishes count as far as the way knows them; a chain's place is part of the variant.
   const spot = p.spotOf[stage]!;
   const pin = p.pinOf[stage]! >= 0 ? p.pinOf[stage]! : spot >= 0 && way.places.includes(spot) ? spot : -1;
-  const wish = p.handOf[stage]!;
-  const hand = wish >= 0 && way.people.includes(wish) ? wish : -1;
+  const asked = p.handOf[stage]!;
+  const hand = asked >= 0 && way.people.includes(asked) ? asked : -1;
   let bestEnd = limit;
   p.bestPlace = -1;
   let chainFrom = NEVER;

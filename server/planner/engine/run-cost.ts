@@ -1,3 +1,4 @@
+import { NEVER } from './calendar.ts';
 import type { Decoder } from './decode.ts';
 import type { Shop } from './shop.ts';
 
@@ -61,4 +62,21 @@ export function settleLedger(l: Ledger): void {
 export function costOf(d: Decoder, l: Ledger): number {
   const w = d.shop.problem.objective;
   return l.sum + w.makespan * l.last + w.booth * d.state.boothMinutes + w.moves * d.state.moves;
+}
+
+/** Minute before which job `j` has to end so that the whole cost, as far as it is known, stays within `limit`. */
+export function latestEnd(d: Decoder, l: Ledger, j: number, limit: number): number {
+  if (limit === Infinity) return NEVER;
+  const { shop } = d;
+  const job = shop.jobs[j]!;
+  const w = shop.problem.objective;
+  const budget = limit - costOf(d, l) + l.part[j]!;
+  const flow = w.flow * job.weight;
+  const late = job.due >= 0 ? w.tardiness * job.weight : 0;
+  let end = Infinity;
+  if (flow > 0) end = job.release + budget / flow;
+  if (late > 0 && end > job.due)
+    end = Math.max(job.due, (budget + flow * job.release + late * job.due) / (flow + late));
+  if (w.makespan > 0) end = Math.min(end, l.last + (limit - costOf(d, l)) / w.makespan);
+  return end >= NEVER - 1 ? NEVER - 1 : Math.max(0, Math.floor(end + 1e-6) + 1);
 }

@@ -49,7 +49,12 @@ export type Way = {
 };
 
 /** One choice of ways for the stages of a block, and per stage the place where a chain of stays begins (-1: any). */
-export type Variant = { ways: Way[]; pins: Int32Array };
+export type Variant = {
+  ways: Way[];
+  pins: Int32Array;
+  /** Per stage the least minutes from its end to the end of the block. */
+  rest: Int32Array;
+};
 
 /** Stages of one job that are placed together, because the next one may stay, settle or be due at once. */
 export type Block = { id: number; job: number; first: number; last: number; variants: Variant[] };

@@ -1,11 +1,12 @@
-import { type Decoder, decodeBlock, makeDecoder, restore } from '../engine/decode.ts';
+import { NEVER } from '../engine/calendar.ts';
+import { type Decoder, decodeBlock, IS_OUT, makeDecoder, restore, TOO_LATE } from '../engine/decode.ts';
 import { forgetTouched, takeOut } from '../engine/placer.ts';
-import { costOf, type Ledger, makeLedger, setEnd, setOut, settleLedger } from '../engine/run-cost.ts';
+import { costOf, latestEnd, type Ledger, makeLedger, OUT, setEnd, setOut, settleLedger } from '../engine/run-cost.ts';
 import type { Shop } from '../engine/shop.ts';
 import { copyStage, makePlacing, type Placing } from '../engine/state.ts';
 
 /** Everything that makes a schedule again: the order of blocks, and what is chosen for them. */
-export type Genes = { order: Int32Array; choice: Int32Array; hand: Int32Array; spot: Int32Array };
+export type Genes = { order: Int32Array; choice: Int32Array; hand: Int32Array; spot: Int32Array; wish: Int32Array };
 
 /**
  * The schedule that the search stands on, and the candidate it tries. A candidate shares the front of the order with it:
@@ -40,6 +41,7 @@ export function makeSearch(shop: Shop, alone: Int32Array): Search {
       choice: new Int32Array(blocks).fill(-1),
       hand: new Int32Array(shop.stageCount).fill(-1),
       spot: new Int32Array(shop.stageCount).fill(-1),
+      wish: new Int32Array(shop.stageCount),
     },
     heldPlacing: makePlacing(shop),
     heldPins: new Int32Array(shop.stageCount).fill(-1),
@@ -63,38 +65,41 @@ function estimate(s: Search, job: number, stage: number): void {
 
 /** Takes out every block from position `from` on. */
 function clearFrom(s: Search, from: number): void {
-  const { d } = s;
-  const { shop } = d;
-  for (let i = s.held.order.length - 1; i >= from; i--) {
-    const block = shop.blocks[s.held.order[i]!]!;
-    const { job } = block;
-    for (let k = block.last; k >= block.first; k--) if (d.state.at.way[k]) takeOut(d, k);
-    if (!d.out[job]) estimate(s, job, block.first);
-    else if (block.id === shop.jobs[job]!.blocks[0]) {
-      d.out[job] = 0;
-      estimate(s, job, block.first);
-    }
-  }
+  for (let i = s.held.order.length - 1; i >= from; i--) clearBlock(s, s.held.order[i]!);
   settleLedger(s.ledger);
+}
+
+/** Takes out one block, of which no later one of its job stands. A job that was out may come back with its first. */
+function clearBlock(s: Search, id: number): void {
+  const { d } = s;
+  const { job, first, last } = d.shop.blocks[id]!;
+  for (let k = last; k >= first; k--) if (d.state.at.way[k]) takeOut(d, k);
+  if (d.out[job] && id === d.shop.jobs[job]!.blocks[0]) d.out[job] = 0;
+  if (!d.out[job]) estimate(s, job, first);
 }
 
 /** Places the candidate's blocks from position `from` on; false as soon as its cost passes `limit`. */
 function placeFrom(s: Search, from: number, limit: number): boolean {
-  const { d, ledger, order } = s;
-  const { shop } = d;
-  for (let i = from; i < order.length; i++) {
-    const block = shop.blocks[order[i]!]!;
-    if (d.out[block.job]) continue;
-    decodeBlock(d, block.id);
-    if (d.out[block.job]) setOut(ledger, shop, block.job);
-    else {
-      const end = d.state.at.end[block.last]! + shop.tail[block.last]!;
-      if (block.last === shop.jobs[block.job]!.last || end > ledger.est[block.job]!)
-        setEnd(ledger, shop, block.job, end);
-    }
-    if (costOf(d, ledger) > limit) return false;
-  }
+  for (let i = from; i < s.order.length; i++) if (!placeNext(s, s.order[i]!, limit)) return false;
   return true;
+}
+
+/** Places one block; false where the cost passes `limit` by it. */
+function placeNext(s: Search, id: number, limit: number): boolean {
+  const { d, ledger } = s;
+  const { shop } = d;
+  const { job, last } = shop.blocks[id]!;
+  if (d.out[job]) return true;
+  // While a job is out, any end is better than none.
+  const end = limit >= OUT ? NEVER : latestEnd(d, ledger, job, limit) - shop.tail[last]!;
+  const outcome = decodeBlock(d, id, end);
+  if (outcome === TOO_LATE) return false;
+  if (outcome === IS_OUT) setOut(ledger, shop, job);
+  else {
+    const at = d.state.at.end[last]! + shop.tail[last]!;
+    if (last === shop.jobs[job]!.last || at > ledger.est[job]!) setEnd(ledger, shop, job, at);
+  }
+  return costOf(d, ledger) <= limit;
 }
 
 /**
@@ -113,6 +118,50 @@ export function attempt(s: Search, from: number, limit: number): boolean {
   return false;
 }
 
+/**
+ * Takes some blocks out of the schedule and places them again in the order given, into what is free; everything else
+ * stays where it is. A block comes with all later ones of its job. Accepts like `attempt`; then the order of all blocks
+ * follows their starts.
+ */
+export function attemptBlocks(s: Search, ids: readonly number[], limit: number): boolean {
+  const { d } = s;
+  forgetTouched(d);
+  s.evaluations++;
+  for (let i = ids.length - 1; i >= 0; i--) clearBlock(s, ids[i]!);
+  settleLedger(s.ledger);
+  for (const id of ids)
+    if (!placeNext(s, id, limit)) {
+      refuse(s, s.order.length);
+      return false;
+    }
+  accept(s, s.order.length);
+  sortByStart(s);
+  return true;
+}
+
+/** Puts the order of blocks into the order of their starts; jobs that are out come last. */
+export function sortByStart(s: Search): void {
+  const { shop, state } = s.d;
+  const { order } = s.held;
+  const start = (id: number): number => {
+    const { first, job } = shop.blocks[id]!;
+    return s.heldOut[job] ? NEVER : state.at.start[first]!;
+  };
+  for (let i = 1; i < order.length; i++) {
+    const id = order[i]!;
+    const at = start(id);
+    let k = i;
+    for (; k > 0; k--) {
+      const other = start(order[k - 1]!);
+      if (other < at || (other === at && order[k - 1]! < id)) break;
+      order[k] = order[k - 1]!;
+    }
+    order[k] = id;
+  }
+  s.order.set(order);
+  for (let i = 0; i < order.length; i++) s.at[order[i]!] = i;
+}
+
 function accept(s: Search, from: number): void {
   const { d, held } = s;
   for (let i = 0; i < d.touchedCount; i++) {
@@ -127,6 +176,7 @@ function accept(s: Search, from: number): void {
   held.choice.set(d.choice);
   held.hand.set(d.handOf);
   held.spot.set(d.spotOf);
+  held.wish.set(d.wishOf);
   s.heldOut.set(d.out);
   s.heldOutStage.set(d.outStage);
   s.cost = costOf(d, s.ledger);
@@ -152,6 +202,7 @@ function settleGenes(s: Search, all: boolean): void {
   d.choice.set(held.choice);
   d.handOf.set(held.hand);
   d.spotOf.set(held.spot);
+  d.wishOf.set(held.wish);
   d.out.set(s.heldOut);
   d.outStage.set(s.heldOutStage);
   for (let j = 0; j < shop.jobs.length; j++) {
@@ -168,12 +219,24 @@ export function settleHeld(s: Search): void {
   settleGenes(s, true);
 }
 
-/** Starts over from an order with every choice free: everything is placed anew. */
-export function startFrom(s: Search, order: Int32Array): void {
+/** Starts over from an order: everything is placed anew, with every choice free or as the published plan has it. */
+export function startFrom(s: Search, order: Int32Array, published = false): void {
+  const { d } = s;
   s.order.set(order);
   if (s.cost === Infinity) s.held.order.set(order);
-  s.d.choice.fill(-1);
-  s.d.handOf.fill(-1);
-  s.d.spotOf.fill(-1);
+  d.choice.fill(-1);
+  d.handOf.fill(-1);
+  d.spotOf.fill(-1);
+  d.wishOf.fill(0);
+  if (published) for (let k = 0; k < d.shop.stageCount; k++) wishPublished(s, k);
   attempt(s, 0, Infinity);
+}
+
+/** Asks for a stage what the published plan has: its place, its person, and not to start before. */
+export function wishPublished(s: Search, stage: number): void {
+  const { shop, spotOf, handOf, wishOf } = s.d;
+  if (shop.basePlace[stage]! < 0) return;
+  spotOf[stage] = shop.basePlace[stage]!;
+  handOf[stage] = shop.basePerson[stage]!;
+  wishOf[stage] = shop.baseStart[stage]!;
 }

@@ -18,7 +18,13 @@ export function makeKept({ d, held }: Search): Kept {
   const { shop } = d;
   return {
     cost: Infinity,
-    genes: { order: held.order.slice(), choice: held.choice.slice(), hand: held.hand.slice(), spot: held.spot.slice() },
+    genes: {
+      order: held.order.slice(),
+      choice: held.choice.slice(),
+      hand: held.hand.slice(),
+      spot: held.spot.slice(),
+      wish: held.wish.slice(),
+    },
     placing: makePlacing(shop),
     pins: new Int32Array(shop.stageCount),
     out: new Uint8Array(shop.jobs.length),
@@ -34,6 +40,7 @@ export function keepHeld(s: Search, kept: Kept): void {
   kept.genes.choice.set(s.held.choice);
   kept.genes.hand.set(s.held.hand);
   kept.genes.spot.set(s.held.spot);
+  kept.genes.wish.set(s.held.wish);
   for (let k = 0; k < shop.stageCount; k++) copyStage(shop, s.heldPlacing, kept.placing, k);
   kept.pins.set(s.heldPins);
   kept.out.set(s.heldOut);
@@ -54,6 +61,7 @@ export function standOn(s: Search, kept: Kept): void {
   held.choice.set(kept.genes.choice);
   held.hand.set(kept.genes.hand);
   held.spot.set(kept.genes.spot);
+  held.wish.set(kept.genes.wish);
   s.heldPins.set(kept.pins);
   s.heldOut.set(kept.out);
   s.heldOutStage.set(kept.outStage);

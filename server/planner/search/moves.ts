@@ -1,5 +1,5 @@
 import { below, type Random } from '../random.ts';
-import type { Search } from './candidate.ts';
+import { type Search, wishPublished } from './candidate.ts';
 
 /** Changes `s.order` or the genes in the decoder. Returns the first changed position, or -1 where nothing changed. */
 export type Move = (s: Search, random: Random) => number;
@@ -37,15 +37,16 @@ export const moveBlock: Move = (s, random) => {
   return to === from ? -1 : shift(s.order, from, to);
 };
 
-const gone = (s: Search, job: number, out: Uint8Array): void => {
-  out[job] = 1;
+/** Place, way and person of a job's blocks are chosen anew. */
+function freeChoices(s: Search, job: number): void {
   for (const id of s.d.shop.jobs[job]!.blocks) {
-    s.d.choice[id] = -1; // place and way are chosen anew
     const { first, last } = s.d.shop.blocks[id]!;
+    s.d.choice[id] = -1;
     s.d.handOf.fill(-1, first, last + 1);
     s.d.spotOf.fill(-1, first, last + 1);
+    s.d.wishOf.fill(0, first, last + 1);
   }
-};
+}
 
 /** Takes the blocks of the marked jobs out of the order and puts them back, job by job, each at a position of its own. */
 function reinsert(s: Search, random: Random, jobs: readonly number[], out: Uint8Array, spread: number): number {
@@ -69,12 +70,12 @@ function reinsert(s: Search, random: Random, jobs: readonly number[], out: Uint8
 }
 
 /** One whole job to another position, its blocks together, everything about it chosen anew. */
-export const moveJob: Move = (s, random) => ruin(s, random, 1);
+export const moveJob: Move = (s, random) => takeJobs(s, random, 1);
 
 /** Two to four jobs that stand near each other taken out and put back. */
-export const ruinJobs: Move = (s, random) => ruin(s, random, 2 + below(random, 3));
+export const moveJobs: Move = (s, random) => takeJobs(s, random, 2 + below(random, 3));
 
-function ruin(s: Search, random: Random, count: number): number {
+function takeJobs(s: Search, random: Random, count: number): number {
   const { shop } = s.d;
   if (shop.jobs.length < 2) return -1;
   const out = new Uint8Array(shop.jobs.length);
@@ -86,7 +87,8 @@ function ruin(s: Search, random: Random, count: number): number {
     if (i < 0 || i >= s.order.length) continue;
     const { job } = shop.blocks[s.order[i]!]!;
     if (!out[job]) jobs.push(job);
-    gone(s, job, out);
+    out[job] = 1;
+    freeChoices(s, job);
   }
   return reinsert(s, random, jobs, out, count > 1 && random() < 0.5 ? around : -1);
 }
@@ -123,3 +125,67 @@ export const changePlace: Move = (s, random) => {
   s.d.spotOf[stage] = random() < 0.4 ? -1 : way.places[below(random, way.places.length)]!;
   return s.at[block]!;
 };
+
+/** Jobs that stand near each other in the order of starts: one at random, the others around it. */
+function neighbours(s: Search, random: Random, count: number): number[] {
+  const { shop } = s.d;
+  const around = below(random, s.order.length);
+  const jobs = [shop.blocks[s.order[around]!]!.job];
+  const reach = 6 * count;
+  for (let tries = 0; tries < 4 * count && jobs.length < count; tries++) {
+    const i = around - reach + below(random, 2 * reach + 1);
+    if (i < 0 || i >= s.order.length) continue;
+    const { job } = shop.blocks[s.order[i]!]!;
+    if (!jobs.includes(job)) jobs.push(job);
+  }
+  return jobs;
+}
+
+/**
+ * Blocks to take out and put back, in the order in which to put them back: one to four jobs that stand near each other,
+ * whole or from some block on, one after the other or interleaved. What was chosen for them is chosen anew.
+ */
+export function ruin(s: Search, random: Random): number[] {
+  const { shop } = s.d;
+  const count = 1 + below(random, 4);
+  const whole = random() < 0.7;
+  const queues = neighbours(s, random, count).map((job) => {
+    const { blocks } = shop.jobs[job]!;
+    return blocks.slice(whole || s.heldOut[job] ? 0 : below(random, blocks.length));
+  });
+  for (let i = queues.length - 1; i > 0; i--) {
+    const k = below(random, i + 1);
+    [queues[i], queues[k]] = [queues[k]!, queues[i]!];
+  }
+  const ids = random() < 0.5 ? queues.flat() : interleaved(queues, random);
+  const published = shop.problem.objective.moves > 0 && random() < 0.5;
+  for (const id of ids) choose(s, random, id, published);
+  return ids;
+}
+
+/** The queues merged at random, each in its own order. */
+function interleaved(queues: readonly number[][], random: Random): number[] {
+  const ids: number[] = [];
+  const left = queues.map((q) => q.length);
+  for (let n = left.reduce((x, y) => x + y, 0); n > 0; n--) {
+    let at = below(random, n);
+    const q = left.findIndex((l) => (at -= l) < 0);
+    ids.push(queues[q]![queues[q]!.length - left[q]!]!);
+    left[q]!--;
+  }
+  return ids;
+}
+
+/** Mostly leaves place, way and person of a block to the decoder, now and then asks for something else. */
+function choose(s: Search, random: Random, id: number, published: boolean): void {
+  const { shop, choice, handOf, spotOf, wishOf } = s.d;
+  const { first, last, variants } = shop.blocks[id]!;
+  choice[id] = random() < 0.15 ? below(random, variants.length) : -1;
+  for (let k = first; k <= last; k++) {
+    const way = s.heldPlacing.way[k];
+    handOf[k] = way && way.people.length > 1 && random() < 0.06 ? way.people[below(random, way.people.length)]! : -1;
+    spotOf[k] = way && way.places.length > 1 && random() < 0.06 ? way.places[below(random, way.places.length)]! : -1;
+    wishOf[k] = 0;
+    if (published) wishPublished(s, k);
+  }
+}

@@ -1,6 +1,6 @@
 import { lowerBounds } from '../bounds.ts';
 import type { Decoder } from '../engine/decode.ts';
-import { blocksInOrder, jobOrders, runningFirst } from '../engine/orders.ts';
+import { blocksInOrder, jobOrders, publishedOrder, runningFirst } from '../engine/orders.ts';
 import type { Shop } from '../engine/shop.ts';
 import { makeRandom, type Random } from '../random.ts';
 import type { PlanOptions, Stats } from '../types.ts';
@@ -69,6 +69,10 @@ function keep(run: Run): void {
 function firstPlans(run: Run): void {
   const { s } = run;
   const { shop } = s.d;
+  if (shop.problem.baseline.length > 0) {
+    startFrom(s, publishedOrder(shop), true);
+    keep(run);
+  }
   for (const jobs of jobOrders(shop)) {
     if (run.best.cost < Infinity && isOver(run)) return;
     let order = runningFirst(shop, jobs);
@@ -89,12 +93,22 @@ function shareGone(run: Run): number | null {
   return options.evaluations === undefined ? null : s.evaluations / options.evaluations;
 }
 
+/**
+ * The temperature to begin with. Tardiness comes in jumps of a night, some 900 minutes; a tenth of that, and falling,
+ * lets the search cross them while the rest of the schedule keeps its shape. Without due dates: by the cost itself.
+ */
+function heatOf({ s, best }: Run): number {
+  const w = s.d.shop.problem.objective;
+  return w.tardiness > 0 ? 100 * w.tardiness : Math.max(1e-3, 0.02 * Math.abs(costShown(best)));
+}
+
 /** Anneals: one long run where the end is known, else in rounds that grow, each from the best so far. */
 function rounds(run: Run): void {
   const { s } = run;
   if (s.d.shop.blocks.length < 2) return;
   for (let round = 0; !isOver(run); round++) {
     standOn(s, run.best);
+    const hot = heatOf(run);
     const begun = s.evaluations;
     const length = FIRST_ROUND * 2 ** round;
     const from = shareGone(run);
@@ -109,8 +123,8 @@ function rounds(run: Run): void {
         }
         return share;
       },
-      hot: (globalThis as any).T?.hot ?? 1000,
-      cold: (globalThis as any).T?.cold ?? 1,
+      hot,
+      cold: hot / 200,
       onBetter: () => keep(run),
     });
   }
