@@ -1,4 +1,3 @@
-import { connect } from '#server/db/connect.ts';
 import { makeMailer } from '#server/mail/mailer.ts';
 import { openProgram } from '#server/program.ts';
 import { lanes, registry } from './registry.ts';
@@ -6,16 +5,12 @@ import { startSchedule } from './schedule.ts';
 import type { JobDeps } from './task-function.ts';
 import { growingDelay, startWorker } from './worker.ts';
 
-/** A runner holds its task on one connection and works on another. */
-const leastConnections = 2 * lanes.reduce((sum, lane) => sum + lane.runners, 0);
 const graceMilliseconds = 8_000;
 
 const program = openProgram();
 const { config, log } = program;
-await program.db.destroy();
 const deps: JobDeps = {
   ...program,
-  db: connect(config.DATABASE_URL, Math.max(config.DATABASE_POOL, leastConnections)),
   mailer: config.SMTP_URL === undefined ? null : makeMailer(config, config.SMTP_URL),
 };
 if (!deps.mailer) log.warn('SMTP_URL is not set: letters are kept and wait');

@@ -1,3 +1,5 @@
+import type { Knex } from 'knex';
+import { connect } from '#server/db/connect.ts';
 import { beginTask, buryTask, finishTask, holdTask, postponeTask, type Task } from '#server/db/task-queue.ts';
 import { TASK_CHANNEL, type TaskKind } from '#server/db/tasks.ts';
 import type { Trx } from '#server/db/in-shop.ts';
@@ -25,6 +27,11 @@ export const growingDelay = (attempts: number): number =>
 /** @returns a function that stops taking tasks, tells those under way, and resolves once they have ended */
 export function startWorker(deps: JobDeps, options: WorkerOptions): () => Promise<void> {
   const stopping = new AbortController();
+  // Held tasks have connections of their own: work never waits for one that waiting work holds.
+  const queue = connect(
+    deps.config.DATABASE_URL,
+    options.lanes.reduce((sum, lane) => sum + lane.runners, 0),
+  );
   const bell = makeBell();
   const listener = listen({
     url: deps.config.DATABASE_URL,
@@ -36,7 +43,7 @@ export function startWorker(deps: JobDeps, options: WorkerOptions): () => Promis
   const runner = async (kinds: readonly TaskKind[]) => {
     while (!stopping.signal.aborted) {
       const heard = bell.next();
-      const found = await runOne(deps, options, kinds, stopping.signal).catch((error: unknown) => {
+      const found = await runOne(queue, deps, options, kinds, stopping.signal).catch((error: unknown) => {
         deps.log.warn({ err: error }, 'the queue is out of reach');
         return false;
       });
@@ -52,22 +59,24 @@ export function startWorker(deps: JobDeps, options: WorkerOptions): () => Promis
   return async () => {
     stopping.abort();
     await Promise.all([...runners, listener.close()]);
+    await queue.destroy();
   };
 }
 
 /** Takes one due task and does it. @returns false where none is due */
 async function runOne(
+  queue: Knex,
   deps: JobDeps,
   options: WorkerOptions,
   kinds: readonly TaskKind[],
   signal: AbortSignal,
 ): Promise<boolean> {
   if (kinds.length === 0) return false;
-  const task = await beginTask(deps.db, kinds);
+  const task = await beginTask(queue, kinds);
   if (!task) return false;
   const definition = options.registry[task.kind];
   if (!definition) return false;
-  await deps.db.transaction(async (trx) => {
+  await queue.transaction(async (trx) => {
     if (await holdTask(trx, task)) await doHeld(deps, options, definition, { trx, task, signal });
   });
   return true;

@@ -27,8 +27,8 @@ export function connect(url: string, poolSize: number): Knex {
       connectionTimeoutMillis: 2_000,
     },
     acquireConnectionTimeout: 2_000,
-    // What fails reaches who asked for it; the library would print it beside our log besides.
-    log: { error: () => undefined },
+    // What fails reaches who asked for it; the library would print it as well, past our log.
+    log: { warn: () => undefined, error: () => undefined },
     pool: {
       min: 0,
       max: poolSize,

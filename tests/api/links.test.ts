@@ -178,7 +178,8 @@ describe('an invitation', () => {
     expect(wrong.body.error.code).toBe('wrong-credentials');
     const me = await accept(token, other.password).expect(200);
     expect(me.body.account.name).toBe(other.name);
-    expect(me.body.shops.map((shop: { id: string }) => shop.id).sort()).toEqual([other.shopId, owner.shopId].sort());
+    const shops = me.body.shops as { id: string }[];
+    expect(shops.map((shop) => shop.id).sort()).toEqual([other.shopId, owner.shopId].sort());
   });
 
   test('is good for seven days', async () => {
