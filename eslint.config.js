@@ -63,6 +63,7 @@ export default defineConfig(
       '@typescript-eslint/no-unsafe-assignment': 'off',
       '@typescript-eslint/no-unsafe-member-access': 'off',
       '@typescript-eslint/no-unsafe-argument': 'off',
+      '@typescript-eslint/no-unsafe-return': 'off',
       // `expect(spy.method)` and stand-ins for what the test's document lacks.
       '@typescript-eslint/unbound-method': 'off',
     },
@@ -76,6 +77,7 @@ export default defineConfig(
       '@typescript-eslint/switch-exhaustiveness-check': 'off',
     },
   },
+  { files: ['public/**/*.js'], languageOptions: { globals: { ...globals.browser, ...globals.serviceworker } } },
   {
     // Kept bad examples: no part of any tsconfig, looked at only by their own test.
     files: ['tests/borders/fixture-*/**/*.ts'],
