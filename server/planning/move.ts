@@ -67,7 +67,7 @@ function groupsOf(facts: Facts, stage: OpenStage): Group[] {
   const sharing = (first: readonly OpenStage[]): Group => {
     const loads = new Set(first.flatMap(({ id }) => facts.items.get(id)?.loadId ?? []));
     const mates = stages.filter(({ id, state }) => state === 'waiting' && loads.has(facts.items.get(id)?.loadId ?? ''));
-    const all = [...new Set([...first, ...mates])];
+    const all = [...new Map([...first, ...mates].map((member) => [member.id, member])).values()];
     return { stages: all, before: all.flatMap(({ id }) => facts.items.get(id) ?? []) };
   };
   const next = ({ id }: OpenStage): OpenStage[] => {

@@ -3,6 +3,7 @@ import { randomUUID } from 'node:crypto';
 import { once } from 'node:events';
 import path from 'node:path';
 import { afterAll, beforeAll, expect, it } from 'vitest';
+import type { PlanRun } from '#contracts/day.ts';
 import { draftRoutes } from '#server/http/drafts.ts';
 import { testApi, type TestApi } from '../helpers/api-as.ts';
 import { aJob } from '../helpers/factories-jobs.ts';
@@ -37,13 +38,13 @@ const rows = (table: string): Promise<Record<string, unknown>[]> =>
     Record<string, unknown>[]
   >;
 const runs = (path_ = ''): string => `/api/shops/${shop.id}/plan-runs${path_}`;
-const read = async (id: string) =>
-  (
-    await api
-      .as(shop.lead)
-      .get(runs(`/${id}`))
-      .expect(200)
-  ).body;
+const read = async (id: string): Promise<PlanRun> => {
+  const answer = await api
+    .as(shop.lead)
+    .get(runs(`/${id}`))
+    .expect(200);
+  return answer.body as PlanRun;
+};
 const patiently = { timeout: 60_000, interval: 100 };
 
 it(

@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { Worker } from 'node:worker_threads';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import type { PlanRun } from '#contracts/day.ts';
 import { draftRoutes } from '#server/http/drafts.ts';
 import { openPlannerThreads, type PlannerThreads } from '#server/planning/planner-threads.ts';
 import { runPlan } from '#server/services/run-plan.ts';
@@ -30,13 +31,13 @@ const ask = (body: object = {}, account = shop.lead) =>
     .send({ id: randomUUID(), scope: 'all', seconds: 1, seed: 1, ...body });
 const work = (runId: string, by: PlannerThreads = threads, signal = new AbortController().signal) =>
   runPlan(api.deps, by, { shopId: shop.id, runId }, signal);
-const read = async (runId: string) =>
-  (
-    await api
-      .as(shop.lead)
-      .get(runs(`/${runId}`))
-      .expect(200)
-  ).body;
+const read = async (runId: string): Promise<PlanRun> => {
+  const answer = await api
+    .as(shop.lead)
+    .get(runs(`/${runId}`))
+    .expect(200);
+  return answer.body as PlanRun;
+};
 const rows = (table: string): Promise<Record<string, unknown>[]> =>
   shop.in((trx) => trx(table).where({ shop_id: shop.id }).select('*')) as Promise<Record<string, unknown>[]>;
 const open = async () =>
@@ -80,8 +81,7 @@ describe('a run', () => {
     const other = await ask().expect(429);
     expect(other.headers['retry-after']).toBeDefined();
     expect(await rows('task')).toMatchObject([{ kind: 'run-plan', key: id, payload: { runId: id } }]);
-    const many = (await aPlanShop(api.deps.db)) as PlanShop;
-    shop = many;
+    shop = await aPlanShop(api.deps.db);
     const statuses = (await Promise.all(Array.from({ length: 6 }, () => ask()))).map(({ status }) => status);
     expect(statuses.filter((status) => status === 200)).toHaveLength(1);
   });
