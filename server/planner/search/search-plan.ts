@@ -1,10 +1,13 @@
 import { lowerBounds } from '../bounds.ts';
 import type { Decoder } from '../engine/decode.ts';
 import { blocksInOrder, jobOrders, publishedOrder, runningFirst } from '../engine/orders.ts';
+import { OUT } from '../engine/run-cost.ts';
 import type { Shop } from '../engine/shop.ts';
 import { makeRandom, type Random } from '../random.ts';
 import type { PlanOptions, Stats } from '../types.ts';
 import { anneal } from './anneal.ts';
+import { asJobShop } from './job-shop.ts';
+import { planJobShop } from './plan-job-shop.ts';
 import { makeSearch, type Search, startFrom } from './candidate.ts';
 import { costShown, type Kept, keepHeld, makeKept, standOn } from './kept.ts';
 
@@ -39,7 +42,18 @@ export function searchPlan(shop: Shop, options: PlanOptions): Found {
     over: false,
   };
   firstPlans(run);
-  rounds(run);
+  const jobShop = asJobShop(shop);
+  const allPlaced = run.best.cost < OUT;
+  if (jobShop && allPlaced && !isOver(run)) {
+    standOn(s, run.best);
+    planJobShop(
+      s,
+      jobShop,
+      run.random,
+      () => isOver(run),
+      () => keep(run),
+    );
+  } else rounds(run);
   standOn(s, run.best);
   return { d: s.d, bound: run.bound, stats: { evaluations: s.evaluations, improvements: run.improvements } };
 }
