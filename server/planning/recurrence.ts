@@ -1,6 +1,7 @@
 import rrule from 'rrule';
 import type { Recurring } from '#server/db/resources.ts';
 import { floatingOf, instantOf, readLocal, type Floating } from './local-time.ts';
+import { remember } from './remember.ts';
 import { clipSpan, type Span } from './spans.ts';
 
 // CommonJS in Node: named imports fail outside of Vite.
@@ -12,12 +13,19 @@ const DAY = 24 * 60 * MINUTE;
  * Starts in floating time within `[from, to)`, in order.
  * @throws {RangeError} where the rule is not RFC 5545.
  */
-export function localStarts(recurring: Recurring, zone: string, from: Floating, to: Floating): Floating[] {
+export function localStarts(recurring: Recurring, zone: string, from: Floating, to: Floating): readonly Floating[] {
   const first = readLocal(recurring.startsLocal);
   if (recurring.rule === null) return first >= from && first < to ? [first] : [];
-  const rule = new RRule({ ...readRule(recurring.rule, zone), dtstart: new Date(first) });
-  return rule.between(new Date(from), new Date(to - 1), true).map((date) => date.getTime());
+  const text = recurring.rule;
+  // A rule is walked from its first day, years ago perhaps, and screens ask for the same days again and again.
+  return rememberStarts(`${recurring.startsLocal} ${text} ${zone} ${from} ${to}`, () => {
+    const rule = new RRule({ ...readRule(text, zone), dtstart: new Date(first) });
+    return rule.between(new Date(from), new Date(to - 1), true).map((date) => date.getTime());
+  });
 }
+
+const rememberStarts = remember<readonly Floating[]>(2_000);
+const rememberSpan = remember<Span>(20_000);
 
 function readRule(text: string, zone: string): Partial<rrule.Options> {
   try {
@@ -61,5 +69,8 @@ export function expandStarts(recurring: Recurring, zone: string, range: Span): {
 }
 
 export function wallSpan(start: Floating, minutes: number, zone: string): Span {
-  return { from: instantOf(start, zone), to: instantOf(start + minutes * MINUTE, zone) };
+  return rememberSpan(`${start} ${minutes} ${zone}`, () => ({
+    from: instantOf(start, zone),
+    to: instantOf(start + minutes * MINUTE, zone),
+  }));
 }
