@@ -20,7 +20,7 @@ export function DayList({ view, board, formats, severalDays, onOpen }: Props) {
   const places = view.rows.filter(({ kind }) => kind === 'booth' || kind === 'prep' || kind === 'rack');
   const now = Date.parse(view.serverTime);
   return (
-    <div className="flex flex-col gap-5">
+    <div className="day-list flex flex-col gap-5">
       {places.map((row) => {
         const items = board.filter((item) => item.kind === 'stage' && item.rowId === row.id);
         return (
