@@ -3,7 +3,7 @@ import { useSearchParams } from 'react-router-dom';
 import { localDay } from '#contracts/common.ts';
 import { may, useShop } from '#src/lib/session.ts';
 import { EmptyState } from '#src/ui/empty-state.tsx';
-import { useTitle } from '#src/ui/page.tsx';
+import { useTitle } from '#src/lib/use-title.ts';
 import { BenchHead } from './bench-head.tsx';
 import { BenchView } from './bench-view.tsx';
 import { BenchToCome, StaleNote } from './bench-states.tsx';

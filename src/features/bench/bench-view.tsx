@@ -1,5 +1,6 @@
 import type { BenchView as View } from '#contracts/bench.ts';
 import { useFormats } from '#src/lib/session.ts';
+import { Caution } from '#src/ui/caution.tsx';
 import { EmptyState } from '#src/ui/empty-state.tsx';
 import { ErrorNote } from '#src/ui/error-note.tsx';
 import { useServerNow } from './data/use-server-now.ts';
@@ -53,6 +54,10 @@ export function BenchView({ data, arrivedAt }: { data: View; arrivedAt: number }
           <DoneList stages={list.done} waitFor={waitFor} />
         </div>
       </div>
+      <Caution quiet>
+        Times are least times from the shop&rsquo;s process sheets. The maker&rsquo;s data sheet and what you see on the
+        part come first. Supplied air while spraying; nobody enters during purge or bake.
+      </Caution>
     </div>
   );
 }

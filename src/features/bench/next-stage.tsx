@@ -50,14 +50,19 @@ export function StageDrawing({ stage, now }: { stage: BenchStage; now: number })
     duration,
   );
   const standing = standingNow(stage, now, { duration, when });
-  const tones = { room: 'text-petrol', closing: 'text-amber', outside: 'text-crimson' };
+  const tones = { early: 'text-muted', room: 'text-petrol', closing: 'text-amber', late: 'text-crimson' };
   return (
     <div className="flex flex-col gap-1.5">
       <PhaseBar pieces={pieces} className="h-9!" />
       <p className="text-base text-muted first-letter:uppercase">{words}</p>
       {standing && (
         <>
-          <WindowGauge large window={stage.window} start={new Date(now).toISOString()} formats={formats} />
+          <WindowGauge
+            large
+            window={stage.window}
+            start={new Date(Math.max(now, Date.parse(stage.from))).toISOString()}
+            formats={formats}
+          />
           <p className={cx('figures text-base font-semibold', tones[standing.tone])}>{standing.words}</p>
         </>
       )}

@@ -14,7 +14,9 @@ export function StageFacts({ stage }: { stage: BenchStage }) {
           {jobNumber}
         </Link>{' '}
         <b>{jobTitle}</b>
-        <span className="text-muted"> · {[partNames, vehicle].filter(Boolean).join(' · ')}</span>
+        <span className="text-muted">
+          {[partNames === jobTitle ? '' : partNames, vehicle].map((text) => text && ` · ${text}`)}
+        </span>
       </p>
       <p>
         <b>{placeName}</b>

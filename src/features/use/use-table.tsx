@@ -9,7 +9,7 @@ export function UseTable({ groups }: { groups: readonly Group[] }) {
     <Table label="Hours by place" className="break-inside-avoid print:overflow-visible print:text-xs">
       <thead>
         <tr>
-          <Th>Place</Th>
+          <Th className="left-0 z-20">Place</Th>
           {doings.map((doing) => (
             <Th key={doing} number>
               <span className="inline-block first-letter:uppercase">{phaseWords[doing]}</span>
@@ -38,8 +38,11 @@ type RowProps = { name: string; figures: Figures; isSum?: boolean };
 function Row({ name, figures, isSum }: RowProps) {
   const { hours, open, free, share, recorded, bookings } = figures;
   return (
-    <tr className={isSum ? 'bg-paper font-semibold' : undefined}>
-      <th scope="row" className="border-t border-line px-3 py-2 text-left font-semibold whitespace-nowrap">
+    <tr className={isSum ? 'bg-paper font-semibold' : 'bg-surface'}>
+      <th
+        scope="row"
+        className="sticky left-0 border-t border-line bg-inherit px-3 py-2 text-left font-semibold max-sm:max-w-28 sm:whitespace-nowrap"
+      >
         {name}
       </th>
       {doings.map((doing) => (

@@ -15,7 +15,7 @@ describe('starting now', () => {
   // Worked: sealer ends 09:00, at least 15 min, at most 72 h: colour from 09:15 on.
   it('is too early before the window, and says how long to wait', () => {
     expect(standing('09:15', '12:00', '09:05')).toEqual({
-      tone: 'outside',
+      tone: 'early',
       words: 'Too early: wait until 09:15, 10 min more',
     });
   });
@@ -25,14 +25,14 @@ describe('starting now', () => {
     expect(standing('10:00', '10:45', '10:44')).toEqual({ tone: 'closing', words: 'Start by 10:45, 1 min left' });
     expect(standing('10:00', '10:45', '10:45')?.tone).toBe('closing');
     expect(standing('10:00', '10:45', '10:46')).toMatchObject({
-      tone: 'outside',
+      tone: 'late',
       words: expect.stringMatching(/^Too late/),
     });
   });
 
   it('has nothing to say without a window', () => {
     expect(standing(null, null, '09:00')).toBeNull();
-    expect(standing('08:00', null, '09:00')).toEqual({ tone: 'room', words: 'Can start now' });
+    expect(standing('08:00', null, '09:00')).toEqual({ tone: 'room', words: 'The window is open and does not close' });
   });
 });
 

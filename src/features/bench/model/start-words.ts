@@ -1,25 +1,26 @@
 import type { BenchStage } from '#contracts/bench.ts';
-import { windowTone, type WindowTone } from '#src/lib/window-tone.ts';
+import { windowTone } from '#src/lib/window-tone.ts';
 
-export type Standing = { tone: WindowTone; words: string };
+/** `early` and `late`: outside of the window; `closing`: little of it is left. */
+export type Standing = { tone: 'early' | 'room' | 'closing' | 'late'; words: string };
 type Say = { duration: (minutes: number) => string; when: (at: string) => string };
 
 /** How it would be to start at this moment, by the window that the chemistry leaves; null where there is none. */
 export function standingNow({ window }: Pick<BenchStage, 'window'>, now: number, say: Say): Standing | null {
   const { earliest, latest } = window;
   if (earliest === null && latest === null) return null;
-  const tone = windowTone(window, now);
-  const minutes = (ms: number) => Math.ceil(ms / 60_000);
-  if (earliest !== null && now < Date.parse(earliest))
-    return {
-      tone,
-      words: `Too early: wait until ${say.when(earliest)}, ${say.duration(minutes(Date.parse(earliest) - now))} more`,
-    };
-  if (latest === null) return { tone, words: 'Can start now' };
+  if (earliest !== null && now < Date.parse(earliest)) {
+    const wait = Math.ceil((Date.parse(earliest) - now) / 60_000);
+    return { tone: 'early', words: `Too early: wait until ${say.when(earliest)}, ${say.duration(wait)} more` };
+  }
+  if (latest === null) return { tone: 'room', words: 'The window is open and does not close' };
   const left = Date.parse(latest) - now;
   if (left < 0)
-    return { tone, words: `Too late: the window closed at ${say.when(latest)}. Ask the lead before you go on` };
-  return { tone, words: `Start by ${say.when(latest)}, ${say.duration(Math.floor(left / 60_000))} left` };
+    return { tone: 'late', words: `Too late: the window closed at ${say.when(latest)}. Ask the lead before you go on` };
+  return {
+    tone: windowTone(window, now) === 'closing' ? 'closing' : 'room',
+    words: `Start by ${say.when(latest)}, ${say.duration(Math.floor(left / 60_000))} left`,
+  };
 }
 
 /** When it is planned, seen from now: `in 12 min`, `now`, `12 min ago`. */

@@ -1,5 +1,6 @@
 import type { Job } from '#contracts/jobs.ts';
 import type { PieceKind } from '#src/lib/phase-words.ts';
+import { Caution } from '#src/ui/caution.tsx';
 import { PhaseLegend } from '#src/ui/phase-bar.tsx';
 import { piecesOf } from '../model/stage-times.ts';
 import { StageItem } from './stage-item.tsx';
@@ -31,6 +32,12 @@ export function Chain({ job }: { job: Job }) {
           />
         ))}
       </ol>
+      <div className="mt-5 border-t border-line pt-3">
+        <Caution quiet>
+          Times and temperatures are those of the process sheet. The makers&rsquo; data sheets, local rules and the
+          licensed people responsible come first.
+        </Caution>
+      </div>
     </section>
   );
 }

@@ -5,7 +5,8 @@ import { formatNearDay } from '#src/lib/formats.ts';
 import { phasesInWords } from '#src/lib/phase-words.ts';
 import { useFormats } from '#src/lib/session.ts';
 import { PhaseBar } from '#src/ui/phase-bar.tsx';
-import { WindowGauge, windowWords } from '#src/ui/window-gauge.tsx';
+import { windowWords } from '#src/lib/window-words.ts';
+import { WindowGauge } from '#src/ui/window-gauge.tsx';
 import { latenessWords, minutesLater, piecesOf } from '../model/stage-times.ts';
 import { WaysOnOffer } from './ways-on-offer.tsx';
 

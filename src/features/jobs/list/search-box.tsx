@@ -1,7 +1,7 @@
 import { Search } from 'lucide-react';
 import { useEffect, useRef, useState, type RefObject } from 'react';
 import { cx } from '#src/lib/cx.ts';
-import { boxClasses } from '#src/ui/field.tsx';
+import { boxClasses } from '#src/ui/box-classes.ts';
 
 type SearchBoxProps = { value: string; onChange: (text: string) => void };
 
@@ -25,7 +25,7 @@ export function SearchBox({ value, onChange }: SearchBoxProps) {
     return () => clearTimeout(timer);
   }, [text, value, onChange]);
   return (
-    <label className="relative block w-full sm:w-80">
+    <label className="relative block min-w-0 grow basis-44 sm:w-80">
       <span className="sr-only">Search jobs by number, title or vehicle</span>
       <Search
         size={16}

@@ -13,9 +13,9 @@ export const Kept = ({ onAnew }: { onAnew: () => void }) => (
   </div>
 );
 
-/** Stays in reach at the foot of a phone. */
+/** Stays in reach at the foot of a phone, above the bar with the main places. */
 export const SendBar = ({ busy, faulty }: { busy: boolean; faulty: boolean }) => (
-  <div className="flex flex-wrap items-center gap-x-4 gap-y-2 max-sm:sticky max-sm:bottom-0 max-sm:z-10 max-sm:-mx-4 max-sm:border-t max-sm:border-line max-sm:bg-surface max-sm:px-4 max-sm:py-3">
+  <div className="flex flex-wrap items-center gap-x-4 gap-y-2 max-sm:sticky max-sm:bottom-[calc(3.5rem+env(safe-area-inset-bottom))] max-sm:z-10 max-sm:-mx-4 max-sm:border-t max-sm:border-line max-sm:bg-surface max-sm:px-4 max-sm:py-3">
     <Button type="submit" look="primary" busy={busy} className="max-sm:grow">
       Make the job
     </Button>

@@ -7,6 +7,7 @@ import type { NewJob } from '#contracts/jobs.ts';
 import type { Sheet } from '#contracts/sheets.ts';
 import { paths } from '#src/app/paths.ts';
 import { useFormats, useShop } from '#src/lib/session.ts';
+import { useMedia } from '#src/lib/use-media.ts';
 import { TextArea } from '#src/ui/text-field.tsx';
 import { showToast } from '#src/ui/toast-store.ts';
 import { useCreateJob } from '../data/use-job-deeds.ts';
@@ -33,6 +34,7 @@ export function NewJobForm({ sheets, start, wasKept, keep, drop }: NewJobFormPro
   const formats = useFormats();
   const navigate = useNavigate();
   const create = useCreateJob(useShop().id);
+  const isWide = useMedia('(min-width: 64rem)');
   const schema = useMemo(() => jobFormSchema(formats), [formats]);
   const form = useForm<JobForm, unknown, NewJob>({ resolver: zodResolver(schema), defaultValues: start });
   const { control, register, setValue, setError, getValues, handleSubmit, formState } = form;
@@ -85,6 +87,7 @@ export function NewJobForm({ sheets, start, wasKept, keep, drop }: NewJobFormPro
             <>
               <OptionsField options={sheet.body.options} />
               <PartsEditor />
+              {!isWide && <StagesToCome sheet={sheet} />}
             </>
           )}
           <fieldset className="flex min-w-0 flex-col gap-3.5">
@@ -102,9 +105,11 @@ export function NewJobForm({ sheets, start, wasKept, keep, drop }: NewJobFormPro
           {create.error && <NotMade error={create.error} jobId={getValues('id')} onAnother={sendAnother} />}
           <SendBar busy={create.isPending} faulty={formState.isSubmitted && !formState.isValid} />
         </div>
-        <aside className="min-w-0 lg:sticky lg:top-20">
-          <StagesToCome sheet={sheet} />
-        </aside>
+        {isWide && (
+          <aside className="sticky top-20 min-w-0">
+            <StagesToCome sheet={sheet} />
+          </aside>
+        )}
       </form>
     </FormProvider>
   );

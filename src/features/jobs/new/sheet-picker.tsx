@@ -1,7 +1,10 @@
 import { Check } from 'lucide-react';
+import { useState } from 'react';
 import type { Sheet } from '#contracts/sheets.ts';
 import { cx } from '#src/lib/cx.ts';
 import { useFormats } from '#src/lib/session.ts';
+import { useIsNarrow } from '#src/lib/use-media.ts';
+import { Button } from '#src/ui/button.tsx';
 import { leastMinutes, optionsOn, stagesLeft } from '../model/sheet-stages.ts';
 import { StageChain } from './stage-chain.tsx';
 
@@ -14,14 +17,32 @@ type SheetPickerProps = {
 
 /** Process sheets as cards: what each is for, and its chain as a drawing. */
 export function SheetPicker({ sheets, value, onPick, error }: SheetPickerProps) {
+  const isNarrow = useIsNarrow();
+  const [all, setAll] = useState(false);
+  const picked = sheets.filter(({ id }) => id === value);
+  // On a phone the cards make way for what is to be filled in next.
+  const shown = isNarrow && !all && picked.length > 0 ? picked : sheets;
   return (
     <fieldset className="min-w-0" aria-describedby={error ? 'sheet-error' : undefined}>
       <legend className="mb-2 text-base font-bold">Process sheet</legend>
       <div className="grid gap-2.5 sm:grid-cols-2">
-        {sheets.map((sheet) => (
-          <SheetCard key={sheet.id} sheet={sheet} picked={sheet.id === value} onPick={() => onPick(sheet)} />
+        {shown.map((sheet) => (
+          <SheetCard
+            key={sheet.id}
+            sheet={sheet}
+            picked={sheet.id === value}
+            onPick={() => {
+              setAll(false);
+              onPick(sheet);
+            }}
+          />
         ))}
       </div>
+      {shown.length < sheets.length && (
+        <Button size="small" look="quiet" className="mt-1.5" onClick={() => setAll(true)}>
+          Another process sheet
+        </Button>
+      )}
       {error && (
         <p id="sheet-error" className="mt-1.5 text-xs font-semibold text-crimson">
           {error}
