@@ -52,7 +52,7 @@ const restOf = (g: Graph, v: number): number => (v >= 0 ? g.tail[v]! + g.minutes
 function forward(h: Hunt, u: number, v: number): void {
   const { js, g, tabu } = h;
   const after = js.after[u]!;
-  if (after >= 0 && restOf(g, v) < restOf(g, after)) return;
+  if (after >= 0 && (after === v || restOf(g, v) < restOf(g, after))) return;
   let forbidden = false;
   let at = endOf(g, g.prev[u]!);
   let most = 0;
@@ -83,7 +83,7 @@ function forward(h: Hunt, u: number, v: number): void {
 function backward(h: Hunt, u: number, v: number): void {
   const { js, g, tabu } = h;
   const before = js.before[v]!;
-  if (before >= 0 && endOf(g, u) < endOf(g, before)) return;
+  if (before >= 0 && (before === u || endOf(g, u) < endOf(g, before))) return;
   let forbidden = false;
   const list = scratchList;
   let n = 1;
@@ -122,8 +122,8 @@ function elsewhere(h: Hunt, v: number): void {
     const forbidden = tabu.machine[v * js.machines + place]! > h.now;
     const minutes = js.minutes[v]![o]!;
     for (let p = -1, x = g.first[place]!; ; p = x, x = g.next[x]!) {
-      if (p >= 0 && g.head[p]! >= latest) break;
-      if (x < 0 || endOf(g, x) > earliest) {
+      if (p >= 0 && (p === js.after[v] || g.head[p]! >= latest)) break;
+      if (x < 0 || (x !== js.before[v] && endOf(g, x) > earliest)) {
         const estimate = Math.max(ready, endOf(g, p)) + minutes + Math.max(rest, restOf(g, x));
         offer(h, v, p, o, estimate, forbidden);
       }
