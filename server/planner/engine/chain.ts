@@ -50,7 +50,7 @@ export function placeChain(p: Placer, block: Block, variant: Variant, limit: num
 }
 
 /** Sets what is asked for stage `s` from its way and its neighbours. False: it cannot be asked. */
-function setAsk(p: Placer, s: number): boolean {
+export function setAsk(p: Placer, s: number): boolean {
   const { shop, state, ask } = p;
   const { at } = state;
   const way = p.wayOf[s]!;

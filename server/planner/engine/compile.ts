@@ -2,21 +2,9 @@ import type { Problem } from '../types.ts';
 import { blocksOf } from './blocks.ts';
 import { makeCalendar } from './calendar.ts';
 import { BOOTH, type CompiledJob, PREP, RACK, type Shop, type Way } from './shop.ts';
-import { compileWay, type Indexes, sortByDemand } from './ways.ts';
+import { compileWay, type Indexes, indexesOf, indexOf, sortByDemand } from './ways.ts';
 
 const KIND = { booth: BOOTH, prep: PREP, rack: RACK } as const;
-
-const indexOf = (list: readonly { id: string }[]): Map<string, number> => new Map(list.map((x, i) => [x.id, i]));
-
-function familiesOf(problem: Problem): Map<string, number> {
-  const names = new Set(problem.cleanups.flatMap((c) => [c.from, c.to]));
-  return new Map([...names].map((name, i) => [name, i]));
-}
-
-function loadsOf(problem: Problem): Map<string, number> {
-  const modes = problem.jobs.flatMap((job) => job.stages.flatMap((s) => s.modes));
-  return new Map([...new Set(modes.flatMap((m) => m.load ?? []))].map((key, i) => [key, i]));
-}
 
 function cleanupTable(problem: Problem, family: Map<string, number>): Int32Array {
   const table = new Int32Array(family.size * family.size);
@@ -37,16 +25,8 @@ function zonesOf(problem: Problem): Zones {
 
 /** Turns a parsed problem into indexes and typed arrays. Done once; the search never looks at the problem again. */
 export function compileShop(problem: Problem): Shop {
-  const family = familiesOf(problem);
-  const placeUnits = Float64Array.from(problem.places, (p) => p.units);
-  const at: Indexes = {
-    place: indexOf(problem.places),
-    person: indexOf(problem.people),
-    lamp: indexOf(problem.lamps),
-    family,
-    load: loadsOf(problem),
-    placeUnits,
-  };
+  const at = indexesOf(problem);
+  const { family, placeUnits } = at;
   const circuit = indexOf(problem.circuits);
   const stages = problem.jobs.flatMap((job) => job.stages);
   let wayId = 0;

@@ -24,7 +24,7 @@ export function makeDecoder(shop: Shop): Decoder {
 }
 
 /** Lists a job as unplaced: all that is not fixed of it leaves the schedule. */
-function leaveOut(d: Decoder, job: number, stage: number): void {
+export function leaveOut(d: Decoder, job: number, stage: number): void {
   const { first, last } = d.shop.jobs[job]!;
   for (let s = first; s <= last; s++) if (d.shop.fixedAt[s]! < 0 && d.state.at.way[s]) takeOut(d, s);
   d.out[job] = 1;

@@ -29,6 +29,8 @@ export type Fit = {
   segFrom: Int32Array;
   segTo: Int32Array;
   lamps: Int32Array;
+  /** True: pass over no minute, however a way pauses or waits; slower there. */
+  careful: boolean;
   /** Where a stay clashed: the chain that it belongs to must begin at or after this minute; -1: no clash. */
   chainFrom: number;
 };
@@ -39,6 +41,7 @@ export const makeFit = (segments: number, lamps: number): Fit => ({
   segFrom: new Int32Array(segments),
   segTo: new Int32Array(segments),
   lamps: new Int32Array(lamps),
+  careful: false,
   chainFrom: -1,
 });
 
@@ -63,7 +66,7 @@ export function laySegments(state: State, way: Way, person: number, at: number, 
       const idle = from - now - (k > 0 ? way.segWait[k - 1]! : 0);
       if (k === 0) start = from;
       else if (idle > 0) {
-        start += idle;
+        start += fit.careful && !way.rigid ? 1 : idle;
         now = start;
         k = 0;
         continue;
@@ -101,6 +104,6 @@ export function fitFrom(state: State, ask: Ask, at: number, limit: number, fit: 
     if (later === 0 && way.lampCount > 0) later = chooseLamps(state, ask, fit);
     if (later === 0) return true;
     if (later >= NEVER) return false;
-    start += later;
+    start += fit.careful && !way.rigid ? 1 : later;
   }
 }

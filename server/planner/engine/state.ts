@@ -184,7 +184,11 @@ function placeFixed(state: State): void {
   const stage = new Map(shop.stageIds.map((id, s) => [id, s]));
   for (const f of byStart) fillFixed(state, stage.get(f.stage)!, f);
   // Holds reach to the next stage, so every fixed stage must be filled in before any is entered.
-  for (const f of byStart) enterFixed(state, stage.get(f.stage)!);
+  const loads = new Set<string>();
+  for (const f of byStart) {
+    enterFixed(state, stage.get(f.stage)!, f.load !== null && loads.has(f.load));
+    if (f.load !== null) loads.add(f.load);
+  }
 }
 
 function fillFixed(state: State, s: number, f: Assignment): void {
@@ -205,7 +209,7 @@ function fillFixed(state: State, s: number, f: Assignment): void {
   f.lamps.forEach((id, k) => (at.lamps[s * shop.maxLamps + k] = lamps.findIndex((l) => l.id === id)));
 }
 
-function enterFixed(state: State, s: number): void {
+function enterFixed(state: State, s: number, joins: boolean): void {
   const { shop, at } = state;
   const way = at.way[s]!;
   const next = s + 1;
@@ -214,14 +218,15 @@ function enterFixed(state: State, s: number): void {
     at.holdTo[s] = onward.stay ? Math.max(at.end[s]!, at.start[next]!) : at.end[s]! + onward.settle;
     at.goesOn[s] = onward.stay ? 1 : 0;
   }
-  enterClipped(state, s, way);
+  enterClipped(state, s, way, joins);
 }
 
-/** Like `enter`, cutting off what exclusive tracks already hold. */
-function enterClipped(state: State, s: number, way: Way): void {
+/** Like `enter`, cutting off what exclusive tracks already hold. One that joins a load draws no current of its own. */
+function enterClipped(state: State, s: number, way: Way, joins: boolean): void {
   const additive = new Set<Track>([...state.circuits, ...state.glow, ...state.mist]);
   state.places.forEach((t, p) => state.shop.placeKind[p] === RACK && additive.add(t));
   eachUse(state, s, way, (t, from, to, a, b) => {
+    if (joins && state.circuits.includes(t)) return;
     if (additive.has(t)) return insertUse(t, from, to, a, b);
     let at = from;
     for (let i = firstEnding(t, at); i < t.n && t.from[i]! < to; i = firstEnding(t, at)) {

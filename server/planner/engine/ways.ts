@@ -1,4 +1,4 @@
-import type { Mode, Phase } from '../types.ts';
+import type { Mode, Phase, Problem } from '../types.ts';
 import { NEVER } from './calendar.ts';
 import { HANDS, NONE, ONSITE, PAUSED, type Way } from './shop.ts';
 
@@ -11,6 +11,29 @@ export type Indexes = {
   load: Map<string, number>;
   placeUnits: Float64Array;
 };
+
+export const indexOf = (list: readonly { id: string }[]): Map<string, number> => new Map(list.map((x, i) => [x.id, i]));
+
+function familiesOf(problem: Problem): Map<string, number> {
+  const names = new Set(problem.cleanups.flatMap((c) => [c.from, c.to]));
+  return new Map([...names].map((name, i) => [name, i]));
+}
+
+function loadsOf(problem: Problem): Map<string, number> {
+  const modes = problem.jobs.flatMap((job) => job.stages.flatMap((s) => s.modes));
+  return new Map([...new Set(modes.flatMap((m) => m.load ?? []))].map((key, i) => [key, i]));
+}
+
+export function indexesOf(problem: Problem): Indexes {
+  return {
+    place: indexOf(problem.places),
+    person: indexOf(problem.people),
+    lamp: indexOf(problem.lamps),
+    family: familiesOf(problem),
+    load: loadsOf(problem),
+    placeUnits: Float64Array.from(problem.places, (p) => p.units),
+  };
+}
 
 const needOf = (phase: Phase, split: boolean): number => {
   if (phase.minutes === 0 || phase.attendance === 'none') return NONE;
