@@ -50,7 +50,7 @@ export const changePassword = endpoint({
 });
 
 const token = z.string().min(20).max(200);
-/** Always 202 with the same body and in the same time, whether the account exists or not. */
+/** Always 204 and in the same time, whether the account exists or not. */
 export const askForReset = endpoint({
   name: 'ask-for-reset',
   method: 'POST',

@@ -18,7 +18,7 @@ server.once('error', (error: NodeJS.ErrnoException) => {
     fail(`Port ${PORT} of ${HOST} is taken. Stop the program that uses it, or set PORT.`);
   fail(`The web server cannot listen on ${HOST}:${PORT}: ${error.message}`);
 });
-server.listen(PORT, HOST, () => deps.log.info({ host: HOST, port: PORT, url: deps.config.PUBLIC_URL }, 'listening'));
+server.listen(PORT, HOST, () => deps.log.info({ address: server.address(), url: deps.config.PUBLIC_URL }, 'listening'));
 
 let stopping = false;
 async function stop(signal: string): Promise<void> {

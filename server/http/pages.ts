@@ -1,6 +1,6 @@
 import { readFile } from 'node:fs/promises';
 import path from 'node:path';
-import express, { Router } from 'express';
+import express, { Router, type RequestHandler } from 'express';
 import type { Config } from '../config.ts';
 import { notFound, Refusal } from '../errors.ts';
 import { neverStore, nonceOf } from './security.ts';
@@ -19,11 +19,13 @@ export function pages(config: Config): Router {
   router.use('/assets', () => {
     throw notFound();
   });
+  const page: RequestHandler = async (_req, res) => {
+    const html = await readIndex(root);
+    res.type('html').send(html.replaceAll(noncePlace, nonceOf(res)));
+  };
+  router.get('/index.html', neverStore, page);
   router.use(express.static(root, { index: false, maxAge: '1h', setHeaders: revalidate, redirect: false }));
-  router.get('/{*path}', neverStore, async (_req, res) => {
-    const page = await readIndex(root);
-    res.type('html').send(page.replaceAll(noncePlace, nonceOf(res)));
-  });
+  router.get('/{*path}', neverStore, page);
   router.use(() => {
     throw notFound();
   });

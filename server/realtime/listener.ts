@@ -27,10 +27,13 @@ export function listen(options: Options): Listener {
   let timer: NodeJS.Timeout | undefined;
   let closed = false;
 
+  /** A connection may be told lost in several ways; the first one counts. */
+  const given = new WeakSet<pg.Client>();
   const lost = (dead: pg.Client, error?: Error) => {
-    dead.removeAllListeners('end');
+    if (given.has(dead)) return;
+    given.add(dead);
     dead.end().catch(() => undefined); // it is lost anyway
-    if (closed || (client !== null && client !== dead)) return;
+    if (closed) return;
     client = null;
     options.log.warn({ err: error }, 'not listening to the database; trying again');
     clearTimeout(timer);

@@ -13,9 +13,13 @@ export function startTestWorker(
   return startWorker({ ...deps, mailer }, { registry, lanes, retryDelay: () => 30, pollEvery: 30, ...options });
 }
 
-/** Asks again and again, for what shows in no event. Fails after ten seconds with what it saw last. */
-export async function eventually<T>(look: () => Promise<T>, isThere: (seen: T) => boolean): Promise<T> {
-  const end = Date.now() + 10_000;
+/** Asks again and again, for what shows in no event. Fails at last with what it saw last. */
+export async function eventually<T>(
+  look: () => Promise<T>,
+  isThere: (seen: T) => boolean,
+  withinMilliseconds = 30_000,
+): Promise<T> {
+  const end = Date.now() + withinMilliseconds;
   for (;;) {
     const seen = await look();
     if (isThere(seen)) return seen;

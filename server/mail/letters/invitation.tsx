@@ -1,3 +1,4 @@
+/** @jsxRuntime automatic */
 import { Text } from '@react-email/components';
 import type { Role } from '#contracts/common.ts';
 import type { Letter } from '../mailer.ts';

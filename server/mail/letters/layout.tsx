@@ -1,3 +1,4 @@
+/** @jsxRuntime automatic */
 import { Body, Button, Container, Head, Heading, Hr, Html, Preview, Section, Text } from '@react-email/components';
 import { render, toPlainText } from '@react-email/render';
 import type { ReactNode } from 'react';

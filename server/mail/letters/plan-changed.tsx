@@ -1,3 +1,4 @@
+/** @jsxRuntime automatic */
 import { Section, Text } from '@react-email/components';
 import type { PlanChangedData, PlanSlot } from '../../db/letters.ts';
 import type { Letter } from '../mailer.ts';

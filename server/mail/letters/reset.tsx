@@ -1,3 +1,4 @@
+/** @jsxRuntime automatic */
 import { Text } from '@react-email/components';
 import type { Letter } from '../mailer.ts';
 import { paragraph, small, write } from './layout.tsx';
