@@ -15,7 +15,13 @@ export function Component() {
   const { data: me } = useQuery(meQuery);
   const { pathname, search, hash } = useLocation();
   if (me === undefined) return <PageSkeleton />;
-  if (me === null) return <Navigate to={paths.signIn(pathname + search + hash)} replace />;
+  if (me === null)
+    return (
+      <>
+        <Navigate to={paths.signIn(pathname + search + hash)} replace />
+        <PageSkeleton />
+      </>
+    );
   if (me.shops.length === 0) return <NoShop me={me} />;
   return <InShop me={me} />;
 }

@@ -11,8 +11,10 @@ class FakeSource extends EventTarget {
   static CLOSED = 2;
   static all: FakeSource[] = [];
   readyState = 0;
-  constructor(readonly url: string) {
+  readonly url: string;
+  constructor(url: string) {
     super();
+    this.url = url;
     FakeSource.all.push(this);
   }
   close(): void {

@@ -13,7 +13,7 @@ describe('a form half filled', () => {
     const first = open();
     expect(first.result.current).toMatchObject({ start: '', wasKept: false });
     act(() => first.result.current.keep('tailgate'));
-    act(() => vi.advanceTimersByTime(300));
+    act(() => void vi.advanceTimersByTime(300));
     first.unmount();
     expect(open().result.current).toMatchObject({ start: 'tailgate', wasKept: true });
   });

@@ -1,6 +1,9 @@
 import '@testing-library/jest-dom/vitest';
-import { cleanup } from '@testing-library/react';
+import { cleanup, configure } from '@testing-library/react';
 import { afterEach } from 'vitest';
+
+// Against hanging, not against slowness: a busy machine fails no test.
+configure({ asyncUtilTimeout: 30_000 });
 
 afterEach(() => {
   cleanup();

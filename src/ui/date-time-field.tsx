@@ -1,7 +1,7 @@
 import { useId } from 'react';
 import { CircleAlert } from 'lucide-react';
 import { cx } from '#src/lib/cx.ts';
-import { boxClasses } from './field.tsx';
+import { boxClasses } from './box-classes.ts';
 
 /** A day of the calendar and a time as typed; both may be empty. */
 export type DateTimeText = { day: string; time: string };

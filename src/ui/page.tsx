@@ -1,5 +1,6 @@
-import { useEffect, type ReactNode } from 'react';
+import type { ReactNode } from 'react';
 import { cx } from '#src/lib/cx.ts';
+import { useTitle } from '#src/lib/use-title.ts';
 
 type PageProps = {
   /** Shown as the page's heading and in the tab of the browser. */
@@ -28,10 +29,4 @@ export function Page({ title, about, actions, width = 'usual', children }: PageP
       {children}
     </div>
   );
-}
-
-export function useTitle(title: string): void {
-  useEffect(() => {
-    document.title = `${title} · Ovenbird`;
-  }, [title]);
 }

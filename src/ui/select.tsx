@@ -1,7 +1,8 @@
 import { ChevronDown } from 'lucide-react';
 import type { ComponentProps, ReactNode } from 'react';
 import { cx } from '#src/lib/cx.ts';
-import { boxClasses, Field, type FieldProps } from './field.tsx';
+import { boxClasses } from './box-classes.ts';
+import { Field, type FieldProps } from './field.tsx';
 
 type SelectProps = FieldProps & Omit<ComponentProps<'select'>, 'className' | 'children'> & { children: ReactNode };
 

@@ -1,7 +1,8 @@
 import { Eye, EyeOff } from 'lucide-react';
 import { useState, type ComponentProps } from 'react';
 import { cx } from '#src/lib/cx.ts';
-import { boxClasses, Field, type FieldProps } from './field.tsx';
+import { boxClasses } from './box-classes.ts';
+import { Field, type FieldProps } from './field.tsx';
 
 type TextFieldProps = FieldProps & Omit<ComponentProps<'input'>, 'className'>;
 

@@ -88,7 +88,7 @@ describe('a question before what cannot be undone', () => {
 
 describe('a menu', () => {
   it('works by keys', async () => {
-    const chosen = vi.fn();
+    const chosen = vi.fn<(what: string) => void>();
     render(
       <Menu trigger={<Button>More</Button>}>
         <MenuItem onSelect={() => chosen('pin')}>Pin</MenuItem>

@@ -1,6 +1,7 @@
 import { cx } from '#src/lib/cx.ts';
 import type { Formats } from '#src/lib/formats.ts';
 import { windowTone, type WindowTone } from '#src/lib/window-tone.ts';
+import { windowWords } from '#src/lib/window-words.ts';
 
 type WindowGaugeProps = {
   window: { earliest: string | null; latest: string | null };
@@ -38,16 +39,6 @@ export function WindowGauge({ window, start, formats, large, className }: Window
       />
     </span>
   );
-}
-
-/** The window and the start in words: what the little line says without eyes. */
-export function windowWords(window: WindowGaugeProps['window'], start: string, f: Formats): string {
-  const { earliest, latest } = window;
-  const near = (at: string) => (f.dayOf(at) === f.dayOf(start) ? f.time(at) : f.dateTime(at));
-  const ends = [earliest === null ? '' : `from ${near(earliest)}`, latest === null ? '' : `to ${near(latest)}`];
-  const tone = windowTone(window, start);
-  const verdict = { room: '', closing: ', closing soon', outside: ', outside its window' }[tone];
-  return `Window ${ends.filter(Boolean).join(' ') || 'open'}, starts ${near(start)}${verdict}`;
 }
 
 const hour = 3_600_000;

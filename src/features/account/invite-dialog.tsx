@@ -1,6 +1,6 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useId } from 'react';
-import { useForm } from 'react-hook-form';
+import { useForm, useWatch } from 'react-hook-form';
 import { role as roleSchema, type Role } from '#contracts/common.ts';
 import { readDay } from '#contracts/day.ts';
 import { email, invite } from '#contracts/session.ts';
@@ -32,7 +32,8 @@ export function InviteDialog({ open, onOpenChange }: InviteDialogProps) {
   const client = useQueryClient();
   const formId = useId();
   const people = usePeople(open);
-  const { register, handleSubmit, formState, reset, watch } = useForm<Typed>({ defaultValues: empty });
+  const { register, handleSubmit, formState, reset, control } = useForm<Typed>({ defaultValues: empty });
+  const role = useWatch({ control, name: 'role' });
   const send = useMutation({
     mutationFn: ({ email, role, personId }: Typed) =>
       call(invite, {
@@ -76,7 +77,7 @@ export function InviteDialog({ open, onOpenChange }: InviteDialogProps) {
             validate: (text) => email.safeParse(text.trim()).success || 'Enter an e-mail address.',
           })}
         />
-        <Select label="Role" hint={may[watch('role')]} {...register('role')}>
+        <Select label="Role" hint={may[role]} {...register('role')}>
           {roleSchema.options.map((role) => (
             <option key={role} value={role}>
               {roleWord[role]}

@@ -96,7 +96,7 @@ function LetterTable({ letters }: { letters: Letter[] }) {
         {letters.map((letter) => (
           <tr key={letter.id}>
             <Td className="font-semibold whitespace-nowrap">{kinds[letter.kind] ?? letter.kind}</Td>
-            <Td className="break-all">{letter.to}</Td>
+            <Td className="min-w-40 wrap-anywhere">{letter.to}</Td>
             <Td>
               <Badge tone={states[letter.state].tone}>{states[letter.state].word}</Badge>
               {letter.lastError && <p className="mt-1 max-w-prose text-xs text-muted">{letter.lastError}</p>}

@@ -26,8 +26,10 @@ export function MemberRow({ member }: { member: Member }) {
   return (
     <>
       <tr className={shown.disabled ? 'text-muted' : undefined}>
-        <Td className="font-semibold">{member.name}</Td>
-        <Td className="break-all">{member.email}</Td>
+        <Td>
+          <span className="font-semibold">{member.name}</span>
+          <span className="block text-xs wrap-anywhere text-muted">{member.email}</span>
+        </Td>
         <Td>
           {isMe ? (
             <>{roleWord[member.role]} (you)</>
@@ -35,7 +37,7 @@ export function MemberRow({ member }: { member: Member }) {
             <Select
               label={`Role of ${member.name}`}
               hideLabel
-              className="w-36"
+              className="w-32"
               value={shown.role}
               disabled={change.isPending || shown.disabled}
               onChange={(event) => change.mutate({ role: roleSchema.parse(event.target.value) })}
@@ -66,7 +68,7 @@ export function MemberRow({ member }: { member: Member }) {
       </tr>
       {change.isError && (
         <tr>
-          <Td colSpan={4}>
+          <Td colSpan={3}>
             <ErrorNote error={change.error} what={`${member.name} stays as before.`} />
           </Td>
         </tr>

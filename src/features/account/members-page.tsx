@@ -56,7 +56,6 @@ function Lists({ members, invitations }: ReplyOf<typeof listMembers>) {
         <thead>
           <tr>
             <Th>Name</Th>
-            <Th>E-mail</Th>
             <Th>Role</Th>
             <Th>
               <span className="sr-only">May sign in</span>

@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import { useTitle } from '#src/ui/page.tsx';
+import { useTitle } from '#src/lib/use-title.ts';
 
 /** One screen at the front door: heading, a word on what it is for, a form or an outcome. */
 export function DoorCard({ title, about, children }: { title: string; about?: ReactNode; children: ReactNode }) {

@@ -66,7 +66,7 @@ function StageBadges({ bar }: { bar: Bar }) {
   const states = { planned: 'planned', running: 'running now', done: 'done' } as const;
   return (
     <div className="flex flex-wrap gap-1.5">
-      <Badge tone={bar.state === 'done' ? 'moss' : bar.state === 'running' ? 'ember' : 'plain'}>
+      <Badge tone={bar.state === 'done' ? 'moss' : bar.state === 'running' ? 'petrol' : 'plain'}>
         {states[bar.state]}
       </Badge>
       {bar.late && (

@@ -10,10 +10,10 @@ import { WindowGauge } from '#src/ui/window-gauge.tsx';
 import { latenessWords, minutesLater, piecesOf } from '../model/stage-times.ts';
 import { WaysOnOffer } from './ways-on-offer.tsx';
 
-type StageItemProps = { stage: JobStage; isLast: boolean; isWithdrawn: boolean };
+type StageItemProps = { stage: JobStage; isLast: boolean; isWithdrawn: boolean; heatLimit: number | null };
 
 /** A knot on the line: when and where the stage is, its phases, its window, its other ways, how it went. */
-export function StageItem({ stage, isLast, isWithdrawn }: StageItemProps) {
+export function StageItem({ stage, isLast, isWithdrawn, heatLimit }: StageItemProps) {
   const { duration } = useFormats();
   const pieces = piecesOf(stage);
   const minutes = pieces.reduce((sum, piece) => sum + piece.size, 0);
@@ -33,7 +33,9 @@ export function StageItem({ stage, isLast, isWithdrawn }: StageItemProps) {
         <PhaseBar pieces={pieces} label={words} height={stage.state === 'done' ? 'line' : 'row'} />
         <Happened stage={stage} />
         {stage.state === 'waiting' && <Window stage={stage} />}
-        {stage.state === 'waiting' && <WaysOnOffer ways={stage.ways} chosen={stage.booking?.way ?? null} />}
+        {stage.state === 'waiting' && (
+          <WaysOnOffer ways={stage.ways} chosen={stage.booking?.way ?? null} heatLimit={heatLimit} />
+        )}
       </div>
     </li>
   );
