@@ -96,7 +96,7 @@ describe('the bench', () => {
     fakeApi({ [address]: { body: bench }, [deed(running, 'finish')]: 'unreachable' });
     show();
     await userEvent.click(await screen.findByRole('button', { name: 'Done: 2418 Base and clear' }));
-    expect(await screen.findByText(/Your tap is kept/)).toBeVisible();
+    expect(await screen.findByText(/Your tap is kept and sent by itself/)).toBeVisible();
     expect(JSON.stringify({ ...localStorage })).toContain(running?.id);
   });
 

@@ -32,6 +32,12 @@ export function BenchView({ data, arrivedAt }: { data: View; arrivedAt: number }
           </button>
         </ErrorNote>
       )}
+      {isStuck && (
+        <p role="status" className="rounded border border-amber bg-amber-soft px-4 py-3 text-base font-semibold">
+          No answer from the server. {taps.length > 1 ? `Your ${taps.length} taps are` : 'Your tap is'} kept and sent by
+          itself.
+        </p>
+      )}
       {data.stages.length === 0 && <NothingBooked view={data} isToday={isToday} />}
       <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
         <div className="flex min-w-0 flex-col gap-5">

@@ -41,7 +41,7 @@ export function PendingMark({ waiting }: { waiting: Waiting }) {
   return (
     <p role="status" className={waiting ? 'text-base font-semibold text-amber' : 'sr-only'}>
       {waiting === 'sending' && 'Sending…'}
-      {waiting === 'stuck' && 'No connection. Your tap is kept and sent as soon as there is one.'}
+      {waiting === 'stuck' && 'Not sent yet'}
     </p>
   );
 }

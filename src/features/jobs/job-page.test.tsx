@@ -52,6 +52,14 @@ describe('a job’s page', () => {
     expect(part.getByRole('note', { name: 'Caution' })).toBeVisible();
   });
 
+  it('marks ways that are too hot for the vehicle', async () => {
+    // 120 F and so under the 60 C of the sample's booth bake.
+    fakeApi({ [`GET ${path}`]: { body: { ...job, heatLimitCelsius: null } } });
+    show();
+    const cure = (await screen.findByRole('heading', { name: 'Bake' })).closest('li');
+    expect(cure).toHaveTextContent('Booth bake, 55 min, 60 °Cabove the heat limit');
+  });
+
   it('explains what somebody else changed, and saves only the own field over it when told to', async () => {
     const theirs: Job = { ...job, version: 5, promiseAt: '2026-03-13T10:00:00.000Z' };
     const { sent } = fakeApi({

@@ -2,6 +2,7 @@ import type { Job } from '#contracts/jobs.ts';
 import type { PieceKind } from '#src/lib/phase-words.ts';
 import { Caution } from '#src/ui/caution.tsx';
 import { PhaseLegend } from '#src/ui/phase-bar.tsx';
+import { heatLimitOf } from '../model/assumed-limit.ts';
 import { piecesOf } from '../model/stage-times.ts';
 import { StageItem } from './stage-item.tsx';
 
@@ -29,6 +30,7 @@ export function Chain({ job }: { job: Job }) {
             stage={stage}
             isLast={i === job.stages.length - 1}
             isWithdrawn={job.state === 'withdrawn'}
+            heatLimit={heatLimitOf(job)}
           />
         ))}
       </ol>

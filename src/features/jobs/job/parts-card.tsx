@@ -2,7 +2,7 @@ import { Zap } from 'lucide-react';
 import type { Job } from '#contracts/jobs.ts';
 import { useFormats } from '#src/lib/session.ts';
 import { HeatCaution } from '../heat-caution.tsx';
-import { assumedLimit } from '../model/assumed-limit.ts';
+import { assumedLimit, heatLimitOf } from '../model/assumed-limit.ts';
 import { substrateWords } from '../substrate-words.ts';
 import { SideCard } from './side-card.tsx';
 
@@ -31,7 +31,7 @@ function HeatLimit({ job }: { job: Job }) {
   const { temperature } = useFormats();
   const { electric, heatLimitCelsius, heatLimitMinutes } = job;
   if (!electric && heatLimitCelsius === null && heatLimitMinutes === null) return null;
-  const celsius = heatLimitCelsius ?? (electric ? assumedLimit.celsius : null);
+  const celsius = heatLimitOf(job);
   const minutes = heatLimitMinutes ?? (electric ? assumedLimit.minutes : null);
   const limit = [
     celsius === null ? '' : `at most ${temperature(celsius, 'limit')}`,
