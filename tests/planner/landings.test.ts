@@ -72,7 +72,7 @@ function scan(problem: Problem, made: Plan, stageId: string, place: string): num
 const minutes = (list: readonly Interval[]): number[] =>
   list.flatMap(([from, to]) => Array.from({ length: to - from }, (_, k) => from + k));
 
-/** Generated shops small enough to scan, with no waits: those are laid out as early as possible, not in every way. */
+/** Generated shops small enough to scan, without waits (those are laid out as early as can be, not in every way) and without stages that take no time. */
 function smallProblem(seed: number): Problem {
   const p = generateShop(seed);
   const horizon = 500;
@@ -88,7 +88,10 @@ function smallProblem(seed: number): Problem {
       release: Math.min(job.release, 100),
       stages: job.stages.map((s) => ({
         ...s,
-        modes: s.modes.map((m) => ({ ...m, phases: m.phases.map((ph) => ({ ...ph, wait: 0 })) })),
+        modes: s.modes.map((m) => ({
+          ...m,
+          phases: m.phases.map((ph) => ({ ...ph, wait: 0, minutes: Math.max(1, ph.minutes) })),
+        })),
       })),
     })),
   };
@@ -110,7 +113,7 @@ describe('landings', () => {
           asked += want.length;
         }
       }),
-      { numRuns: 40, seed: 7 },
+      { numRuns: 25, seed: 7 },
     );
     expect(asked).toBeGreaterThan(1000); // else the property would hold for want of landings
   });
