@@ -2,14 +2,10 @@ import { bakeRefusals } from '#chemistry/limits/bake-allowed.ts';
 import { BOOTH_AIR_LIMITS_CELSIUS, UNRECORDED_BATTERY_LIMIT } from '#chemistry/limits/heat-sources.ts';
 import { strictestLimit, type HeatLimit, type VehicleHeat } from '#chemistry/limits/strictest-limit.ts';
 import { purgeBeforeHeat } from '#chemistry/purge/purge-minutes.ts';
-import { celsiusFromFahrenheit } from '#chemistry/units/temperature.ts';
 import type { Way } from '#contracts/sheets.ts';
 import type { OpenJob } from '#server/db/open-jobs.ts';
 import type { PlaceSetUp } from '#server/db/resources.ts';
 import type { WayRefusal } from './refusals.ts';
-
-/** Several vehicle makers allow 120 F to a battery nobody has recorded a limit for; never rounded up. */
-const UNRECORDED_CELSIUS = celsiusFromFahrenheit(120);
 
 /** Booth air that bakes, as opposed to a lamp in front of the panel. */
 export const heatsBooth = (way: Way): boolean =>
@@ -28,7 +24,7 @@ export function heatMinutes(way: Way, booked?: readonly (readonly [number, numbe
   }, 0);
 }
 
-/** What the vehicle and the parts of a job stand. A battery without a recorded limit: 120 F and 45 min in all. */
+/** What the vehicle and the parts of a job stand. A battery without a recorded limit: 49 C and 45 min in all. */
 export function heatLimitOf(job: OpenJob): HeatLimit {
   const recorded = job.heatLimitCelsius !== null || job.heatLimitMinutes !== null;
   const vehicle: VehicleHeat =
@@ -37,7 +33,7 @@ export function heatLimitOf(job: OpenJob): HeatLimit {
           battery: true,
           batteryOut: false,
           recorded: {
-            celsius: job.heatLimitCelsius ?? (job.electric ? UNRECORDED_CELSIUS : 200),
+            celsius: job.heatLimitCelsius ?? (job.electric ? UNRECORDED_BATTERY_LIMIT.celsius : 200),
             minutes: job.heatLimitMinutes ?? (job.electric ? UNRECORDED_BATTERY_LIMIT.minutes : null),
           },
         }
