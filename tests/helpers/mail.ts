@@ -9,6 +9,8 @@ export type MailServer = {
   letters: ParsedMail[];
   /** Resolves once so many letters were taken. */
   took(count: number): Promise<void>;
+  /** As if the line went dead: every open connection is cut. */
+  hangUp(): void;
   close(): Promise<void>;
 };
 
@@ -41,6 +43,10 @@ export async function mailServer(options: SMTPServerOptions = {}): Promise<MailS
         if (letters.length >= count) done();
         else waiting.push({ count, done });
       }),
+    hangUp: () => {
+      for (const { _socket } of server.connections as unknown as Iterable<{ _socket: { destroy(): void } }>)
+        _socket.destroy();
+    },
     close: () => new Promise((done) => server.close(done)),
   };
 }

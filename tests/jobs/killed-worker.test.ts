@@ -82,7 +82,7 @@ test('a worker killed in the middle of a letter loses none; what comes twice has
   const beforeKill = [...taken];
   hold = false;
   const second = startWorker(mail.url);
-  type Row = { id: string; state: string };
+  type Row = { shop_id: string; id: string; state: string };
   const letters = await eventually(
     () => app.owner<Row>('letter').where({ shop_id: owner.shopId }),
     (rows) => rows.every((row) => row.state === 'sent'),

@@ -64,7 +64,7 @@ const queue = (more: Partial<Parameters<typeof queueLetter>[2]> = {}) =>
       ...more,
     }),
   );
-type LetterRow = { id: string; state: string; last_error: string | null; to_email: string };
+type LetterRow = { shop_id: string; id: string; state: string; last_error: string | null; to_email: string };
 const letters = () => app.owner<LetterRow>('letter').where({ shop_id: owner.shopId });
 const settled = () => eventually(letters, (rows) => rows.every((row) => row.state !== 'queued'));
 
@@ -107,17 +107,15 @@ describe('a letter', () => {
 
   test('goes out in the end when the mail server refuses, hangs up in the middle and then works', async () => {
     const answers: ('refuse' | 'hang up')[] = ['refuse', 'hang up', 'refuse', 'hang up'];
-    const mail = await postOffice({
+    const mail: MailServer = await postOffice({
       onMailFrom: (_address, _session, done) =>
         answers[0] === 'refuse'
           ? done(Object.assign(new Error('try later'), { responseCode: 451, gone: answers.shift() }))
           : done(),
-      onRcptTo(_address, session, done) {
+      onRcptTo(_address, _session, done) {
         if (answers[0] !== 'hang up') return done();
         answers.shift();
-        // The server's own connection of this session: as if the line went dead.
-        for (const connection of this.connections as Iterable<{ session: unknown; _socket: { destroy(): void } }>)
-          if (connection.session === session) connection._socket.destroy();
+        mail.hangUp();
       },
     });
     work(app.deps, mail.url);
