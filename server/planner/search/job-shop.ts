@@ -19,13 +19,13 @@ export type JobShop = {
   ways: Way[][];
 };
 
-const plainWay = (shop: Shop, way: Way): boolean =>
+const plainWay = (shop: Shop, way: Way): boolean => plainWork(shop, way) && way.gapMin === 0 && way.gapMax >= NEVER;
+
+const plainWork = (shop: Shop, way: Way): boolean =>
   !way.stay &&
   !way.hands &&
   way.lampCount === 0 &&
   way.settle === 0 &&
-  way.gapMin === 0 &&
-  way.gapMax >= NEVER &&
   way.segments === 1 &&
   way.segNeed[0] !== HANDS &&
   way.segNeed[0] !== PAUSED &&
@@ -38,12 +38,26 @@ const alwaysOpen = ({ open, horizon }: Shop): boolean => open.n === 1 && open.fr
 
 const airMatters = (shop: Shop): boolean => shop.lampCount > 0;
 
+/** Only the makespan counts, nothing is fixed, and the places are machines and no more. */
+function onlyMachines(shop: Shop): boolean {
+  const w = shop.problem.objective;
+  if (w.makespan <= 0 || w.tardiness > 0 || w.flow > 0 || w.booth > 0 || w.moves > 0) return false;
+  if (shop.problem.fixed.length > 0 || airMatters(shop) || shop.stageCount === 0) return false;
+  return !shop.placeKind.some((k) => k === RACK) && !shop.placeClosed.some((c) => c.n > 0);
+}
+
+/** Whether the problem is a no-wait job shop without choice: each operation begins when the one before it ends. */
+export const isNoWait = (shop: Shop): boolean =>
+  onlyMachines(shop) &&
+  shop.ways.every((ways, s) => {
+    const way = ways[0]!;
+    const tight = s === shop.jobs[shop.stageJob[s]!]!.first || (way.gapMin === 0 && way.gapMax === 0);
+    return ways.length === 1 && way.places.length === 1 && plainWork(shop, way) && tight;
+  });
+
 /** The problem as a job shop, or null where it is more than that. */
 export function asJobShop(shop: Shop): JobShop | null {
-  const w = shop.problem.objective;
-  if (w.makespan <= 0 || w.tardiness > 0 || w.flow > 0 || w.booth > 0 || w.moves > 0) return null;
-  if (shop.problem.fixed.length > 0 || airMatters(shop) || shop.stageCount === 0) return null;
-  if (shop.placeKind.some((k) => k === RACK) || shop.placeClosed.some((c) => c.n > 0)) return null;
+  if (!onlyMachines(shop)) return null;
   if (!shop.ways.every((ways) => ways.every((way) => plainWay(shop, way)))) return null;
   const options = shop.ways.map((ways) => ways.flatMap((way) => [...way.places].map((place) => ({ way, place }))));
   return {

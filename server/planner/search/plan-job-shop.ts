@@ -14,8 +14,8 @@ function graphOf(s: Search, js: JobShop): Graph {
     g.option[v] = option;
     g.place[v] = js.places[v]![option]!;
     g.minutes[v] = js.minutes[v]![option]!;
-    linkAfter(g, v, last[g.place[v]!]!);
-    last[g.place[v]!] = v;
+    linkAfter(g, v, last[g.place[v]]!);
+    last[g.place[v]] = v;
   }
   measure(js, g);
   return g;

@@ -6,7 +6,8 @@ import type { Shop } from '../engine/shop.ts';
 import { makeRandom, type Random } from '../random.ts';
 import type { PlanOptions, Stats } from '../types.ts';
 import { anneal } from './anneal.ts';
-import { asJobShop } from './job-shop.ts';
+import { asJobShop, isNoWait } from './job-shop.ts';
+import { planNoWait } from './no-wait.ts';
 import { planJobShop } from './plan-job-shop.ts';
 import { makeSearch, type Search, startFrom } from './candidate.ts';
 import { costShown, type Kept, keepHeld, makeKept, standOn } from './kept.ts';
@@ -42,20 +43,22 @@ export function searchPlan(shop: Shop, options: PlanOptions): Found {
     over: false,
   };
   firstPlans(run);
-  const jobShop = asJobShop(shop);
-  const allPlaced = run.best.cost < OUT;
-  if (jobShop && allPlaced && !isOver(run)) {
-    standOn(s, run.best);
-    planJobShop(
-      s,
-      jobShop,
-      run.random,
-      () => isOver(run),
-      () => keep(run),
-    );
-  } else rounds(run);
+  if (!isOver(run)) searchOn(run);
   standOn(s, run.best);
   return { d: s.d, bound: run.bound, stats: { evaluations: s.evaluations, improvements: run.improvements } };
+}
+
+/** The search that the structure of the problem asks for. */
+function searchOn(run: Run): void {
+  const { s, random } = run;
+  const { shop } = s.d;
+  const jobShop = asJobShop(shop);
+  const over = (): boolean => isOver(run);
+  const better = (): void => keep(run);
+  standOn(s, run.best);
+  if (run.best.cost < OUT && jobShop) planJobShop(s, jobShop, random, over, better);
+  else if (run.best.cost < OUT && isNoWait(shop)) planNoWait(s, random, over, better);
+  else rounds(run);
 }
 
 /** Whether the search has to end: budget, stop, or nothing left to gain. */
