@@ -5,12 +5,12 @@ import { shopKey } from '#src/lib/query-keys.ts';
 import { dayKey } from './day-query.ts';
 import { forgetDraft } from './draft-head.ts';
 
-/** What the draft would change, asked for when somebody looks; asked again whenever the draft changes. */
-export const useComparison = (shopId: string, draft: { id: string; version: number } | null) =>
+/** What the draft would change, asked for while somebody looks; asked again whenever the draft changes. */
+export const useComparison = (shopId: string, draft: { id: string; version: number }, looking: boolean) =>
   useQuery({
-    queryKey: shopKey(shopId, 'draft', 'compare', draft?.id, draft?.version),
+    queryKey: shopKey(shopId, 'draft', 'compare', draft.id, draft.version),
     queryFn: ({ signal }) => call(compareDraft, { params: { shopId }, signal }),
-    enabled: draft !== null,
+    enabled: looking,
     placeholderData: (before) => before,
   });
 

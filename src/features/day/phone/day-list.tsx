@@ -62,7 +62,7 @@ function StageCard({ item, view, formats, severalDays, isNow, onOpen }: CardProp
   return (
     <button
       type="button"
-      className={`card flex w-full flex-col gap-1.5 p-3 text-left ${isNow ? 'border-ember' : ''} ${head.state === 'done' ? 'opacity-65' : ''}`}
+      className={`card flex w-full flex-col gap-1.5 p-3 text-left ${isNow ? 'border-ember' : ''}`}
       onClick={() => onOpen(item)}
     >
       <span className="flex w-full flex-wrap items-center gap-x-2 gap-y-1">
@@ -70,7 +70,7 @@ function StageCard({ item, view, formats, severalDays, isNow, onOpen }: CardProp
           {severalDays ? `${formats.date(item.from)} ` : ''}
           {formats.span(item.from, item.to)}
         </b>
-        {head.state !== 'planned' && <Badge tone={head.state === 'done' ? 'moss' : 'ember'}>{head.state}</Badge>}
+        {head.state !== 'planned' && <Badge tone={head.state === 'done' ? 'moss' : 'petrol'}>{head.state}</Badge>}
         {members.some((bar) => bar.late) && (
           <Badge tone="crimson" solid>
             late

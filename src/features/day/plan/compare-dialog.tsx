@@ -16,8 +16,9 @@ const count = (n: number, one: string) => `${n} ${one}${n === 1 ? '' : 's'}`;
 
 /** Draft beside posted plan: what moves, which promises it costs or saves, who hears of it; and the way to post it. */
 export function CompareDialog({ shopId, draft, formats, onClose }: Props) {
-  const comparison = useComparison(shopId, draft);
   const { post } = useDraftEnd(shopId);
+  // Once it is being posted there is soon no draft left to ask about.
+  const comparison = useComparison(shopId, draft, post.isIdle || post.isError);
   const { data } = comparison;
   const submit = () =>
     post.mutate(data?.draft.version ?? draft.version, {

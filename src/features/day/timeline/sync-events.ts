@@ -28,8 +28,11 @@ export function syncEvents(
     for (const id of gone) api.getEventById(id)?.remove();
     for (const thing of changed) {
       const before = told.get(thing.id);
-      if (before) change(api, before, thing, movable);
-      else api.addEvent(inputOf(thing, movable));
+      if (before && isMovable(before) === isMovable(thing)) change(api, before, thing);
+      else {
+        api.getEventById(thing.id)?.remove();
+        api.addEvent(inputOf(thing, movable));
+      }
     }
   });
   return now;
@@ -49,7 +52,7 @@ function inputOf(thing: Drawn | ClosedTime, movable: boolean) {
   const common = { id: thing.id, start: thing.from, end: thing.to };
   if (isDrawn(thing)) {
     const editable = movable && mayMove(thing);
-    return { ...common, resourceId: thing.rowId, editable, extendedProps: { item: thing } };
+    return { ...common, resourceId: thing.rowId, editable, resourceEditable: editable, extendedProps: { item: thing } };
   }
   const where = thing.rowId === null ? {} : { resourceId: thing.rowId };
   return {
@@ -65,12 +68,14 @@ function inputOf(thing: Drawn | ClosedTime, movable: boolean) {
 export const mayMove = (item: Drawn): boolean =>
   item.kind === 'stage' && item.members.every((bar) => bar.state === 'planned');
 
-function change(api: CalendarApi, before: Drawn | ClosedTime, thing: Drawn | ClosedTime, movable: boolean): void {
+// Whether an event may change rows is settled when it is made.
+const isMovable = (thing: Drawn | ClosedTime): boolean => isDrawn(thing) && mayMove(thing);
+
+function change(api: CalendarApi, before: Drawn | ClosedTime, thing: Drawn | ClosedTime): void {
   const event = api.getEventById(thing.id);
   if (!event) return;
   if (before.from !== thing.from || before.to !== thing.to) event.setDates(thing.from, thing.to);
   if (before.rowId !== thing.rowId && thing.rowId !== null) event.setResources([thing.rowId]);
   if (!isDrawn(thing)) return event.setProp('title', thing.label);
   event.setExtendedProp('item', thing);
-  event.setProp('editable', movable && mayMove(thing));
 }

@@ -56,7 +56,7 @@ export const Timeline = memo(function Timeline(props: TimelineProps) {
   const drag = useDrag(frame, { view, axis, onDrop: props.onDrop });
   const onKeyDown = useArrows(frame, board, props.onNudge);
   return (
-    <div ref={frame} className="timeline" onKeyDown={onKeyDown}>
+    <div ref={frame} className="timeline" role="group" aria-label="Booth day" onKeyDown={onKeyDown}>
       <FullCalendar
         ref={calendar}
         plugins={plugins}
@@ -81,7 +81,7 @@ export const Timeline = memo(function Timeline(props: TimelineProps) {
         resourceOrder="order"
         resourceGroupField="group"
         resourceAreaWidth={`${rowNamesWidth}px`}
-        resourceAreaHeaderContent=" "
+        resourceAreaHeaderContent="Place"
         resourceLabelContent={rowLabel}
         resourceGroupLabelContent={groupLabel}
         resourceLaneContent={laneContent}
