@@ -95,7 +95,7 @@ describe('heat', () => {
     const electric = job([stage([spray()]), only], { electric: true });
     const { unplaced, items } = planned(facts(shop, [electric, job([stage([spray()])])]));
     expect(unplaced).toEqual([
-      { jobId: electric.id, stageId: only.id, reason: expect.stringMatching(/heat limit of 48\.8 C/) },
+      { jobId: electric.id, stageId: only.id, reason: expect.stringMatching(/heat limit of 49 C/) },
     ]);
     expect(items).toHaveLength(1);
   });
