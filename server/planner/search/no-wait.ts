@@ -5,6 +5,11 @@ import { attempt, type Search, sortByStart } from './candidate.ts';
 /** Two jobs meet on a machine while the second starts more than `lo` and less than `hi` minutes after the first. */
 type Meeting = { other: number; lo: number; hi: number };
 
+/** Moves per job without success after which the search scatters the jobs. */
+const RESTART = 100;
+/** By how much a pair that meets grows dearer, where 1 is the weight to begin with. */
+const DEARER = 0.3;
+
 type Shifts = {
   jobs: number;
   length: Int32Array;
@@ -120,7 +125,7 @@ function learn(w: Shifts): void {
   for (let j = 0; j < w.jobs; j++)
     for (const { other, lo, hi } of w.meetings[j]!) {
       const d = w.start[j]! - w.start[other]!;
-      if (d > lo && d < hi) w.weight[j * w.jobs + other]! += 1;
+      if (d > lo && d < hi) w.weight[j * w.jobs + other]! += DEARER;
     }
 }
 
@@ -146,8 +151,15 @@ export function planNoWait(s: Search, random: Random, over: () => boolean, keep:
     const j = pick(w, n, random);
     if (moveJob(w, j, end, random) >= 0) learn(w);
     w.tabu[j] = n + 1 + below(random, 1 + (w.jobs >> 2));
-    if (n % 20_000 === 0) w.weight.fill(1);
+    if (n % (RESTART * w.jobs) === 0) scatter(w, end, random);
   }
+}
+
+/** Every job to some start, and all pairs equally dear again. */
+function scatter(w: Shifts, end: number, random: Random): void {
+  w.weight.fill(1);
+  for (let j = 0; j < w.jobs; j++)
+    w.start[j] = w.release[j]! + below(random, end - w.length[j]! - w.release[j]! + 1);
 }
 
 /** A job that meets another, by lot, rather not one that has just moved. */
