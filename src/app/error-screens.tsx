@@ -10,8 +10,8 @@ export function NotFound() {
   return (
     <Page title="There is nothing here" width="text">
       <p>
-        No page has the address <code className="break-all">{pathname}</code>. It may have been typed wrong, or the link
-        is an old one.
+        No page has the address <code className="wrap-anywhere">{pathname}</code>. It may have been typed wrong, or the
+        link is an old one.
       </p>
       <Button asChild look="primary" className="self-start">
         <Link to={paths.home()}>Go to your start page</Link>

@@ -1,4 +1,4 @@
-import { BarChart3, CalendarClock, ClipboardList, SprayCan } from 'lucide-react';
+import { BarChart3, CalendarClock, ClipboardList, SprayCan, Thermometer } from 'lucide-react';
 import { NavLink } from 'react-router-dom';
 import { cx } from '#src/lib/cx.ts';
 import { may, useShop } from '#src/lib/session.ts';
@@ -10,6 +10,7 @@ function usePlaces() {
     { to: paths.day(), label: 'Booth day', Icon: CalendarClock, seen: true },
     { to: paths.jobs(), label: 'Jobs', Icon: ClipboardList, seen: true },
     { to: paths.bench(), label: 'Bench', Icon: SprayCan, seen: may.workStages(role) },
+    { to: paths.cure(), label: 'Cure desk', Icon: Thermometer, seen: may.workStages(role) },
     { to: paths.use(), label: 'Booth use', Icon: BarChart3, seen: may.seeUse(role) },
   ].filter((place) => place.seen);
 }

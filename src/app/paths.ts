@@ -13,6 +13,7 @@ export const paths = {
   job: (jobId: string) => `/jobs/${jobId}`,
   bench: (search?: Search) => withSearch('/bench', search),
   use: (search?: Search) => withSearch('/use', search),
+  cure: (search?: Search) => withSearch('/cure', search),
   account: () => '/account',
   members: () => '/shop/members',
   letters: () => '/shop/letters',

@@ -10,6 +10,7 @@ const atDesk: RouteObject[] = [
   { path: '/jobs', lazy: () => import('#src/features/jobs/jobs-page.tsx') },
   { path: '/jobs/new', lazy: () => import('#src/features/jobs/new-job-page.tsx') },
   { path: '/jobs/:jobId', lazy: () => import('#src/features/jobs/job-page.tsx') },
+  { path: '/cure', lazy: () => import('#src/features/cure/cure-page.tsx') },
   { path: '/use', lazy: () => import('#src/features/use/use-page.tsx') },
   { path: '/account', lazy: () => import('#src/features/account/account-page.tsx') },
   { path: '/shop/members', lazy: () => import('#src/features/account/members-page.tsx') },

@@ -106,9 +106,19 @@ describe('a stream that breaks', () => {
   it('asks who is signed in when it is sent away, and listens on where somebody is', async () => {
     fakeApi({ 'GET /api/session': { body: meAs('painter') } });
     last().tell('bye', {});
-    await vi.advanceTimersByTimeAsync(10);
+    await vi.advanceTimersByTimeAsync(1_100);
     expect(client.getQueryData(['me'])).toMatchObject({ shops: [{ role: 'painter' }] });
     expect(FakeSource.all).toHaveLength(2);
+  });
+  it('waits for the answer to a write, which may bring a new session', async () => {
+    const { sent } = fakeApi({ 'GET /api/session': { body: meAs('painter') } });
+    const writes = vi.spyOn(client, 'isMutating').mockReturnValue(1);
+    last().tell('bye', {});
+    await vi.advanceTimersByTimeAsync(5_000);
+    expect(sent).toEqual([]);
+    writes.mockReturnValue(0);
+    await vi.advanceTimersByTimeAsync(1_100);
+    expect(sent).toHaveLength(1);
   });
   it('stays shut where nobody is', async () => {
     fakeApi({ 'GET /api/session': { status: 401, body: { error: { code: 'not-signed-in' } } } });

@@ -10,6 +10,7 @@ import { meQuery } from './session.ts';
 
 /** A tab out of sight lets its stream go after this time: a browser opens only six to one server over HTTP/1.1. */
 const hiddenFor = 30_000;
+const settle = 1_000;
 /** Notices that come together are answered together. */
 const gather = 60;
 
@@ -38,7 +39,10 @@ export function openLive(client: QueryClient, shopId: string): () => void {
   // The session has ended, or what one may see has changed: asked anew, and listened again where one still may.
   const bye = () => {
     stream.close(false);
-    client.fetchQuery({ ...meQuery, staleTime: 0 }).then((me) => (me ? stream.open() : undefined), lost);
+    const ask = () => client.fetchQuery({ ...meQuery, staleTime: 0 });
+    quiet(client)
+      .then(ask)
+      .then((me) => (me ? stream.open() : undefined), lost);
   };
   const stream = keepEventStream(addressOf(liveStream.path, { shopId }), {
     on: { change, gap: () => refetch(), bye },
@@ -55,6 +59,15 @@ export function openLive(client: QueryClient, shopId: string): () => void {
     stream.close(false);
     heard(true);
   };
+}
+
+/**
+ * When a moment has passed and no write is under way: a new password ends all sessions, and the answer that brings this
+ * browser its new one may come after the news of it.
+ */
+async function quiet(client: QueryClient): Promise<void> {
+  await new Promise((resolve) => setTimeout(resolve, settle));
+  if (client.isMutating() > 0) await quiet(client);
 }
 
 /** Lets the stream go while nobody looks, and hurries where the network is back. */

@@ -27,6 +27,9 @@ describe('sentences for reasons', () => {
     expect(say({ code: 'too-late', rule: 2, names: ['Door: sealer'], minutes: [4325, 4320] })).toBe(
       'It would start 3 days after Door: sealer; the window closes after 3 days.',
     );
+    expect(say({ code: 'too-soon', rule: 2, names: ['Door: sealer'], minutes: [-15, 20] })).toBe(
+      'It would start 15 min before Door: sealer is over.',
+    );
     expect(say({ code: 'off-shift', rule: 8, names: ['Ada'] })).toBe('Ada is not at work for all of 10:00 to 10:40.');
     expect(say({ code: 'heat-limit', rule: 1, names: ['Booth bake'], minutes: [60, 48.889] })).toBe(
       'Booth bake bakes at 60 °C, above the heat limit of 48 °C of this vehicle or part.',

@@ -52,7 +52,9 @@ const texts: Record<ViolationCode | ServiceCode, Say> = {
     `One of its phases would take ${f.duration(minutes(1))}; it needs ${f.duration(minutes(2))}.`,
   // 2 Windows
   'too-soon': ({ names, minutes }, f) =>
-    `It would start ${f.duration(minutes(0))} after ${names(0)}; it needs at least ${f.duration(minutes(1))}.`,
+    minutes(0) < 0
+      ? `It would start ${f.duration(-minutes(0))} before ${names(0)} is over.`
+      : `It would start ${f.duration(minutes(0))} after ${names(0)}; it needs at least ${f.duration(minutes(1))}.`,
   'too-late': ({ names, minutes }, f) =>
     `It would start ${f.duration(minutes(0))} after ${names(0)}; the window closes after ${f.duration(minutes(1))}.`,
   // 3 Holding a place

@@ -24,7 +24,7 @@ export function PasswordField({ label, hint, error, optional, hideLabel, classNa
           <button
             type="button"
             aria-pressed={shown}
-            aria-label={`Show ${label.toLowerCase()}`}
+            aria-label="Show what is typed"
             onClick={() => setShown(!shown)}
             className="absolute inset-y-0 right-0 flex w-11 items-center justify-center rounded text-muted hover:text-ink"
           >

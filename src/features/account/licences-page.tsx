@@ -30,7 +30,7 @@ export function Component() {
         <p>
           Whoever uses it over a network has a right to the source of the version that runs there.{' '}
           {typeof source === 'string' && source !== '' ? (
-            <a href={source} className="link break-all" rel="noreferrer">
+            <a href={source} className="link wrap-anywhere" rel="noreferrer">
               Get the source
             </a>
           ) : (
@@ -99,7 +99,7 @@ function OneNotice({ notice: { name, version, licence, text } }: { notice: Notic
     <li className="border-t border-line">
       <details onToggle={(event) => setOpen(event.currentTarget.open)}>
         <summary className="flex min-h-control flex-wrap items-center gap-x-3 py-1">
-          <span className="font-semibold break-all">{name}</span>
+          <span className="font-semibold wrap-anywhere">{name}</span>
           <span className="figures text-muted">{version}</span>
           <span className="ml-auto text-muted">{licence}</span>
         </summary>

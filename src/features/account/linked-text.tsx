@@ -8,7 +8,7 @@ export const linked = (text: string): ReactNode[] =>
     // Odd pieces are what the expression captured.
     if (i % 2 === 0) return piece;
     return (
-      <a key={i} href={piece} className="link break-all" rel="noreferrer">
+      <a key={i} href={piece} className="link wrap-anywhere" rel="noreferrer">
         {piece}
       </a>
     );

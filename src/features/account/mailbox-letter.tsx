@@ -33,7 +33,7 @@ export function MailboxLetter({ letterId }: { letterId: string }) {
           All letters
         </Link>
         <h2>{subject}</h2>
-        <p className="text-xs break-all text-muted">
+        <p className="text-xs wrap-anywhere text-muted">
           from {from} to {to}, {localMoment(at)}
         </p>
         {html !== '' && (

@@ -54,8 +54,8 @@ function Asked({ email, again }: { email: string; again: () => void }) {
   return (
     <DoorCard title="Look into your mail">
       <p role="status">
-        If there is an account for <b className="break-all">{email}</b>, a letter is on its way to it. Its link works
-        for a short time and once.
+        If there is an account for <b className="wrap-anywhere">{email}</b>, a letter is on its way to it. Its link
+        works for a short time and once.
       </p>
       {mailbox.isSuccess && (
         <p>

@@ -73,7 +73,7 @@ function Accept({ token, invitation }: { token: string; invitation: ReplyOf<type
   const about = (
     <>
       You are invited as <b className="text-ink">{roleWord[role]}</b>, with the address{' '}
-      <b className="break-all text-ink">{email}</b>.
+      <b className="wrap-anywhere text-ink">{email}</b>.
     </>
   );
   return (

@@ -70,7 +70,7 @@ describe('signing in', () => {
   it('shows the password on demand, and is accessible', async () => {
     open();
     await expectAccessible();
-    await userEvent.click(screen.getByRole('button', { name: 'Show password' }));
+    await userEvent.click(screen.getByRole('button', { name: 'Show what is typed' }));
     expect(screen.getByLabelText('Password')).toHaveAttribute('type', 'text');
   });
 });
