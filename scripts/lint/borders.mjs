@@ -71,7 +71,7 @@ export const layers = [
   {
     name: 'browser feature',
     at: /^src\/features\//,
-    mayUse: ['contracts', 'planner', 'browser lib', 'browser ui', 'browser paths'],
+    mayUse: ['contracts', 'planner', 'chemistry', 'browser lib', 'browser ui', 'browser paths'],
     never: nodeOnly,
   },
   {

@@ -52,6 +52,7 @@ describe('a border', () => {
     ['src/features/day/board.tsx', '../../app/paths.ts'],
     ['src/app/router.tsx', '../features/day/page.tsx'],
     ['src/features/day/drag/landing.ts', '../geometry.ts'],
+    ['src/features/cure/model/dew.ts', '#chemistry/air/dew-point.ts'],
   ])('lets %s import %s', (from, specifier) => {
     expect(crossing(from, specifier)).toBeUndefined();
   });
@@ -63,6 +64,7 @@ describe('a border', () => {
     ['server/planner/rules/bake.ts', '../../chemistry/bake.ts'],
     ['src/ui/button.tsx', '#src/features/day/board.tsx'],
     ['src/lib/api.ts', 'node:fs'],
+    ['src/ui/button.tsx', '#chemistry/air/dew-point.ts'],
     ['jobs/worker.ts', '#server/http/plans.ts'],
     ['migrations/202612010900_ground.ts', '#server/db/jobs.ts'],
   ])('stops %s from importing %s', (from, specifier) => {

@@ -1,0 +1,22 @@
+import type { Coating } from '#contracts/sheets.ts';
+
+const sheet: Coating['sheet'] = {
+  coats: { from: 2, to: 3 },
+  flashBetweenCoats: 10,
+  flashBeforeNext: 15,
+  flashBeforeHeat: 15,
+  recoatWithin: null,
+  potLife: 60,
+  airDry: { minutes: 180, celsius: 20 },
+  bake: { minutes: 30, celsius: 60, measuredAt: 'metal' },
+  lamp: { minutes: 25, wave: 'short', metres: 0.7 },
+  cautions: [],
+};
+
+export const primerId = '01958000-0009-7000-8000-000000000001';
+export const baseId = '01958000-0009-7000-8000-000000000002';
+
+export const sampleCoatings: Coating[] = [
+  { id: primerId, name: 'Grey primer', kind: 'primer', sheet },
+  { id: baseId, name: 'Basecoat', kind: 'base', sheet: { ...sheet, airDry: null, bake: null, lamp: null } },
+];
