@@ -51,6 +51,8 @@ export type PlanView = {
   refs: Map<string, StageRef>;
   fixed: Map<string, Assignment>;
   given: Map<string, Assignment>;
+  /** Mode of each assignment that has one. */
+  modes: Map<Assignment, Mode>;
   runs: LoadRun[];
   runOf: Map<string, LoadRun>;
   sound: Sound[];
@@ -62,7 +64,9 @@ export type Rule = (view: PlanView, report: Report) => void;
 
 const byId = <T extends { id: string }>(list: readonly T[]): Map<string, T> => new Map(list.map((x) => [x.id, x]));
 
-export const modeOf = (view: PlanView, at: Assignment): Mode | undefined =>
+export const modeOf = (view: PlanView, at: Assignment): Mode | undefined => view.modes.get(at);
+
+const findMode = (view: PlanView, at: Assignment): Mode | undefined =>
   view.refs.get(at.stage)?.stage.modes.find((m) => m.id === at.mode);
 
 const neighbour = (view: PlanView, at: Assignment, step: number): Assignment | null => {
@@ -83,6 +87,7 @@ export function viewPlan(problem: Problem, plan: Plan): PlanView {
     refs: new Map(),
     fixed: new Map(problem.fixed.map((a) => [a.stage, a])),
     given: new Map(),
+    modes: new Map(),
     runs: [],
     runOf: new Map(),
     sound: [],
@@ -90,6 +95,10 @@ export function viewPlan(problem: Problem, plan: Plan): PlanView {
   };
   for (const job of problem.jobs) job.stages.forEach((stage, index) => view.refs.set(stage.id, { job, stage, index }));
   for (const a of plan.assignments) if (view.refs.has(a.stage) && !view.given.has(a.stage)) view.given.set(a.stage, a);
+  for (const a of view.given.values()) {
+    const mode = findMode(view, a);
+    if (mode) view.modes.set(a, mode);
+  }
   gatherRuns(view);
   gatherSound(view);
   view.holds = view.runs.map((run) => holdOf(view, run));

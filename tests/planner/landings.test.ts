@@ -113,9 +113,9 @@ describe('landings', () => {
           asked += want.length;
         }
       }),
-      { numRuns: 25, seed: 7 },
+      { numRuns: 15, seed: 7 },
     );
-    expect(asked).toBeGreaterThan(1000); // else the property would hold for want of landings
+    expect(asked).toBeGreaterThan(500); // else the property would hold for want of landings
   });
 
   test('say why a stage may not go to a place', () => {

@@ -6,7 +6,7 @@ import { brokenRules, independentChecker } from './independent-checker.ts';
 
 const independent = await independentChecker();
 const seeds = fc.integer({ min: 0, max: 1_000_000 });
-const runs = { numRuns: 400, seed: 20260302 };
+const runs = { numRuns: 200, seed: 20260302 };
 /** Milliseconds before a test counts as hanging; says nothing about speed. */
 const PATIENCE = 120_000;
 const options = { seed: 1, evaluations: 30 };
@@ -99,7 +99,7 @@ describe.runIf(independent !== null)('both checkers agree', () => {
           expect(brokenRules(ours.violations)).toEqual(brokenRules(theirs.violations));
           expect(ours.cost).toBeCloseTo(theirs.cost, 6);
         }),
-        { ...runs, numRuns: 1500 },
+        { ...runs, numRuns: 800 },
       );
     },
     PATIENCE,

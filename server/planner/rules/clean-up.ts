@@ -10,7 +10,8 @@ export const cleanUp: Rule = (view, report) => {
     const here = view.holds.filter((h) => h.place === place.id).sort((x, y) => x.from - y.from || x.to - y.to);
     here.forEach((a, i) => {
       if (a.goesOn) return;
-      for (const b of here.slice(i + 1)) {
+      for (let k = i + 1; k < here.length; k++) {
+        const b = here[k]!;
         if (b.from >= a.to + longest) break;
         if (b.from >= a.to && b.from < a.to + need(a, b) && !(a.fixed && b.fixed))
           report('clean-up', b.stage, [place.id, a.stage], [b.from - a.to, need(a, b)]);

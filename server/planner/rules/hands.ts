@@ -1,4 +1,4 @@
-import { liesWithin, minutesWithin } from '../intervals.ts';
+import { liesWithin, minutesWithin, partsWithin } from '../intervals.ts';
 import { modeOf, type PlanView, type Report, type Rule, type Sound } from '../plan-view.ts';
 import type { Assignment, Interval } from '../types.ts';
 import { minutesInLoad } from './order.ts';
@@ -18,7 +18,7 @@ export const hands: Rule = (view, report) => {
 
 function inShift(view: PlanView, s: Sound, report: Report): void {
   const who = s.at.person;
-  const shift = (who !== null && view.people.get(who)?.working) || [];
+  const shift = (who !== null && view.people.get(who)?.working) || NEVER_AT_WORK;
   s.mode.phases.forEach((phase, k) => {
     if (phase.attendance !== 'hands') return;
     const [from, to] = s.at.phases[k] ?? [0, 0];
@@ -29,16 +29,18 @@ function inShift(view: PlanView, s: Sound, report: Report): void {
   });
 }
 
+const NEVER_AT_WORK: readonly Interval[] = [];
+
 type Busy = { from: number; to: number; stage: string; fixed: boolean };
 
 /** The minutes of a load that its person is really at work: a split phase only fills the working time inside it. */
 function busyParts(view: PlanView, a: Assignment): Interval[] {
   const mode = modeOf(view, a);
-  const working = (a.person !== null && view.people.get(a.person)?.working) || [];
+  const working = (a.person !== null && view.people.get(a.person)?.working) || NEVER_AT_WORK;
   return a.phases.flatMap((phase, k): Interval[] => {
     if (mode?.phases[k]?.attendance !== 'hands') return [];
     if (!mode.split) return [phase];
-    return working.map(([s, e]): Interval => [Math.max(s, phase[0]), Math.min(e, phase[1])]).filter(([s, e]) => s < e);
+    return partsWithin(phase[0], phase[1], working);
   });
 }
 
@@ -54,7 +56,8 @@ function oneThing(view: PlanView, report: Report): void {
   for (const [who, list] of busy) {
     list.sort((x, y) => x.from - y.from);
     list.forEach((one, i) => {
-      for (const two of list.slice(i + 1)) {
+      for (let k = i + 1; k < list.length; k++) {
+        const two = list[k]!;
         if (two.from >= one.to) break;
         if (one.stage !== two.stage && two.to > two.from && !(one.fixed && two.fixed))
           report('person-busy', two.stage, [who, one.stage], [two.from, one.from, one.to]);

@@ -11,13 +11,17 @@ export const lamps: Rule = (view, report) => {
   }
   const byLamp = new Map<string, LampUse[]>();
   for (const use of lampUses(view)) {
-    if (view.lamps.has(use.lamp)) byLamp.set(use.lamp, [...(byLamp.get(use.lamp) ?? []), use]);
+    const list = byLamp.get(use.lamp);
+    if (list) list.push(use);
+    else if (view.lamps.has(use.lamp)) byLamp.set(use.lamp, [use]);
     else report('unknown-lamp', use.stage, [use.lamp]);
   }
   for (const [id, list] of byLamp) {
     list.sort((x, y) => x.from - y.from);
     list.forEach((one, i) => {
-      for (const two of list.slice(i + 1)) {
+      for (let k = i + 1; k < list.length; k++) {
+        const two = list[k]!;
+        if (two.from >= one.to + view.problem.lampMove) break;
         const move = one.place === two.place ? 0 : view.problem.lampMove;
         if (two.from < one.to + move && !(one.fixed && two.fixed))
           report('lamp-busy', two.stage, [id, one.stage], [two.from, one.to, move]);

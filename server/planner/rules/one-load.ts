@@ -16,7 +16,8 @@ export const oneLoad: Rule = (view, report) => {
 
 function meetings(place: string, here: readonly Hold[], report: Report): void {
   here.forEach((h, i) => {
-    for (const next of here.slice(i + 1)) {
+    for (let k = i + 1; k < here.length; k++) {
+      const next = here[k]!;
       if (next.from >= h.to) break;
       if (next.to > next.from && !(h.fixed && next.fixed))
         report('place-taken', next.stage, [place, h.stage], [next.from, h.to]);

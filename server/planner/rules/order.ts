@@ -6,6 +6,7 @@ const ADD_UP: ReadonlySet<PhaseKind> = new Set(['setup', 'work', 'spray']);
 
 /** Minutes that a phase takes in its load: hands-on kinds add up, the others take the longest (rule 5). */
 export function minutesInLoad(view: PlanView, sound: Sound, k: number): number {
+  if (sound.run.members.length === 1) return sound.mode.phases[k]?.minutes ?? 0;
   const all = sound.run.members.map((m) => modeOf(view, m)?.phases[k]?.minutes ?? 0);
   const kind = sound.mode.phases[k]?.kind;
   return kind && ADD_UP.has(kind) ? all.reduce((x, y) => x + y, 0) : Math.max(...all);

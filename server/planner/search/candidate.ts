@@ -26,6 +26,8 @@ export type Search = {
   heldOutStage: Int32Array;
   cost: number;
   evaluations: number;
+  /** Asked now and then while many blocks are placed: true gives the candidate up. */
+  halt: () => boolean;
 };
 
 export function makeSearch(shop: Shop, alone: Int32Array): Search {
@@ -49,6 +51,7 @@ export function makeSearch(shop: Shop, alone: Int32Array): Search {
     heldOutStage: new Int32Array(shop.jobs.length).fill(-1),
     cost: Infinity,
     evaluations: 0,
+    halt: () => false,
   };
   for (let s = 0; s < shop.stageCount; s++) copyStage(shop, d.state.at, search.heldPlacing, s);
   return search;
@@ -78,9 +81,15 @@ function clearBlock(s: Search, id: number): void {
   if (!d.out[job]) estimate(s, job, first);
 }
 
-/** Places the candidate's blocks from position `from` on; false as soon as its cost passes `limit`. */
+/** Blocks placed between two looks at the clock. */
+const BREATH = 64;
+
+/** Places the candidate's blocks from position `from` on; false as soon as its cost passes `limit`, or on a halt. */
 function placeFrom(s: Search, from: number, limit: number): boolean {
-  for (let i = from; i < s.order.length; i++) if (!placeNext(s, s.order[i]!, limit)) return false;
+  for (let i = from; i < s.order.length; i++) {
+    if (!placeNext(s, s.order[i]!, limit)) return false;
+    if ((i - from) % BREATH === BREATH - 1 && s.halt()) return false;
+  }
   return true;
 }
 

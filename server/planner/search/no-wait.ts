@@ -158,8 +158,7 @@ export function planNoWait(s: Search, random: Random, over: () => boolean, keep:
 /** Every job to some start, and all pairs equally dear again. */
 function scatter(w: Shifts, end: number, random: Random): void {
   w.weight.fill(1);
-  for (let j = 0; j < w.jobs; j++)
-    w.start[j] = w.release[j]! + below(random, end - w.length[j]! - w.release[j]! + 1);
+  for (let j = 0; j < w.jobs; j++) w.start[j] = w.release[j]! + below(random, end - w.length[j]! - w.release[j]! + 1);
 }
 
 /** A job that meets another, by lot, rather not one that has just moved. */

@@ -14,10 +14,13 @@ import { costShown, type Kept, keepHeld, makeKept, standOn } from './kept.ts';
 
 export type Found = { d: Decoder; bound: number; stats: Stats };
 
-/** Looks at the clock only every so many evaluations. */
+/** Looks at the clock only every so many evaluations; large shops, whose evaluations take long, after each. */
 const LOOK = 16;
+const LARGE = 100;
 /** Evaluations of the first round where nobody says when the end comes; each next one is twice as long. */
 const FIRST_ROUND = 4000;
+/** Evaluations that a round of a small shop should have. */
+const ENOUGH = 40_000;
 
 type Run = {
   s: Search;
@@ -42,6 +45,8 @@ export function searchPlan(shop: Shop, options: PlanOptions): Found {
     improvements: 0,
     over: false,
   };
+  // The first plan is finished whatever the clock says; what follows may be given up in the middle.
+  s.halt = () => run.best.cost < Infinity && options.stop?.() === true;
   firstPlans(run);
   if (!isOver(run)) searchOn(run);
   standOn(s, run.best);
@@ -66,7 +71,8 @@ function isOver(run: Run): boolean {
   const { s, options } = run;
   if (run.over) return true;
   const spent = s.evaluations >= (options.evaluations ?? Infinity);
-  const stopped = s.evaluations % LOOK === 0 && options.stop?.() === true;
+  const look = s.order.length > LARGE || s.evaluations % LOOK === 0;
+  const stopped = look && options.stop?.() === true;
   const proved = run.best.cost <= run.bound + 1e-9;
   const endless = options.evaluations === undefined && options.stop === undefined;
   run.over = spent || stopped || proved || endless;
@@ -111,38 +117,65 @@ function shareGone(run: Run): number | null {
 }
 
 /**
- * The temperature to begin with. Tardiness comes in jumps of a night, some 900 minutes; a tenth of that, and falling,
+ * The temperature to begin with. Tardiness comes in jumps of a night, some 900 minutes; a fifth of that, and falling,
  * lets the search cross them while the rest of the schedule keeps its shape. Without due dates: by the cost itself.
  */
 function heatOf({ s, best }: Run): number {
   const w = s.d.shop.problem.objective;
-  return w.tardiness > 0 ? 100 * w.tardiness : Math.max(1e-3, 0.02 * Math.abs(costShown(best)));
+  return w.tardiness > 0 ? 200 * w.tardiness : Math.max(1e-3, 0.02 * Math.abs(costShown(best)));
 }
 
-/** Anneals: one long run where the end is known, else in rounds that grow, each from the best so far. */
+/**
+ * Into how many rounds a run is cut whose end is known: small shops, which have cooled down long before it, begin again
+ * from other orders.
+ */
+function roundsFor({ s }: Run, share: number): number {
+  const evaluations = share > 0 ? s.evaluations / share : 0;
+  return s.order.length > 60 ? 1 : Math.max(1, Math.min(8, Math.floor(evaluations / ENOUGH)));
+}
+
+/** Anneals: one long run or a few where the end is known, else in rounds that grow, each from the best so far. */
 function rounds(run: Run): void {
   const { s } = run;
   if (s.d.shop.blocks.length < 2) return;
+  const known = shareGone(run);
+  const count = known === null ? 0 : roundsFor(run, known);
   for (let round = 0; !isOver(run); round++) {
-    standOn(s, run.best);
-    const hot = heatOf(run);
-    const begun = s.evaluations;
-    const length = FIRST_ROUND * 2 ** round;
+    if (round % 2 === 1 && round < count - 1) startFrom(s, shuffled(run));
+    else standOn(s, run.best);
     const from = shareGone(run);
-    let share = 0;
-    let tick = 0;
+    const until = known === null || round >= count ? 1 : known + ((1 - known) * (round + 1)) / count;
     anneal(s, run.random, {
-      share: () => {
-        if (isOver(run)) return 1;
-        if (tick++ % LOOK === 0) {
-          const gone = from === null ? null : shareGone(run);
-          share = gone === null || from === null ? (s.evaluations - begun) / length : (gone - from) / (1 - from);
-        }
-        return share;
-      },
-      hot,
-      cold: hot / 200,
+      share: from === null ? shareOfRound(run, round) : shareOfTime(run, from, until),
+      hot: heatOf(run),
+      cold: heatOf(run) / 200,
       onBetter: () => keep(run),
     });
   }
+}
+
+function shareOfRound(run: Run, round: number): () => number {
+  const begun = run.s.evaluations;
+  const length = FIRST_ROUND * 2 ** round;
+  return () => (isOver(run) ? 1 : (run.s.evaluations - begun) / length);
+}
+
+function shareOfTime(run: Run, from: number, until: number): () => number {
+  let share = 0;
+  let tick = 0;
+  return () => {
+    if (isOver(run)) return 1;
+    if (tick++ % LOOK === 0) share = ((shareGone(run) ?? 1) - from) / Math.max(1e-9, until - from);
+    return share;
+  };
+}
+
+/** All jobs in an order drawn by lot. */
+function shuffled({ s, random }: Run): Int32Array {
+  const { shop } = s.d;
+  const jobs = shop.jobs.map((_, j) => ({ j, lot: random() })).sort((x, y) => x.lot - y.lot);
+  return blocksInOrder(
+    shop,
+    jobs.map((x) => x.j),
+  );
 }
