@@ -42,6 +42,9 @@ export function DayToolbar(props: Props) {
         <Choice label="Plan" hideLabel options={planOptions} value={view.shown} onChange={(plan) => onLink({ plan })} />
       )}
       <div className="flex items-center gap-1 sm:ml-auto">
+        <span role="status" className="text-[0.8125rem] text-muted">
+          {moves.pending ? 'Sending the move' : ''}
+        </span>
         {canPlan && (
           <>
             <IconButton

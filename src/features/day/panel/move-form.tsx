@@ -4,6 +4,7 @@ import { Button } from '#src/ui/button.tsx';
 import { Checkbox } from '#src/ui/checkbox.tsx';
 import { Select } from '#src/ui/select.tsx';
 import { TextField } from '#src/ui/text-field.tsx';
+import { showToast } from '#src/ui/toast-store.ts';
 import type { Formats } from '#src/lib/formats.ts';
 import { entryOf, isFault, moveOf, type EntryFault, type MoveEntry } from '../model/move-form.ts';
 import type { Move } from '../model/move-in-view.ts';
@@ -20,18 +21,17 @@ type Props = {
 export function MoveForm({ bar, view, formats, pending, onMove }: Props) {
   const [entry, setEntry] = useState<MoveEntry>(() => entryOf(bar, formats.zone, formats.time));
   const [fault, setFault] = useState<EntryFault | null>(null);
-  const [done, setDone] = useState('');
   const set = (part: Partial<MoveEntry>) => {
     setEntry({ ...entry, ...part });
     setFault(null);
-    setDone('');
   };
   const submit = async (event: FormEvent) => {
     event.preventDefault();
     const move = moveOf(entry, bar, formats.zone);
     if (isFault(move)) return setFault(move);
     const place = view.rows.find((row) => row.id === move.placeId)?.name ?? '';
-    if (await onMove(move)) setDone(`Stands at ${formats.dateTime(move.start)} in ${place}.`);
+    if (await onMove(move))
+      showToast(`${bar.jobNumber} stands at ${formats.dateTime(move.start)} in ${place}.`, { tone: 'good' });
   };
   const errorOf = (field: EntryFault['field']) => (fault?.field === field ? fault.message : undefined);
   return (
@@ -78,14 +78,9 @@ export function MoveForm({ bar, view, formats, pending, onMove }: Props) {
         checked={entry.pinned}
         onChange={(event) => set({ pinned: event.target.checked })}
       />
-      <div className="flex flex-wrap items-center gap-3">
-        <Button type="submit" look="primary" busy={pending}>
-          Move
-        </Button>
-        <p role="status" className="text-moss">
-          {done}
-        </p>
-      </div>
+      <Button type="submit" look="primary" busy={pending} className="self-start">
+        Move
+      </Button>
     </form>
   );
 }

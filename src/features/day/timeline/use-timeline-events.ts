@@ -22,7 +22,7 @@ export function useTimelineEvents(
     if (!by) return;
     // A calendar made anew (or new rights) has been told nothing.
     const afresh = told.current.by !== by || told.current.movable !== movable;
-    const before: Told = afresh ? new Map() : told.current.things;
+    const before: Told = afresh ? new Map<string, never>() : told.current.things;
     told.current = { by, movable, things: syncEvents(by, before, [...board, ...closed], movable) };
   }, [calendar, board, closed, movable]);
 }
