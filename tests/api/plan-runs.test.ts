@@ -97,7 +97,7 @@ describe('a run', () => {
     const [draft] = await rows('draft');
     expect(draft).toMatchObject({ state: 'open', version: 2, updated_by: shop.lead });
     expect(draft?.['unplaced']).toMatchObject([
-      { jobId: electric.id, reason: expect.stringMatching(/Booth bake .* heat limit of 48\.8 C/) },
+      { jobId: electric.id, reason: expect.stringMatching(/Booth bake .* heat limit of 49 C/) },
     ]);
     const items = await rows('draft_item');
     expect(items.map((item) => item['stage_id']).sort()).toEqual(jobs.flatMap(({ stages }) => stages).sort());
