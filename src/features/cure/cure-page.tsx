@@ -1,4 +1,5 @@
 import { Link2 } from 'lucide-react';
+import { useEffect, useRef } from 'react';
 import { Button } from '#src/ui/button.tsx';
 import { Caution } from '#src/ui/caution.tsx';
 import { Page } from '#src/ui/page.tsx';
@@ -17,6 +18,12 @@ import { useTraceFile } from './use-trace-file.ts';
 export function Component() {
   const desk = useDeskState();
   const reader = useTraceFile();
+  const calculators = useRef<HTMLDivElement>(null);
+  // On a phone the row of tabs is longer than the screen.
+  useEffect(() => {
+    const chosen = calculators.current?.querySelector('[role=tab][aria-selected=true]');
+    chosen?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
+  }, [desk.tab]);
   const copy = () => {
     const search = writeDesk(desk);
     const link = `${location.origin}${location.pathname}${search && `?${search}`}`;
@@ -42,19 +49,21 @@ export function Component() {
           during purge or bake; lamps and their leads are out of the booth before spraying. High-voltage batteries and
           plastic parts bear less heat.
         </Caution>
-        <Tabs
-          label="Calculators"
-          value={desk.tab}
-          onChange={desk.openTab}
-          tabs={[
-            { value: 'flash', label: 'Flash and cure', content: <FlashTab /> },
-            { value: 'bakes', label: 'Bakes', content: <BakesTab /> },
-            { value: 'lamp', label: 'Lamp', content: <LampTab /> },
-            { value: 'dew', label: 'Dew point', content: <DewTab /> },
-            { value: 'circuit', label: 'Circuit', content: <CircuitTab /> },
-            { value: 'trace', label: 'Bake trace', content: <TraceTab reader={reader} /> },
-          ]}
-        />
+        <div ref={calculators}>
+          <Tabs
+            label="Calculators"
+            value={desk.tab}
+            onChange={desk.openTab}
+            tabs={[
+              { value: 'flash', label: 'Flash and cure', content: <FlashTab /> },
+              { value: 'bakes', label: 'Bakes', content: <BakesTab /> },
+              { value: 'lamp', label: 'Lamp', content: <LampTab /> },
+              { value: 'dew', label: 'Dew point', content: <DewTab /> },
+              { value: 'circuit', label: 'Circuit', content: <CircuitTab /> },
+              { value: 'trace', label: 'Bake trace', content: <TraceTab reader={reader} /> },
+            ]}
+          />
+        </div>
       </Page>
     </DeskContext>
   );

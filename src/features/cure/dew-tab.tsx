@@ -5,7 +5,7 @@ import { FieldGrid, NumberField, TemperatureField } from './desk-fields.tsx';
 import { DewScale } from './drawings/dew-scale.tsx';
 import { dewAnswer, marginFigure, type DewAnswer } from './model/dew.ts';
 import { degrees, findingWords } from './model/finding-words.ts';
-import { plainNumber, unitFromCelsius } from './model/typed.ts';
+import { unitFromCelsius } from './model/typed.ts';
 import { Card, Facts, NotYet, Source, Split, Verdict, Warnings } from './sections.tsx';
 import { useDesk } from './use-desk.ts';
 
@@ -51,8 +51,8 @@ export function DewTab() {
 function Found({ answer }: { answer: DewAnswer }) {
   const { unit } = useFormats();
   const { gate } = answer;
-  const least = `${plainNumber(unit === 'C' ? LEAST_DEW_POINT_MARGIN_CELSIUS : LEAST_DEW_POINT_MARGIN_CELSIUS * 1.8, 1)} °${unit}`;
-  const margin = `${plainNumber(marginFigure(gate.marginCelsius, unit), 1)} °${unit}`;
+  const least = `${(unit === 'C' ? LEAST_DEW_POINT_MARGIN_CELSIUS : LEAST_DEW_POINT_MARGIN_CELSIUS * 1.8).toFixed(1)} °${unit}`;
+  const margin = `${marginFigure(gate.marginCelsius, unit).toFixed(1)} °${unit}`;
   const coldest = Math.ceil(unitFromCelsius(gate.leastSurfaceCelsius, unit) * 10 - 1e-6) / 10;
   return (
     <>
@@ -68,8 +68,8 @@ function Found({ answer }: { answer: DewAnswer }) {
         rows={[
           ['Dew point', degrees(gate.dewPointCelsius, unit)],
           ['Margin', margin],
-          ['Coldest surface for this air', `${plainNumber(coldest, 1)} °${unit}`],
-          ['Humidity', `${plainNumber(answer.humidityPercent, 0)} %`],
+          ['Coldest surface for this air', `${coldest.toFixed(1)} °${unit}`],
+          ['Humidity', `${Math.round(answer.humidityPercent)} %`],
         ]}
       />
       <Warnings words={answer.findings.map((finding) => findingWords(finding, unit))} />

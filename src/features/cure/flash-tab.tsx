@@ -39,13 +39,13 @@ export function FlashTab() {
               <NumberField name="rh" label="Humidity, %" errors={errors} />
               <NumberField
                 name="damp"
-                label="Your factor for damp air"
-                hint="1 leaves the times alone; yours by experience."
+                label="Damp-air factor"
+                hint="Your own, 1 or more; 1 leaves the times."
                 errors={errors}
               />
               <NumberField
                 name="heatup"
-                label="Heat-up of the metal, min"
+                label="Metal heat-up, min"
                 hint="As measured in your booth; 10 is only a guess."
                 errors={errors}
               />
@@ -74,13 +74,18 @@ const nothing: Sheet = {
   cautions: [],
 };
 
+const shorterWords = ({ rows }: FlashAnswer): string[] =>
+  rows.some(({ printed, today }) => today < printed)
+    ? ['Shorter than the sheet prints: only where its maker allows it and the film looks ready.']
+    : [];
+
 function Found({ answer, sheet }: { answer: FlashAnswer; sheet: Sheet }) {
   const { unit } = useFormats();
   const { bake } = answer;
   return (
     <>
       <FlashBars answer={answer} />
-      <Warnings words={answer.findings.map((finding) => findingWords(finding, unit))} />
+      <Warnings words={[...answer.findings.map((finding) => findingWords(finding, unit)), ...shorterWords(answer)]} />
       <Facts
         rows={[
           ['This air', standings[answer.standing]],

@@ -119,7 +119,6 @@ function HeatUpPlot({ answer, heatUp }: { answer: LampAnswer; heatUp: Exclude<La
                 y: at(wantedCelsius),
                 tone: 'moss' as const,
                 label: `wanted ${degrees(wantedCelsius, unit)}`,
-                axis: 'right' as const,
               },
             ]
           : []),

@@ -41,17 +41,17 @@ export function LampTab() {
               <NumberField name="phigh" label="Area high, m" errors={errors} />
               <TemperatureField name="air" label="Air" errors={errors} />
               <TemperatureField name="want" label="Metal wanted at" errors={errors} />
-              <SelectField
-                name="battery"
-                label="High-voltage battery"
-                options={[
-                  ['none', 'None, or taken out'],
-                  ['unknown', 'On board, limit unknown'],
-                  ['recorded', 'On board, limit known'],
-                ]}
-              />
-              {values.battery === 'recorded' && <TemperatureField name="batat" label="Its limit" errors={errors} />}
             </FieldGrid>
+            <SelectField
+              name="battery"
+              label="High-voltage battery"
+              options={[
+                ['none', 'None, or taken out'],
+                ['unknown', 'On board, limit unknown'],
+                ['recorded', 'On board, limit known'],
+              ]}
+            />
+            {values.battery === 'recorded' && <TemperatureField name="batat" label="Its limit" errors={errors} />}
           </Card>
           <Card title="Lamp">
             <FieldGrid>

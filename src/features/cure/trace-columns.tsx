@@ -1,5 +1,5 @@
 import { useFormats } from '#src/lib/session.ts';
-import { SelectField, FieldGrid } from './desk-fields.tsx';
+import { SelectField } from './desk-fields.tsx';
 import type { TimeUnit } from './model/csv/layout.ts';
 import type { TraceTable } from './model/csv/read-table.ts';
 import { timeFits, timeUnits } from './model/judge.ts';
@@ -33,7 +33,7 @@ export function TraceColumns({ table }: { table: TraceTable }) {
         Cells parted by {delimiters[layout.delimiter]}; readings from line {layout.dataLine + 1}; time in “{name}”
         {kind === 'date' ? ', dates' : ` in ${timeNames[unit]}`}.
       </p>
-      <FieldGrid>
+      <div className="flex flex-col gap-3">
         <SelectField
           name="col"
           label="Temperature"
@@ -63,7 +63,7 @@ export function TraceColumns({ table }: { table: TraceTable }) {
             options={[['', `As guessed: ${timeNames[unit]}`], ...times.map((time) => [time, timeNames[time]] as const)]}
           />
         )}
-      </FieldGrid>
+      </div>
       {warm && values.unit === '' && (
         <p role="status" className="text-xs font-semibold text-amber">
           No unit is named, and some readings are over 110: are they in °F{mine === 'F' ? ', as yours' : ''}?

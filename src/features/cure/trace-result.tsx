@@ -1,12 +1,13 @@
-import { useMemo } from 'react';
+import { useDeferredValue, useMemo } from 'react';
 import { useFormats } from '#src/lib/session.ts';
 import { contradictionWords, energyWords } from './model/energy-words.ts';
 import { Plot } from './drawings/plot.tsx';
 import type { TraceTable } from './model/csv/read-table.ts';
 import { degrees, findingWords, limitDegrees } from './model/finding-words.ts';
-import { judge, type Judged } from './model/judge.ts';
+import { choiceOf, judge, type Judged } from './model/judge.ts';
 import { spanOf } from './model/plot-geometry.ts';
 import type { Sheet } from './model/sheet-of.ts';
+import { traceOf } from './model/trace.ts';
 import { plainNumber, unitFromCelsius } from './model/typed.ts';
 import { Facts, NotYet, Source, Verdict, Warnings } from './sections.tsx';
 import { useDesk } from './use-desk.ts';
@@ -14,7 +15,11 @@ import { useDesk } from './use-desk.ts';
 export function TraceResult({ table, sheet }: { table: TraceTable; sheet: Sheet }) {
   const { values } = useDesk();
   const { unit } = useFormats();
-  const answer = useMemo(() => judge(values, table, sheet, unit), [values, table, sheet, unit]);
+  // A long record takes a moment: what is typed shows first.
+  const asked = useDeferredValue(values);
+  const { column, unit: read, time } = choiceOf(asked, table);
+  const chosen = useMemo(() => traceOf(table, { column, unit: read, time }), [table, column, read, time]);
+  const answer = useMemo(() => judge(asked, chosen, sheet, unit), [asked, chosen, sheet, unit]);
   if (!answer.ok) return <NotYet />;
   if (answer.value === 'no-cure')
     return (
@@ -41,6 +46,11 @@ function Found({ judged, sheet }: { judged: Judged; sheet: Sheet }) {
           ? `Cured by the sheet of ${sheet.name}`
           : `Not yet cured: ${minutes(left)} short at ${degrees(kinetics.referenceCelsius, unit)}`}
       </Verdict>
+      {judged.tooHot && judged.hottestCelsius !== null && judged.limitCelsius !== null && (
+        <Verdict good={false}>
+          {findingWords({ code: 'above-heat-limit', value: judged.hottestCelsius, limit: judged.limitCelsius }, unit)}
+        </Verdict>
+      )}
       <TracePlot judged={judged} />
       <Warnings
         words={warnings(judged, sheet).concat(judgement.findings.map((finding) => findingWords(finding, unit)))}

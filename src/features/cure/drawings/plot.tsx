@@ -124,7 +124,7 @@ function Drawing({
           />
         ))}
       </g>
-      {levels.map(({ y: at, tone, label, axis }) => (
+      {levels.map(({ y: at, tone, label, axis }, i) => (
         <g key={label}>
           <line
             x1={edge.left}
@@ -136,7 +136,8 @@ function Drawing({
             strokeDasharray="2 3"
           />
           <LevelName
-            x={axis === 'right' ? end - 4 : edge.left + 4}
+            // Side by side, so that names of levels near each other do not collide.
+            x={axis === 'right' ? end - 4 : edge.left + 4 + i * 110}
             y={yOf(axis)(at) - 4}
             label={label}
             end={axis === 'right'}

@@ -5,7 +5,7 @@ import type { TraceTable } from './csv/read-table.ts';
 import type { Values } from './desk-state.ts';
 import { ranges, reader, type Answer, type Errors } from './reader.ts';
 import { cureOf, type CureOf, type Sheet } from './sheet-of.ts';
-import { cureCurve, curedAtMinute, traceOf, type ChosenTrace, type CurePoint, type TraceChoice } from './trace.ts';
+import { cureCurve, curedAtMinute, type ChosenTrace, type CurePoint, type TraceChoice } from './trace.ts';
 import type { Unit } from './typed.ts';
 
 export const timeUnits: readonly TimeUnit[] = ['ms', 's', 'min', 'h', 'hh:mm', 'mm:ss'];
@@ -40,12 +40,13 @@ export type Judged = ChosenTrace & {
   curve: CurePoint[];
   curedAtMinute: number | null;
   limitCelsius: number | null;
+  tooHot: boolean;
 };
 
-/** A file's bake held against a sheet. `no-cure`: the sheet prints no cure time; `no-rows`: nothing to judge in that column. */
+/** A trace held against a sheet. `no-cure`: the sheet prints no cure time; `no-rows`: too few readings to judge. */
 export function judge(
   values: Values,
-  table: TraceTable,
+  chosen: ChosenTrace,
   sheet: Sheet,
   unit: Unit,
 ): Answer<Judged | 'no-cure' | 'no-rows'> {
@@ -53,14 +54,11 @@ export function judge(
   return answer(() => {
     const cure = cureOf(sheet, null);
     if (!cure) return 'no-cure';
-    const chosen = traceOf(table, choiceOf(values, table));
-    if (chosen.trace.length < 2) return 'no-rows';
+    const { trace, hottestCelsius } = chosen;
+    if (trace.length < 2) return 'no-rows';
     const { kinetics } = cure;
-    const judgement = judgeBake(kinetics, { trace: chosen.trace, earlierReferenceMinutes: earlier });
-    // The cure is the coldest sensor's, the limit the hottest one's.
-    if (limit !== null && chosen.hottestCelsius !== null && chosen.hottestCelsius > limit + HAIR)
-      judgement.findings.push({ code: 'above-heat-limit', value: chosen.hottestCelsius, limit });
-    const curve = cureCurve(chosen.trace, kinetics, earlier);
+    const judgement = judgeBake(kinetics, { trace, earlierReferenceMinutes: earlier });
+    const curve = cureCurve(trace, kinetics, earlier);
     return {
       ...chosen,
       cure,
@@ -68,6 +66,8 @@ export function judge(
       curve,
       curedAtMinute: curedAtMinute(curve, kinetics.referenceMinutes),
       limitCelsius: limit,
+      // The cure is the coldest sensor's, the limit the hottest one's.
+      tooHot: limit !== null && hottestCelsius !== null && hottestCelsius > limit + HAIR,
     };
   });
 }

@@ -40,15 +40,19 @@ export function traceOf(table: TraceTable, choice: TraceChoice): ChosenTrace {
   const trace: TraceRow[] = [];
   let hottestCelsius: number | null = null;
   for (let row = 0; row < table.rows; row += 1) {
-    let coldest = Infinity;
+    let [coldest, missing] = [Infinity, false];
     for (const { values, fahrenheit } of read) {
       const value = values[row] ?? NaN;
-      if (Number.isNaN(value)) continue;
+      if (Number.isNaN(value)) {
+        missing = true;
+        continue;
+      }
       const celsius = fahrenheit ? (value - 32) / 1.8 : value;
       if (celsius < coldest) coldest = celsius;
       if (hottestCelsius === null || celsius > hottestCelsius) hottestCelsius = celsius;
     }
-    if (coldest < Infinity) trace.push({ minutes: ((table.time[row] ?? 0) - start) * factor, metalCelsius: coldest });
+    // Where one sensor is silent nobody knows the coldest; the warmer rest must not stand in for it.
+    if (!missing) trace.push({ minutes: ((table.time[row] ?? 0) - start) * factor, metalCelsius: coldest });
   }
   return { trace, hottestCelsius };
 }

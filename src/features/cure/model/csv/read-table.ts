@@ -27,7 +27,7 @@ type Options = {
   breathe?: () => Promise<void>;
 };
 
-const linesPerSlice = 2000;
+const linesPerSlice = 1000;
 const badKept = 500;
 /** No panel in a booth is outside; a broken sensor is. In C or F alike. */
 const readingRange = { least: -60, most: 600 };
