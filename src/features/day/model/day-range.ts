@@ -1,13 +1,9 @@
-import { addDays, instantOf } from '#src/lib/wall-clock.ts';
+import { addDays, mondayOf } from '#src/lib/calendar-days.ts';
+import { instantOf } from '#src/lib/wall-clock.ts';
 
 export const spans = ['day', 'three', 'week'] as const;
 /** How much of the calendar is shown at once. */
 export type SpanKind = (typeof spans)[number];
-
-const utc = (day: string) => Date.parse(`${day}T00:00:00Z`);
-
-/** Monday of the week (ISO 8601) in which the day lies. */
-const mondayOf = (day: string) => addDays(day, -((new Date(utc(day)).getUTCDay() + 6) % 7));
 
 const length: Record<SpanKind, number> = { day: 1, three: 3, week: 7 };
 

@@ -1,6 +1,7 @@
 import { hoursWorthShowing, type Axis } from '../model/axis.ts';
 import { boardOf, type Drawn } from '../model/board.ts';
-import { addDays, instantOf } from '#src/lib/wall-clock.ts';
+import { addDays } from '#src/lib/calendar-days.ts';
+import { instantOf } from '#src/lib/wall-clock.ts';
 import { lanesOf } from '../model/lanes.ts';
 import type { DayRow, DayView } from '#contracts/day.ts';
 

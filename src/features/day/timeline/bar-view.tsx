@@ -51,7 +51,7 @@ function BarLabel({ item, where }: { item: Drawn; where: string }) {
   const [head] = members;
   return (
     <div className="bar-label" style={{ width: `${shape.labelRoom}%` }} aria-hidden="true">
-      <span className="bar-label-text">
+      <span className={numbersOf(members).length > 3 ? 'bar-label-text long-number' : 'bar-label-text'}>
         <b>{numbersOf(members)}</b>
         {kind === 'stage' && head.state === 'done' && <Check className="bar-icon" />}
         {kind === 'stage' && head.state === 'running' && <Play className="bar-icon" />}

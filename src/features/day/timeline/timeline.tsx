@@ -5,7 +5,7 @@ import resourceTimeline from '@fullcalendar/resource-timeline';
 import { memo, useRef } from 'react';
 import type { Drawn } from '../model/board.ts';
 import { closedTimes } from '../model/closed-times.ts';
-import { addDays } from '#src/lib/wall-clock.ts';
+import { addDays } from '#src/lib/calendar-days.ts';
 import { useBoardContext, useBoardData } from './board-context.ts';
 import { eventContent, groupLabel, laneContent, rowLabel, slotLabel } from './contents.tsx';
 import { rowsOf } from './rows.ts';
