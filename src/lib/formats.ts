@@ -1,4 +1,5 @@
-import { addDays, localDayOf } from './wall-clock.ts';
+import { addDays } from './calendar-days.ts';
+import { localDayOf } from './wall-clock.ts';
 
 export type Reader = { zone: string; clock: '24' | '12'; unit: 'C' | 'F' };
 type Moment = string | number | Date;

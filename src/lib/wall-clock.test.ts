@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { addDays, instantOf, localDayOf, minuteOfDay } from './wall-clock.ts';
+import { addDays } from './calendar-days.ts';
+import { instantOf, localDayOf, minuteOfDay } from './wall-clock.ts';
 
 const at = (day: string, hhmm: string, zone: string) => {
   const [hours = 0, minutes = 0] = hhmm.split(':').map(Number);

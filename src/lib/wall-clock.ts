@@ -32,7 +32,3 @@ export function instantOf(localDay: string, minutes: number, zone: string): numb
   const late = wall - after * minute;
   return offsetAt(zone, late) === after ? late : early;
 }
-
-/** The day that many days on in the calendar. */
-export const addDays = (localDay: string, days: number): string =>
-  new Date(Date.parse(`${localDay}T00:00:00Z`) + days * day).toISOString().slice(0, 10);

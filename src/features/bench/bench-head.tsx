@@ -3,7 +3,7 @@ import { ChevronLeft, ChevronRight } from 'lucide-react';
 import type { BenchView } from '#contracts/bench.ts';
 import { formatDay, formatNearDay } from '#src/lib/formats.ts';
 import { may, useFormats, useShop } from '#src/lib/session.ts';
-import { addDays } from '#src/lib/wall-clock.ts';
+import { addDays } from '#src/lib/calendar-days.ts';
 import { Button } from '#src/ui/button.tsx';
 import { IconButton } from '#src/ui/icon-button.tsx';
 import { Select } from '#src/ui/select.tsx';

@@ -3,7 +3,8 @@ import { readBench } from '#contracts/bench.ts';
 import { readDay } from '#contracts/day.ts';
 import { call } from '#src/lib/api.ts';
 import { shopKey } from '#src/lib/query-keys.ts';
-import { addDays, instantOf } from '#src/lib/wall-clock.ts';
+import { addDays } from '#src/lib/calendar-days.ts';
+import { instantOf } from '#src/lib/wall-clock.ts';
 
 export type BenchAsked = { day: string | undefined; personId: string | undefined };
 

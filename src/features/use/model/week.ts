@@ -1,16 +1,14 @@
 import { localDay } from '#contracts/common.ts';
-import { addDays, instantOf } from '#src/lib/wall-clock.ts';
+import { addDays, daysFromTo, mondayOf } from '#src/lib/calendar-days.ts';
+import { instantOf } from '#src/lib/wall-clock.ts';
 
 /** Days of the shop's calendar, both included. */
 export type DayRange = { first: string; last: string };
 const longest = 366;
 
-/** Monday of the week (ISO 8601) in which the day lies. */
-export const mondayOf = (day: string): string => addDays(day, -((new Date(`${day}T00:00:00Z`).getUTCDay() + 6) % 7));
 export const weekOf = (day: string): DayRange => ({ first: mondayOf(day), last: addDays(mondayOf(day), 6) });
 
-export const lengthOf = ({ first, last }: DayRange): number =>
-  Math.round((Date.parse(`${last}T00:00:00Z`) - Date.parse(`${first}T00:00:00Z`)) / 86_400_000) + 1;
+export const lengthOf = ({ first, last }: DayRange): number => daysFromTo(first, last);
 
 /** Reads the address; what makes no sense is this week. */
 export function readRange(params: URLSearchParams, today: string): DayRange {
