@@ -84,9 +84,9 @@ function damage(problem: Problem, made: Plan, seed: number): Plan {
   return { ...made, assignments };
 }
 
-describe.runIf(independent !== null)('both checkers agree', () => {
+if (independent !== null)
   test(
-    'on damaged plans: the same rules at the same stages, the same cost',
+    'both checkers agree on damaged plans: the same rules at the same stages, the same cost',
     () => {
       fc.assert(
         fc.property(seeds, (seed) => {
@@ -95,7 +95,7 @@ describe.runIf(independent !== null)('both checkers agree', () => {
           const problem = seed % 2 ? fixSome(shop, whole.assignments, seed + 1) : shop;
           const broken = damage(problem, whole, seed + 2);
           const ours = checkPlan(problem, broken);
-          const theirs = independent!(problem, broken);
+          const theirs = independent(problem, broken);
           expect(brokenRules(ours.violations)).toEqual(brokenRules(theirs.violations));
           expect(ours.cost).toBeCloseTo(theirs.cost, 6);
         }),
@@ -104,4 +104,3 @@ describe.runIf(independent !== null)('both checkers agree', () => {
     },
     PATIENCE,
   );
-});
