@@ -1,4 +1,3 @@
-import interaction from '@fullcalendar/interaction';
 import luxon from '@fullcalendar/luxon3';
 import FullCalendar from '@fullcalendar/react';
 import resourceTimeline from '@fullcalendar/resource-timeline';
@@ -8,6 +7,7 @@ import { closedTimes } from '../model/closed-times.ts';
 import { addDays } from '#src/lib/calendar-days.ts';
 import { useBoardContext, useBoardData } from './board-context.ts';
 import { eventContent, groupLabel, laneContent, rowLabel, slotLabel } from './contents.tsx';
+import { exactDrag } from './exact-drag.ts';
 import { rowsOf } from './rows.ts';
 import { clockOf, scaleOf, type Zoom } from './scale.ts';
 import { useAccessible } from './use-accessible.ts';
@@ -30,7 +30,7 @@ export type TimelineProps = {
   onNudge: (item: Drawn, minutes: number) => void;
 };
 
-const plugins = [resourceTimeline, interaction, luxon];
+const plugins = [resourceTimeline, exactDrag, luxon];
 const views = { booths: { type: 'resourceTimeline' } };
 const oneLevel = [{ hour: 'numeric' as const }];
 const twoLevels = [{ weekday: 'short' as const, day: 'numeric' as const }, { hour: 'numeric' as const }];
