@@ -52,5 +52,6 @@ function readProblem(file: string): Problem {
 
 const begun = performance.now();
 const { file, seconds, seed } = readFlags(process.argv.slice(2));
-const made = plan(readProblem(file), { seed, stop: () => performance.now() - begun >= seconds * 1000 });
+const share = (): number => Math.min(1, (performance.now() - begun) / (seconds * 1000));
+const made = plan(readProblem(file), { seed, share, stop: () => share() >= 1 });
 process.stdout.write(`${JSON.stringify(made)}\n`);
