@@ -19,10 +19,15 @@ type Props = {
 /** The stage of the address, where it is on the board that is shown. */
 export function ChosenStage({ view, stageId, beside, onClose, canPlan, movable, ...panel }: Props) {
   if (stageId === null) return null;
+  const close = () => {
+    onClose();
+    // By keyboard one goes on from the bar; a dialog gives the focus back by itself.
+    if (beside) document.querySelector<HTMLElement>(`[data-bar="${stageId}"]`)?.focus();
+  };
   const bar = view.bars.find((one) => one.id === stageId);
   const title = bar ? `${bar.jobNumber} ${bar.title}` : 'Stage';
   return (
-    <StageFrame title={title} beside={beside} onClose={onClose}>
+    <StageFrame title={title} beside={beside} onClose={close}>
       {bar ? (
         <StagePanel
           {...{ bar, view, ...panel }}

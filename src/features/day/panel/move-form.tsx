@@ -19,12 +19,7 @@ type Props = {
 
 /** All that dragging does, without dragging: place, start, person, pin. */
 export function MoveForm({ bar, view, formats, pending, onMove }: Props) {
-  const [entry, setEntry] = useState<MoveEntry>(() => entryOf(bar, formats.zone, formats.time));
-  const [fault, setFault] = useState<EntryFault | null>(null);
-  const set = (part: Partial<MoveEntry>) => {
-    setEntry({ ...entry, ...part });
-    setFault(null);
-  };
+  const { entry, set, fault, setFault } = useEntry(bar, formats);
   const submit = async (event: FormEvent) => {
     event.preventDefault();
     const move = moveOf(entry, bar, formats.zone);
@@ -84,6 +79,22 @@ export function MoveForm({ bar, view, formats, pending, onMove }: Props) {
     </form>
   );
 }
+
+/** What is typed for a stage; once it stands elsewhere, that. The fields stay, and with them the focus. */
+function useEntry(bar: Bar, formats: Formats) {
+  const stands = `${bar.from} ${bar.placeId} ${String(bar.pinned)}`;
+  const fresh = (): Typed => ({ of: stands, entry: entryOf(bar, formats.zone, formats.time), fault: null });
+  const [typed, setTyped] = useState(fresh);
+  if (typed.of !== stands) setTyped(fresh());
+  const { entry, fault } = typed;
+  return {
+    ...{ entry, fault },
+    set: (part: Partial<MoveEntry>) => setTyped({ of: stands, entry: { ...entry, ...part }, fault: null }),
+    setFault: (found: EntryFault) => setTyped({ ...typed, fault: found }),
+  };
+}
+
+type Typed = { of: string; entry: MoveEntry; fault: EntryFault | null };
 
 const places = (view: DayView) =>
   view.rows.filter(({ kind }) => kind === 'booth' || kind === 'prep' || kind === 'rack');

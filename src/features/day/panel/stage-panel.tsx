@@ -48,13 +48,7 @@ export function StagePanel({ bar, members, view, formats, moves, fixed, onChoose
         <ErrorNote error={refused.error} what="It was not moved." kept="The bar is back where it was." />
       )}
       {fixed === null ? (
-        <MoveForm
-          // A form for where the stage stands now: once it has moved, a new one.
-          key={`${bar.id} ${bar.from} ${bar.placeId} ${String(bar.pinned)}`}
-          {...{ bar, view, formats }}
-          pending={moves.pending}
-          onMove={moves.move}
-        />
+        <MoveForm key={bar.id} {...{ bar, view, formats }} pending={moves.pending} onMove={moves.move} />
       ) : (
         <p className="text-muted">{fixed}</p>
       )}
