@@ -11,6 +11,7 @@ export function CircuitLane({ id }: { id: string }) {
 export function SlotLabel({ at, level }: { at: number; level: number }) {
   const { axis } = useBoardData();
   const { sayTime, sayDay } = useBoardContext();
-  const isDay = axis.days.length > 1 && level === 0;
-  return <span className={isDay ? 'slot-day' : 'slot-hour'}>{isDay ? sayDay(at) : sayTime(at)}</span>;
+  const isOne = axis.days.length === 1;
+  if (!isOne && level === 0) return <span className="slot-day">{sayDay(at)}</span>;
+  return <span className={isOne ? 'slot-hour' : 'slot-hour slot-hour-tight'}>{sayTime(at)}</span>;
 }
