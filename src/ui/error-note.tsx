@@ -14,12 +14,14 @@ type ErrorNoteProps = {
   /** What is safe in spite of it. */
   kept?: string;
   retry?: () => void;
+  /** What a reason speaks of by "it", where that is not what the note is about. */
+  subjectOf?: (reason: ApiError['reasons'][number]) => string | null;
   children?: ReactNode;
   className?: string;
 };
 
 /** What happened, what was kept, what to do next. Read out at once. */
-export function ErrorNote({ error, what, kept, retry, children, className }: ErrorNoteProps) {
+export function ErrorNote({ error, what, kept, retry, subjectOf, children, className }: ErrorNoteProps) {
   const text = errorText(error);
   const { reasons, fields, requestId } =
     error instanceof ApiError ? error : { reasons: [], fields: [], requestId: null };
@@ -39,6 +41,7 @@ export function ErrorNote({ error, what, kept, retry, children, className }: Err
           <ul className="flex list-disc flex-col gap-1 pl-4.5">
             {reasons.map((reason, i) => (
               <li key={i}>
+                <Subject name={subjectOf?.(reason) ?? null} />
                 {formats ? reasonText(reason, formats) : reason.code}
                 {reason.rule !== null && <span className="text-xs text-muted"> ({ruleText(reason.rule)})</span>}
               </li>
@@ -73,3 +76,5 @@ export function ErrorNote({ error, what, kept, retry, children, className }: Err
     </div>
   );
 }
+
+const Subject = ({ name }: { name: string | null }) => (name === null ? null : <b>{name}: </b>);

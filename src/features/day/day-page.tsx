@@ -56,7 +56,9 @@ export function Component() {
     >
       <DayToolbar {...{ link, today, narrow, view, canPlan, moves, zoom }} onZoom={setZoom} onLink={setLink} />
       <RunStrip planning={planning} skew={booth.skew} />
-      {refused && refused.move.stageId !== link.stage && <RefusedNote refused={refused} onClose={moves.forgive} />}
+      {refused && refused.move.stageId !== link.stage && (
+        <RefusedNote refused={refused} bars={view?.bars ?? []} onClose={moves.forgive} />
+      )}
       {day.error && (
         <ErrorNote
           error={day.error}

@@ -7,6 +7,7 @@ import { ErrorNote } from '#src/ui/error-note.tsx';
 import { windowWords } from '#src/lib/window-words.ts';
 import { WindowGauge } from '#src/ui/window-gauge.tsx';
 import type { Moves } from '../data/use-moves.ts';
+import { otherStage } from '../model/other-stage.ts';
 import { windowOf } from '../model/window-of.ts';
 import { MoveForm } from './move-form.tsx';
 import { PhaseList } from './phase-list.tsx';
@@ -45,7 +46,12 @@ export function StagePanel({ bar, members, view, formats, moves, fixed, onChoose
       {members.length > 1 && <LoadMembers bar={bar} members={members} onChoose={onChoose} />}
       <ChainNote bar={bar} view={view} formats={formats} />
       {refused?.move.stageId === bar.id && (
-        <ErrorNote error={refused.error} what="It was not moved." kept="The bar is back where it was." />
+        <ErrorNote
+          error={refused.error}
+          what="It was not moved."
+          kept="The bar is back where it was."
+          subjectOf={otherStage(bar.id, view.bars)}
+        />
       )}
       {fixed === null ? (
         <MoveForm key={bar.id} {...{ bar, view, formats }} pending={moves.pending} onMove={moves.move} />
