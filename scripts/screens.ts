@@ -6,7 +6,16 @@ import type { Page } from 'playwright-core';
 import { migrateLatest } from '#server/db/migrate.ts';
 import { demoShopId } from '../seeds/index.ts';
 import { desk, launch, openContext, person, phone, signIn, type Look } from '../tests/browser/helpers/browser.ts';
-import { barOf, drag, findIllegalMove, mayBeDragged, readDay } from '../tests/browser/helpers/day.ts';
+import {
+  barOf,
+  days,
+  drag,
+  findIllegalMove,
+  findLegalMove,
+  mayBeDragged,
+  readDay,
+  spanOf,
+} from '../tests/browser/helpers/day.ts';
 import { startProgram } from '../tests/browser/helpers/program.ts';
 import { settled } from '../tests/browser/helpers/settled.ts';
 import { throwawayCluster } from '../tests/helpers/postgres.ts';
@@ -75,7 +84,14 @@ async function takeRefusal(page: Page): Promise<void> {
 }
 
 async function takeComparison(page: Page): Promise<void> {
-  await page.goto('/day');
+  const view = await readDay(page.request, 'draft', spanOf(days[1]));
+  const found = await findLegalMove(page.request, view, mayBeDragged(view));
+  if (found) {
+    await page.goto(`/day?date=${days[1]}`);
+    await barOf(page, found.bar.id).waitFor();
+    await drag(page, found.bar, found.to);
+    await page.getByText(/^Draft, [1-9]/).waitFor();
+  }
   await page.getByRole('button', { name: 'Plan the rest' }).click();
   await page.getByRole('region', { name: 'Planning' }).waitFor();
   await page.getByRole('region', { name: 'Planning' }).waitFor({ state: 'detached' });
