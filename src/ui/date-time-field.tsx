@@ -1,7 +1,8 @@
 import { useId } from 'react';
-import { CircleAlert } from 'lucide-react';
 import { cx } from '#src/lib/cx.ts';
 import { boxClasses } from './box-classes.ts';
+import { FieldNotes } from './field-notes.tsx';
+import { notesOf } from './notes-of.ts';
 
 /** A day of the calendar and a time as typed; both may be empty. */
 export type DateTimeText = { day: string; time: string };
@@ -29,7 +30,7 @@ export function DateTimeField({
   className,
 }: DateTimeFieldProps) {
   const id = useId();
-  const described = [hint ? `${id}-hint` : '', error ? `${id}-error` : ''].filter(Boolean).join(' ');
+  const described = notesOf(id, { hint, error });
   const both = {
     onBlur,
     className: boxClasses,
@@ -61,17 +62,7 @@ export function DateTimeField({
           onChange={(event) => onChange({ ...value, time: event.target.value })}
         />
       </div>
-      {hint && (
-        <p id={`${id}-hint`} className="text-xs text-muted">
-          {hint}
-        </p>
-      )}
-      {error && (
-        <p id={`${id}-error`} className="flex items-start gap-1.5 text-xs font-semibold text-crimson">
-          <CircleAlert size={14} className="mt-px shrink-0" aria-hidden="true" />
-          {error}
-        </p>
-      )}
+      <FieldNotes id={id} hint={hint} error={error} />
     </fieldset>
   );
 }

@@ -1,6 +1,7 @@
-import { CircleAlert } from 'lucide-react';
 import { useId, type ReactNode } from 'react';
 import { cx } from '#src/lib/cx.ts';
+import { FieldNotes } from './field-notes.tsx';
+import { notesOf } from './notes-of.ts';
 
 /** What the control inside has to carry, so that label, hint and error are read out with it. */
 export type FieldIds = { id: string; 'aria-describedby'?: string; 'aria-invalid'?: true; required?: true };
@@ -27,7 +28,7 @@ export function Field({
   children,
 }: FieldProps & { children: (ids: FieldIds) => ReactNode }) {
   const id = useId();
-  const described = [hint ? `${id}-hint` : '', error ? `${id}-error` : ''].filter(Boolean).join(' ');
+  const described = notesOf(id, { hint, error });
   return (
     <div className={cx('flex min-w-0 flex-col gap-1', className)}>
       <label htmlFor={id} className={hideLabel ? 'sr-only' : 'text-[0.8125rem] font-semibold'}>
@@ -39,17 +40,7 @@ export function Field({
         ...(described ? { 'aria-describedby': described } : {}),
         ...(error ? { 'aria-invalid': true } : {}),
       })}
-      {hint && (
-        <p id={`${id}-hint`} className="text-xs text-muted">
-          {hint}
-        </p>
-      )}
-      {error && (
-        <p id={`${id}-error`} className="flex items-start gap-1.5 text-xs font-semibold text-crimson">
-          <CircleAlert size={14} className="mt-px shrink-0" aria-hidden="true" />
-          {error}
-        </p>
-      )}
+      <FieldNotes id={id} hint={hint} error={error} />
     </div>
   );
 }
