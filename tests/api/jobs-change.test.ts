@@ -5,7 +5,7 @@ import { inShop } from '#server/db/in-shop.ts';
 import { benchRoutes } from '#server/http/bench.ts';
 import { jobRoutes } from '#server/http/jobs.ts';
 import { testApi, type TestApi } from '../helpers/api-as.ts';
-import { aBooking, aDraft, aJob, aMember, aSheet, aShop, type TestShop } from '../helpers/factories-jobs.ts';
+import { aBooking, aDraft, aJob, aMember, aSheet, aShop, newJob, type TestShop } from '../helpers/factories-jobs.ts';
 
 let api: TestApi;
 let shop: TestShop;
@@ -27,23 +27,6 @@ beforeEach(async () => {
   base = `/api/shops/${shop.id}/jobs`;
 });
 
-const newJob = (sheetId: string, given: Partial<NewJob> = {}): NewJob => ({
-  id: randomUUID(),
-  sheetId,
-  options: [],
-  parts: [{ name: 'Door', substrate: 'steel', units: 2 }],
-  title: 'Door, left front',
-  vehicle: 'Grey estate',
-  colourNote: '',
-  notes: '',
-  releaseAt: '2026-03-02T07:00:00.000Z',
-  promiseAt: '2026-03-06T16:00:00.000Z',
-  weight: 1,
-  electric: false,
-  heatLimitCelsius: null,
-  heatLimitMinutes: null,
-  ...given,
-});
 const create = async (job: NewJob, status = 200): Promise<Job> =>
   (await api.as(office).post(base).send(job).expect(status)).body as Job;
 const list = async (query = ''): Promise<{ rows: JobRow[]; total: number }> =>

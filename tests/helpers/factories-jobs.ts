@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import type { Knex } from 'knex';
 import type { Role, Substrate } from '#contracts/common.ts';
+import type { NewJob } from '#contracts/jobs.ts';
 import type { SheetBody, Way } from '#contracts/sheets.ts';
 import { inShop } from '#server/db/in-shop.ts';
 import { insertJob, takeJobNumber } from '#server/db/jobs.ts';
@@ -248,3 +249,22 @@ export async function aDraft(db: Knex, shop: { id: string }, given: { unplaced?:
   );
   return id;
 }
+
+/** A job as the office sends it: one steel door of two units, four days to the promise. */
+export const newJob = (sheetId: string, given: Partial<NewJob> = {}): NewJob => ({
+  id: randomUUID(),
+  sheetId,
+  options: [],
+  parts: [{ name: 'Door', substrate: 'steel', units: 2 }],
+  title: 'Door, left front',
+  vehicle: 'Grey estate',
+  colourNote: '',
+  notes: '',
+  releaseAt: '2026-03-02T07:00:00.000Z',
+  promiseAt: '2026-03-06T16:00:00.000Z',
+  weight: 1,
+  electric: false,
+  heatLimitCelsius: null,
+  heatLimitMinutes: null,
+  ...given,
+});
