@@ -15,8 +15,6 @@ export const changeKind = z.enum([
   'plan-run',
   'member-changed',
   'member-invited',
-  'signed-in',
-  'password-changed',
 ]);
 export type ChangeKind = z.output<typeof changeKind>;
 

@@ -30,6 +30,4 @@ export const topicsOf: Record<ChangeKind, readonly Topic[]> = {
   'plan-run': ['day', 'plan-run'],
   'member-changed': ['members'],
   'member-invited': ['members', 'letters'],
-  'signed-in': [],
-  'password-changed': [],
 };
