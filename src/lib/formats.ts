@@ -83,6 +83,8 @@ export type Formats = Reader & {
   dateTime: (at: Moment) => string;
   /** `9:05 to 10:30`, the day only where it is another one. */
   span: (from: Moment, to: Moment) => string;
+  /** `tomorrow 9:05 to 10:30`; the second day too where it is another one. */
+  dateSpan: (from: Moment, to: Moment) => string;
   /** Calendar day of an instant in the shop, `2026-03-12`. */
   dayOf: (at: Moment) => string;
   today: () => string;
@@ -97,6 +99,7 @@ export function formatsFor(reader: Reader, now: () => number = Date.now): Format
   const today = () => dayOf(now());
   const time = (at: Moment) => formatTime(at, reader);
   const dateTime = (at: Moment) => `${formatNearDay(dayOf(at), today())} ${time(at)}`;
+  const until = (from: Moment, to: Moment) => (dayOf(from) === dayOf(to) ? time(to) : dateTime(to));
   return {
     ...reader,
     time,
@@ -104,7 +107,8 @@ export function formatsFor(reader: Reader, now: () => number = Date.now): Format
     today,
     dateTime,
     date: (at) => formatDay(dayOf(at), 'short', today()),
-    span: (from, to) => `${time(from)} to ${dayOf(from) === dayOf(to) ? time(to) : dateTime(to)}`,
+    span: (from, to) => `${time(from)} to ${until(from, to)}`,
+    dateSpan: (from, to) => `${dateTime(from)} to ${until(from, to)}`,
     duration: formatDuration,
     temperature: (celsius, kind) => formatTemperature(celsius, unit, kind),
   };

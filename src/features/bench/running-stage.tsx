@@ -55,9 +55,13 @@ function BigClock({ clock }: { clock: Clock }) {
           {kind ? phaseWords[kind] : 'pause'} until {time(end)}
         </span>
       </p>
-      <p role="timer" className={figures}>
-        {countdown(clock.left)}
-      </p>
+      {/* Without the word, 10:03 on a wall of times reads as three past ten. */}
+      <div className="flex flex-wrap items-baseline gap-x-3">
+        <p role="timer" className={figures}>
+          {countdown(clock.left)}
+        </p>
+        <span className="text-2xl font-bold">left</span>
+      </div>
       <p className="figures text-base text-muted">
         {clock.next ? `then ${phaseWords[clock.next.kind]}` : 'last phase'} · all over at {time(clock.end)}
       </p>

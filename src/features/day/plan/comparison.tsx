@@ -100,7 +100,7 @@ function MovedTable({ moved, formats }: { moved: Compared['moved']; formats: For
 /** What differs stands out; what is the same stays quiet. */
 function spotWords(spot: Spot, other: Spot, formats: Formats): ReactNode {
   if (!spot) return null;
-  const when = `${formats.dateTime(spot.from)} to ${formats.time(spot.to)}`;
+  const when = formats.dateSpan(spot.from, spot.to);
   const mark = (text: string, same: boolean) => (same || !other ? text : <b>{text}</b>);
   return (
     <>
