@@ -15,6 +15,10 @@ export const changeKind = z.enum([
   'plan-run',
   'member-changed',
   'member-invited',
+  'shop-changed',
+  'people-changed',
+  'sheets-changed',
+  'air-read',
 ]);
 export type ChangeKind = z.output<typeof changeKind>;
 

@@ -13,8 +13,13 @@ const atDesk: RouteObject[] = [
   { path: '/cure', lazy: () => import('#src/features/cure/cure-page.tsx') },
   { path: '/use', lazy: () => import('#src/features/use/use-page.tsx') },
   { path: '/account', lazy: () => import('#src/features/account/account-page.tsx') },
-  { path: '/shop/members', lazy: () => import('#src/features/account/members-page.tsx') },
-  { path: '/shop/letters', lazy: () => import('#src/features/account/letters-page.tsx') },
+  {
+    lazy: () => import('#src/features/shop/shop-layout.tsx'),
+    children: [
+      { path: '/shop/members', lazy: () => import('#src/features/account/members-page.tsx') },
+      { path: '/shop/letters', lazy: () => import('#src/features/account/letters-page.tsx') },
+    ],
+  },
   { path: '*', Component: NotFound },
 ];
 const inBay: RouteObject[] = [{ path: '/bench', lazy: () => import('#src/features/bench/bench-page.tsx') }];

@@ -4,7 +4,20 @@ import type { ChangeKind } from '#contracts/live.ts';
  * First parts of every query key about a shop: `[shopId, topic, ...]`. A feature begins its keys with `shopKey`, so that
  * a notice finds them.
  */
-export type Topic = 'day' | 'draft' | 'plan-run' | 'jobs' | 'job' | 'bench' | 'use' | 'members' | 'letters' | 'sheets';
+export type Topic =
+  | 'day'
+  | 'draft'
+  | 'plan-run'
+  | 'jobs'
+  | 'job'
+  | 'bench'
+  | 'use'
+  | 'members'
+  | 'letters'
+  | 'sheets'
+  | 'setup'
+  | 'people'
+  | 'air';
 
 export const shopKey = (shopId: string, topic: Topic, ...more: unknown[]): readonly unknown[] => [
   shopId,
@@ -30,4 +43,8 @@ export const topicsOf: Record<ChangeKind, readonly Topic[]> = {
   'plan-run': ['day', 'plan-run'],
   'member-changed': ['members'],
   'member-invited': ['members', 'letters'],
+  'shop-changed': [...drafted, 'setup', 'use'],
+  'people-changed': [...drafted, 'people', 'bench'],
+  'sheets-changed': ['sheets', 'job'],
+  'air-read': ['air', 'day'],
 };

@@ -1,0 +1,16 @@
+import type { Role } from '#contracts/common.ts';
+import { may } from '#src/lib/session.ts';
+
+export type Section = { to: string; label: string; seen: (role: Role) => boolean };
+type Group = { title: string; sections: Section[] };
+
+/** The set-up in the order in which a shop thinks of it. A new page is one line here and one in the router. */
+export const groups: Group[] = [
+  {
+    title: 'Who signs in',
+    sections: [
+      { to: '/shop/members', label: 'Members', seen: may.setUp },
+      { to: '/shop/letters', label: 'Letters sent', seen: may.setUp },
+    ],
+  },
+];
