@@ -11,8 +11,18 @@ const phasesWhere = (a: Assignment, mode: Mode, wanted: (p: Mode['phases'][numbe
 const spanOf = (list: readonly Interval[]): [Minutes, Minutes] | null =>
   list.length ? [(list[0] as Interval)[0], (list[list.length - 1] as Interval)[1]] : null;
 
-/** Each lamp's use by a load, from its first to its last lit minute (rule 10). */
-export function lampUses(view: PlanView): LampUse[] {
+const usesOf = new WeakMap<PlanView, LampUse[]>();
+
+/** Each lamp's use by a load, from its first to its last lit minute (rule 10). Made once for each view. */
+export function lampUses(view: PlanView): readonly LampUse[] {
+  const known = usesOf.get(view);
+  if (known) return known;
+  const made = findLampUses(view);
+  usesOf.set(view, made);
+  return made;
+}
+
+function findLampUses(view: PlanView): LampUse[] {
   return view.runs.flatMap(({ members, fixed }) => {
     const a = members[0] as Assignment;
     const mode = modeOf(view, a);
@@ -39,4 +49,16 @@ export function zoneAir(view: PlanView): Map<string, { glow: Span[]; mist: Span[
     if (lit) here.glow.push({ from: lit[0], to: lit[1], stage: a.stage, fixed });
   }
   return air;
+}
+
+/** Index of the first of the spans, sorted by their starts, that starts at or after `at`. */
+export function firstFrom(spans: readonly Span[], at: Minutes): number {
+  let lo = 0;
+  let hi = spans.length;
+  while (lo < hi) {
+    const mid = (lo + hi) >> 1;
+    if (spans[mid]!.from < at) lo = mid + 1;
+    else hi = mid;
+  }
+  return lo;
 }

@@ -57,6 +57,8 @@ export type PlanView = {
   runOf: Map<string, LoadRun>;
   sound: Sound[];
   holds: Hold[];
+  /** The holds of each place by their starts; of equal ones the shorter first. */
+  holdsAt: Map<string, Hold[]>;
 };
 
 export type Report = (code: ViolationCode, stage: string, ids?: string[], minutes?: Minutes[]) => void;
@@ -92,6 +94,7 @@ export function viewPlan(problem: Problem, plan: Plan): PlanView {
     runOf: new Map(),
     sound: [],
     holds: [],
+    holdsAt: new Map(),
   };
   for (const job of problem.jobs) job.stages.forEach((stage, index) => view.refs.set(stage.id, { job, stage, index }));
   for (const a of plan.assignments) if (view.refs.has(a.stage) && !view.given.has(a.stage)) view.given.set(a.stage, a);
@@ -102,6 +105,9 @@ export function viewPlan(problem: Problem, plan: Plan): PlanView {
   gatherRuns(view);
   gatherSound(view);
   view.holds = view.runs.map((run) => holdOf(view, run));
+  for (const place of problem.places) view.holdsAt.set(place.id, []);
+  for (const h of view.holds) view.holdsAt.get(h.place)?.push(h);
+  for (const here of view.holdsAt.values()) here.sort((x, y) => x.from - y.from || x.to - y.to);
   return view;
 }
 

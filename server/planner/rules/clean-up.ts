@@ -7,7 +7,7 @@ export const cleanUp: Rule = (view, report) => {
   const need = (a: Hold, b: Hold): number => needs.get(`${a.family}>${b.family}`) ?? 0;
   for (const place of view.places.values()) {
     if (place.kind !== 'booth') continue;
-    const here = view.holds.filter((h) => h.place === place.id).sort((x, y) => x.from - y.from || x.to - y.to);
+    const here = view.holdsAt.get(place.id)!;
     here.forEach((a, i) => {
       if (a.goesOn) return;
       for (let k = i + 1; k < here.length; k++) {

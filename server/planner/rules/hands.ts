@@ -23,11 +23,15 @@ function inShift(view: PlanView, s: Sound, report: Report): void {
     if (phase.attendance !== 'hands') return;
     const [from, to] = s.at.phases[k] ?? [0, 0];
     const need = minutesInLoad(view, s, k);
-    const ends = !need || (liesWithin(from, from + 1, shift) && liesWithin(to - 1, to, shift));
-    const fine = s.mode.split ? minutesWithin(from, to, shift) === need && ends : liesWithin(from, to, shift);
+    const fine = s.mode.split ? fillsShift(from, to, need, shift) : liesWithin(from, to, shift);
     if (!fine) report('off-shift', s.at.stage, who === null ? [] : [who], [k, from, to]);
   });
 }
+
+/** Split work takes its minutes of the shift, and starts and ends inside it. */
+const fillsShift = (from: number, to: number, need: number, shift: readonly Interval[]): boolean =>
+  minutesWithin(from, to, shift) === need &&
+  (!need || (liesWithin(from, from + 1, shift) && liesWithin(to - 1, to, shift)));
 
 const NEVER_AT_WORK: readonly Interval[] = [];
 

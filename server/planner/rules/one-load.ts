@@ -6,7 +6,7 @@ export const oneLoad: Rule = (view, report) => {
   for (const { at, mode, place } of view.sound)
     if (mode.units > place.units) report('does-not-fit', at.stage, [place.id], [mode.units, place.units]);
   for (const place of view.places.values()) {
-    const here = view.holds.filter((h) => h.place === place.id).sort((x, y) => x.from - y.from || x.to - y.to);
+    const here = view.holdsAt.get(place.id)!;
     if (place.kind === 'rack') {
       const uses = here.map((h) => ({ ...h, amount: h.units }));
       for (const h of overfilled(uses, place.units)) report('rack-full', h.stage, [place.id], [h.from]);

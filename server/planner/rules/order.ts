@@ -56,7 +56,9 @@ function times(view: PlanView, a: Assignment, mode: Mode, report: Report): void 
   const ref = view.refs.get(a.stage);
   const first = a.phases[0];
   const last = a.phases[mode.phases.length - 1];
-  if (![a.start, a.end, ...a.phases.flat()].every(Number.isInteger)) report('not-whole-minutes', a.stage);
+  const whole = Number.isInteger(a.start) && Number.isInteger(a.end);
+  if (!whole || !a.phases.every(([from, to]) => Number.isInteger(from) && Number.isInteger(to)))
+    report('not-whole-minutes', a.stage);
   if (first && last && (first[0] !== a.start || last[1] !== a.end)) report('ends-not-of-phases', a.stage);
   if (a.start < now) report('before-now', a.stage, [], [a.start, now]);
   if (a.end > horizon) report('after-horizon', a.stage, [], [a.end, horizon]);
