@@ -82,7 +82,7 @@ function clearBlock(s: Search, id: number): void {
 }
 
 /** Blocks placed between two looks at the clock. */
-const BREATH = 64;
+const BREATH = 16;
 
 /** Places the candidate's blocks from position `from` on; false as soon as its cost passes `limit`, or on a halt. */
 function placeFrom(s: Search, from: number, limit: number): boolean {
