@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import { gapSource, phaseSource } from './coatings.ts';
 import { endpoint } from './endpoint.ts';
 import { attendance, id, inShop, name, phaseKind, placeKind } from './common.ts';
 
@@ -12,10 +13,12 @@ export const phase = z.strictObject({
   lamp: z.boolean().optional(),
   /** Idle minutes that may follow before the next phase. */
   wait: minutes.optional(),
+  /** The line of the coating's data sheet that the minutes were taken from; absent: set by hand. */
+  source: phaseSource.optional(),
 });
 
 export const gap = z
-  .strictObject({ min: minutes, max: minutes.nullable(), settle: minutes })
+  .strictObject({ min: minutes, max: minutes.nullable(), settle: minutes, source: gapSource.optional() })
   .refine((g) => g.max === null || g.max >= g.min, 'the latest start lies before the earliest')
   .refine((g) => g.settle <= g.min, 'the place is held longer than the part has to wait');
 
@@ -80,27 +83,4 @@ export const listSheets = endpoint({
   path: '/api/shops/:shopId/process-sheets',
   params: inShop,
   reply: z.strictObject({ sheets: z.array(sheet) }),
-});
-
-/** What a coating's data sheet says, in C and minutes. `celsius` of a bake is metal or booth air, as the maker says. */
-export const coatingSheet = z.strictObject({
-  coats: z.strictObject({ from: z.number().int().min(1), to: z.number().int().min(1) }),
-  flashBetweenCoats: minutes,
-  flashBeforeNext: minutes,
-  flashBeforeHeat: minutes,
-  recoatWithin: minutes.nullable(),
-  potLife: minutes.nullable(),
-  airDry: z.strictObject({ minutes, celsius: z.number() }).nullable(),
-  bake: z.strictObject({ minutes, celsius: z.number(), measuredAt: z.enum(['metal', 'air']) }).nullable(),
-  lamp: z.strictObject({ minutes, wave: z.enum(['short', 'medium']), metres: z.number() }).nullable(),
-  cautions: z.array(z.string()),
-});
-export const coating = z.strictObject({ id, name: z.string(), kind: z.string(), sheet: coatingSheet });
-export type Coating = z.output<typeof coating>;
-export const listCoatings = endpoint({
-  name: 'list-coatings',
-  method: 'GET',
-  path: '/api/shops/:shopId/coatings',
-  params: inShop,
-  reply: z.strictObject({ coatings: z.array(coating) }),
 });

@@ -1,14 +1,15 @@
-import type { CoatingSheet } from './sheets/types.ts';
+import { emptySheet, type CoatingKind, type CoatingSheet } from '#contracts/coatings.ts';
 
 const isocyanate = 'Holds isocyanate: air-fed breathing equipment while spraying and until the booth has cleared.';
 
 /** Named by their use. Figures are common practice to begin with; a shop enters those of its makers' data sheets. */
-export const coatings: { key: string; name: string; kind: string; sheet: CoatingSheet }[] = [
+export const coatings: { key: string; name: string; kind: CoatingKind; sheet: CoatingSheet }[] = [
   {
     key: 'promoter',
     name: 'Plastic adhesion promoter',
     kind: 'promoter',
     sheet: {
+      ...emptySheet,
       coats: { from: 1, to: 2 },
       flashBetweenCoats: 5,
       flashBeforeNext: 10,
@@ -17,7 +18,6 @@ export const coatings: { key: string; name: string; kind: string; sheet: Coating
       potLife: null,
       airDry: { minutes: 15, celsius: 20 },
       bake: null,
-      lamp: null,
       cautions: ['For bare plastic only.'],
     },
   },
@@ -26,6 +26,7 @@ export const coatings: { key: string; name: string; kind: string; sheet: Coating
     name: 'Grey primer surfacer',
     kind: 'primer',
     sheet: {
+      ...emptySheet,
       coats: { from: 2, to: 3 },
       flashBetweenCoats: 10,
       flashBeforeNext: 15,
@@ -34,7 +35,7 @@ export const coatings: { key: string; name: string; kind: string; sheet: Coating
       potLife: 60,
       airDry: { minutes: 180, celsius: 20 },
       bake: { minutes: 30, celsius: 60, measuredAt: 'metal' },
-      lamp: { minutes: 25, wave: 'short', metres: 0.7 },
+      lampShort: { minutes: 25, metres: 0.7 },
       cautions: [isocyanate],
     },
   },
@@ -43,6 +44,7 @@ export const coatings: { key: string; name: string; kind: string; sheet: Coating
     name: 'Wet-on-wet sealer',
     kind: 'sealer',
     sheet: {
+      ...emptySheet,
       coats: { from: 1, to: 1 },
       flashBetweenCoats: 0,
       flashBeforeNext: 15,
@@ -51,7 +53,6 @@ export const coatings: { key: string; name: string; kind: string; sheet: Coating
       potLife: 90,
       airDry: { minutes: 240, celsius: 20 },
       bake: null,
-      lamp: null,
       cautions: [isocyanate],
     },
   },
@@ -60,6 +61,7 @@ export const coatings: { key: string; name: string; kind: string; sheet: Coating
     name: 'Solvent basecoat',
     kind: 'base',
     sheet: {
+      ...emptySheet,
       coats: { from: 3, to: 4 },
       flashBetweenCoats: 10,
       flashBeforeNext: 15,
@@ -68,7 +70,6 @@ export const coatings: { key: string; name: string; kind: string; sheet: Coating
       potLife: null,
       airDry: { minutes: 30, celsius: 20 },
       bake: null,
-      lamp: null,
       cautions: ['Judge the flash by the look: the minutes are the least.'],
     },
   },
@@ -77,6 +78,7 @@ export const coatings: { key: string; name: string; kind: string; sheet: Coating
     name: 'Medium-solid clear',
     kind: 'clear',
     sheet: {
+      ...emptySheet,
       coats: { from: 2, to: 2 },
       flashBetweenCoats: 10,
       flashBeforeNext: 0,
@@ -85,7 +87,7 @@ export const coatings: { key: string; name: string; kind: string; sheet: Coating
       potLife: 120,
       airDry: { minutes: 720, celsius: 20 },
       bake: { minutes: 30, celsius: 60, measuredAt: 'metal' },
-      lamp: { minutes: 20, wave: 'short', metres: 0.7 },
+      lampShort: { minutes: 20, metres: 0.7 },
       cautions: [isocyanate],
     },
   },
@@ -94,6 +96,7 @@ export const coatings: { key: string; name: string; kind: string; sheet: Coating
     name: 'Low-bake clear',
     kind: 'clear',
     sheet: {
+      ...emptySheet,
       coats: { from: 2, to: 2 },
       flashBetweenCoats: 10,
       flashBeforeNext: 0,
@@ -102,7 +105,6 @@ export const coatings: { key: string; name: string; kind: string; sheet: Coating
       potLife: 45,
       airDry: { minutes: 480, celsius: 20 },
       bake: { minutes: 40, celsius: 45, measuredAt: 'air' },
-      lamp: null,
       cautions: [isocyanate, 'For vehicles with a high-voltage battery: keep to the heat limit of the vehicle.'],
     },
   },

@@ -23,6 +23,7 @@ export const may = {
   keepJobs: oneOf('owner', 'lead', 'office'),
   workStages: oneOf('owner', 'lead', 'painter'),
   seeUse: oneOf('owner', 'lead'),
+  keepSheets: oneOf('owner', 'lead'),
   setUp: oneOf('owner'),
 } satisfies Record<string, Policy>;
 

@@ -1,6 +1,5 @@
-import type { Coating, SheetBody, Way } from '#contracts/sheets.ts';
+import type { SheetBody, Way } from '#contracts/sheets.ts';
 
-export type CoatingSheet = Coating['sheet'];
 export type StageSeed = Omit<SheetBody['stages'][number], 'coatingId'> & { coating: string | null };
 export type SheetSeed = Omit<SheetBody, 'stages'> & { key: string; name: string; stages: StageSeed[] };
 export type Phase = Way['phases'][number];

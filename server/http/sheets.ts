@@ -1,4 +1,5 @@
-import { listCoatings, listSheets } from '#contracts/sheets.ts';
+import { listCoatings } from '#contracts/coatings.ts';
+import { listSheets } from '#contracts/sheets.ts';
 import type { Deps } from '../deps.ts';
 import { may } from '../policies.ts';
 import * as read from '../services/list-sheets.ts';

@@ -1,4 +1,5 @@
-import type { Coating, Sheet } from '#contracts/sheets.ts';
+import type { Coating } from '#contracts/coatings.ts';
+import type { Sheet } from '#contracts/sheets.ts';
 import * as coatings from '../db/coatings.ts';
 import { inShop } from '../db/in-shop.ts';
 import * as sheets from '../db/sheets.ts';

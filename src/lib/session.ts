@@ -51,6 +51,7 @@ export const may = {
   keepJobs: (role: Role) => role !== 'painter',
   workStages: (role: Role) => role !== 'office',
   seeUse: (role: Role) => role === 'owner' || role === 'lead',
+  keepSheets: (role: Role) => role === 'owner' || role === 'lead',
   setUp: (role: Role) => role === 'owner',
 };
 

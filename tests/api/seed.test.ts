@@ -1,7 +1,8 @@
 import { verify } from '@node-rs/argon2';
 import type { Knex } from 'knex';
 import { afterEach, describe, expect, test } from 'vitest';
-import { coating, sheetBody } from '#contracts/sheets.ts';
+import { coating } from '#contracts/coatings.ts';
+import { sheetBody } from '#contracts/sheets.ts';
 import { connect } from '#server/db/connect.ts';
 import { inShop, type Trx } from '#server/db/in-shop.ts';
 import { listCoatings } from '#server/db/coatings.ts';

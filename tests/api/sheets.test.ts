@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, expect, test } from 'vitest';
-import type { Coating } from '#contracts/sheets.ts';
+import { emptySheet, type Coating } from '#contracts/coatings.ts';
 import { insertCoating } from '#server/db/coatings.ts';
 import { inShop } from '#server/db/in-shop.ts';
 import { sheetRoutes } from '#server/http/sheets.ts';
@@ -18,6 +18,7 @@ const clear: Coating = {
   name: 'Medium-solid clear',
   kind: 'clear',
   sheet: {
+    ...emptySheet,
     coats: { from: 2, to: 2 },
     flashBetweenCoats: 10,
     flashBeforeNext: 0,
@@ -26,7 +27,6 @@ const clear: Coating = {
     potLife: 120,
     airDry: { minutes: 720, celsius: 20 },
     bake: { minutes: 30, celsius: 60, measuredAt: 'metal' },
-    lamp: null,
     cautions: ['Isocyanate: air-fed breathing equipment.'],
   },
 };

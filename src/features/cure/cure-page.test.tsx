@@ -1,7 +1,7 @@
 import { screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it } from 'vitest';
-import { listCoatings } from '#contracts/sheets.ts';
+import { listCoatings } from '#contracts/coatings.ts';
 import { expectAccessible } from '#src/testing/axe.ts';
 import { apiError, fakeApi } from '#src/testing/fake-api.ts';
 import { meAs, renderPage, shopId } from '#src/testing/render-page.tsx';

@@ -1,6 +1,6 @@
 import { queryOptions } from '@tanstack/react-query';
+import { listCoatings } from '#contracts/coatings.ts';
 import { readDay } from '#contracts/day.ts';
-import { listCoatings } from '#contracts/sheets.ts';
 import { call } from '#src/lib/api.ts';
 import { shopKey } from '#src/lib/query-keys.ts';
 import { shopCircuits } from './model/circuit.ts';

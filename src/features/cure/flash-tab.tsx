@@ -70,7 +70,8 @@ const nothing: Sheet = {
   flashBeforeHeat: 0,
   airDry: null,
   bake: null,
-  lamp: null,
+  lampShort: null,
+  lampMedium: null,
   cautions: [],
 };
 

@@ -126,10 +126,11 @@ export function firstAt({ trace }: Pick<HeatUp, 'trace'>, celsius: number): numb
 }
 
 function sheetMinutesOf(sheet: Sheet | null, wave: 'short' | 'medium'): LampAnswer['sheetMinutes'] {
-  if (!sheet?.lamp) return null;
-  const { minutes, wave: printedWave, metres: at } = sheet.lamp;
-  if (printedWave === wave) return { minutes, printed: true, metres: at };
+  const printed = wave === 'short' ? sheet?.lampShort : sheet?.lampMedium;
+  if (printed) return { ...printed, printed: true };
   // Nothing is known of the way back from a medium-wave time.
-  const reckoned = printedWave === 'short' && minutes > 0 ? lampMinutesForBand(minutes, wave) : null;
-  return reckoned === null ? null : { minutes: reckoned, printed: false, metres: at };
+  if (wave === 'short' || !sheet?.lampShort) return null;
+  const { minutes, metres } = sheet.lampShort;
+  const reckoned = lampMinutesForBand(minutes, wave);
+  return reckoned === null ? null : { minutes: reckoned, printed: false, metres };
 }

@@ -1,4 +1,4 @@
-import type { Coating } from '#contracts/sheets.ts';
+import type { Coating } from '#contracts/coatings.ts';
 import { cureKinetics, type Kinetics } from '#chemistry/cure/kinetics.ts';
 import type { PrintedPoint } from '#chemistry/printed-points.ts';
 import type { Values } from './desk-state.ts';
@@ -8,7 +8,15 @@ import type { Unit } from './typed.ts';
 /** What the calculators need of a data sheet; a coating of the shop has it, or it is typed on the desk. */
 export type Sheet = Pick<
   Coating['sheet'],
-  'coats' | 'flashBetweenCoats' | 'flashBeforeNext' | 'flashBeforeHeat' | 'airDry' | 'bake' | 'lamp' | 'cautions'
+  | 'coats'
+  | 'flashBetweenCoats'
+  | 'flashBeforeNext'
+  | 'flashBeforeHeat'
+  | 'airDry'
+  | 'bake'
+  | 'lampShort'
+  | 'lampMedium'
+  | 'cautions'
 > & { name: string };
 
 /** Value of the list of coatings for a sheet that is typed. */
@@ -45,7 +53,8 @@ export function sheetOf(coating: Coating | null, values: Values, unit: Unit): An
       bake === null
         ? null
         : { minutes: bake, celsius: bakeAt, measuredAt: values.measured === 'air' ? 'air' : 'metal' },
-    lamp: null,
+    lampShort: null,
+    lampMedium: null,
     cautions: [],
   }));
 }

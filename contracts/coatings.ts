@@ -1,0 +1,114 @@
+import * as z from 'zod';
+import { id, inShop, name } from './common.ts';
+import { endpoint } from './endpoint.ts';
+
+/** As `minutes` of a process sheet: two weeks at most. */
+const minutes = z.number().int().min(0).max(20_160);
+const someMinutes = minutes.min(1);
+const celsius = z.number().min(-10).max(200);
+const factor = z.number().min(1).max(5);
+
+/** What a coating is for. `base` is a solvent base; the words are in src/lib/coating-words.ts. */
+export const coatingKind = z.enum([
+  'promoter',
+  'etch-primer',
+  'epoxy-primer',
+  'primer',
+  'filler',
+  'sealer',
+  'base',
+  'waterborne-base',
+  'clear',
+  'single-stage',
+  'other',
+]);
+export type CoatingKind = z.output<typeof coatingKind>;
+
+/**
+ * Where a phase's minutes come from in the data sheet of the stage's coating; without one they were set by hand. `coat`:
+ * one coat sprayed, whose number the sheet gives, not its minutes.
+ */
+export const phaseSource = z.enum([
+  'coat',
+  'flash-between',
+  'flash-next',
+  'flash-heat',
+  'bake',
+  'lamp-short',
+  'lamp-medium',
+  'air',
+]);
+export type PhaseSource = z.output<typeof phaseSource>;
+
+/**
+ * Where a gap before a stage comes from in the data sheet of the coating that was sprayed last before it. `recoat`: from the
+ * flash before the next product to the end of the recoat window; `heat`: from the flash before heat, its end set by hand.
+ */
+export const gapSource = z.enum(['recoat', 'heat']);
+export type GapSource = z.output<typeof gapSource>;
+
+const lampCure = z.strictObject({ minutes: someMinutes, metres: z.number().min(0.1).max(3) });
+
+/** What a coating's data sheet says, in C and minutes; null: the sheet says nothing of it. */
+export const coatingSheet = z.strictObject({
+  /** Maker and product as on the can, and which edition of the maker's sheet was read. */
+  maker: z.string().trim().max(120),
+  edition: z.string().trim().max(60),
+  coats: z.strictObject({ from: z.number().int().min(1).max(12), to: z.number().int().min(1).max(12) }),
+  flashBetweenCoats: minutes,
+  /** To the next product, and so the beginning of the recoat window. */
+  flashBeforeNext: minutes,
+  flashBeforeHeat: minutes,
+  /** The last minute at which the next product takes without sanding; null: no end. */
+  recoatWithin: minutes.nullable(),
+  potLife: someMinutes.nullable(),
+  airDry: z.strictObject({ minutes: someMinutes, celsius }).nullable(),
+  /** `celsius` is metal or booth air, as the maker says. */
+  bake: z.strictObject({ minutes: someMinutes, celsius, measuredAt: z.enum(['metal', 'air']) }).nullable(),
+  lampShort: lampCure.nullable(),
+  lampMedium: lampCure.nullable(),
+  /** The hottest the film may get. */
+  heatLimitCelsius: celsius.nullable(),
+  /** Air temperatures between which the sheet's figures hold. */
+  holds: z.strictObject({ from: celsius, to: celsius }).nullable(),
+  /** Activation energy of the cure, kJ/mol, set by the shop; null: fitted to the sheet's own two points, or the default. */
+  kilojoulesPerMole: z.number().min(1).max(200).nullable(),
+  /** By how much the shop stretches flashes in cold and in damp air: experience, not precision; null: not at all. */
+  coldAir: z.strictObject({ belowCelsius: celsius, factor }).nullable(),
+  dampAir: z.strictObject({ abovePercent: z.number().min(0).max(100), factor }).nullable(),
+  cautions: z.array(z.string().trim().min(1).max(300)).max(12),
+});
+export type CoatingSheet = z.output<typeof coatingSheet>;
+
+/** One coat and nothing known: where a new data sheet begins, and what an older row lacks. */
+export const emptySheet: CoatingSheet = {
+  maker: '',
+  edition: '',
+  coats: { from: 1, to: 1 },
+  flashBetweenCoats: 0,
+  flashBeforeNext: 0,
+  flashBeforeHeat: 0,
+  recoatWithin: null,
+  potLife: null,
+  airDry: null,
+  bake: null,
+  lampShort: null,
+  lampMedium: null,
+  heatLimitCelsius: null,
+  holds: null,
+  kilojoulesPerMole: null,
+  coldAir: null,
+  dampAir: null,
+  cautions: [],
+};
+
+export const coating = z.strictObject({ id, name, kind: coatingKind, sheet: coatingSheet });
+export type Coating = z.output<typeof coating>;
+
+export const listCoatings = endpoint({
+  name: 'list-coatings',
+  method: 'GET',
+  path: '/api/shops/:shopId/coatings',
+  params: inShop,
+  reply: z.strictObject({ coatings: z.array(coating) }),
+});
