@@ -10,6 +10,11 @@ import * as plans from './202612011010_plans.ts';
 import * as queueAndLetters from './202612011020_queue_and_letters.ts';
 import * as changes from './202612011030_changes.ts';
 import * as changeIds from './202612011040_change_ids.ts';
+import * as airReadings from './202612011520_air_readings.ts';
+import * as airSettings from './202612011522_air_settings.ts';
+import * as apiKeys from './202612011524_api_keys.ts';
+import * as airOfPlans from './202612011526_air_of_plans.ts';
+import * as bakeTraces from './202612011528_bake_traces.ts';
 
 type Step = { up(knex: Knex): Promise<void>; down(knex: Knex): Promise<void> };
 
@@ -26,4 +31,9 @@ export const migrations: Record<string, Step> = {
   '202612011020_queue_and_letters': queueAndLetters,
   '202612011030_changes': changes,
   '202612011040_change_ids': changeIds,
+  '202612011520_air_readings': airReadings,
+  '202612011522_air_settings': airSettings,
+  '202612011524_api_keys': apiKeys,
+  '202612011526_air_of_plans': airOfPlans,
+  '202612011528_bake_traces': bakeTraces,
 };
