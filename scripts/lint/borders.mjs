@@ -11,7 +11,7 @@ const mailers = ['nodemailer', 'smtp-server', 'mailparser', '@react-email/compon
 const database = ['knex', 'pg'];
 const nodeOnly = ['node:', ...webServer, ...mailers, ...database, 'pino', 'pino-http', 'node-cron'];
 
-const pure = ['planner', 'chemistry', 'contracts'];
+const pure = ['planner', 'chemistry', 'sheets', 'contracts'];
 const kernel = ['errors', 'deps', ...pure];
 /**
  * One row per layer; the first whose `at` matches a file's path names its layer. `mayUse` lists the layers it may import
@@ -23,6 +23,7 @@ export const layers = [
   { name: 'contracts', at: /^contracts\//, mayUse: [], only: ['zod'] },
   { name: 'planner', at: /^server\/planner\//, mayUse: [], only: [] },
   { name: 'chemistry', at: /^server\/chemistry\//, mayUse: [], only: [] },
+  { name: 'sheets', at: /^server\/sheets\//, mayUse: ['contracts', 'chemistry'], only: [] },
   {
     name: 'errors',
     at: /^server\/(errors|policies|config)\.ts$/,
@@ -71,7 +72,7 @@ export const layers = [
   {
     name: 'browser feature',
     at: /^src\/features\//,
-    mayUse: ['contracts', 'planner', 'chemistry', 'browser lib', 'browser ui', 'browser paths'],
+    mayUse: ['contracts', 'planner', 'chemistry', 'sheets', 'browser lib', 'browser ui', 'browser paths'],
     never: nodeOnly,
   },
   {
