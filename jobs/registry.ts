@@ -1,5 +1,7 @@
+import { availableParallelism } from 'node:os';
 import type { TaskKind } from '#server/db/tasks.ts';
 import { openPlannerThreads } from '#server/planning/planner-threads.ts';
+import { twoSeeds } from '#server/planning/two-seeds.ts';
 import type { TaskDefinition } from './task-function.ts';
 import { letterIsDead } from './tasks/deliver.ts';
 import { prune } from './tasks/prune.ts';
@@ -14,7 +16,7 @@ export const registry: Partial<Record<TaskKind, TaskDefinition>> = {
   'send-invitation': { run: sendInvitation, attempts: 10, onDead: letterIsDead },
   // Who waits for a link has asked again, or given up, after that.
   'send-reset': { run: sendReset, attempts: 7 },
-  'run-plan': planWith(openPlannerThreads()),
+  'run-plan': planWith(twoSeeds(openPlannerThreads(availableParallelism()))),
   prune: { run: prune, attempts: 5 },
 };
 
