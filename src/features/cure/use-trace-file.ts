@@ -1,5 +1,5 @@
 import { useCallback, useRef, useState } from 'react';
-import { decode } from './model/csv/decode.ts';
+import { decodeText } from '#src/lib/decode-text.ts';
 import { readTable, type TraceTable } from './model/csv/read-table.ts';
 
 /** More than a logger writes in a year; a browser's memory has an end. */
@@ -52,7 +52,7 @@ export function useTraceFile(): TraceReader {
     (given: File) =>
       start(given.name, async () => {
         if (given.size > mostBytes) throw new Error('it is larger than 60 MB');
-        return decode(new Uint8Array(await given.arrayBuffer()));
+        return decodeText(new Uint8Array(await given.arrayBuffer()));
       }),
     [start],
   );
