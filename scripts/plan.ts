@@ -5,7 +5,7 @@
  */
 import { readFileSync } from 'node:fs';
 import { parseArgs } from 'node:util';
-import { parseProblem, plan, type Problem } from '#planner/index.ts';
+import { closingMilliseconds, parseProblem, plan, type Problem } from '#planner/index.ts';
 
 const USAGE = 'usage: npm run plan -- PROBLEM.json [--seconds N] [--seed N]';
 
@@ -52,6 +52,8 @@ function readProblem(file: string): Problem {
 
 const begun = performance.now();
 const { file, seconds, seed } = readFlags(process.argv.slice(2));
-const share = (): number => Math.min(1, (performance.now() - begun) / (seconds * 1000));
-const made = plan(readProblem(file), { seed, share, stop: () => share() >= 1 });
+const problem = readProblem(file);
+const searching = Math.max(seconds * 500, seconds * 1000 - closingMilliseconds(problem));
+const share = (): number => Math.min(1, (performance.now() - begun) / searching);
+const made = plan(problem, { seed, share, stop: () => share() >= 1 });
 process.stdout.write(`${JSON.stringify(made)}\n`);

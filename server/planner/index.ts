@@ -3,5 +3,5 @@ export { explain, type Hold, type Link } from './explain.ts';
 export { type Landing, landings, type LandingReason, type Window } from './landings.ts';
 export { type JobOdds, odds, type Spread } from './odds.ts';
 export { parseProblem } from './parse-problem.ts';
-export { plan } from './plan.ts';
+export { closingMilliseconds, plan } from './plan.ts';
 export type * from './types.ts';

@@ -14,6 +14,13 @@ export function plan(problem: Problem, options: PlanOptions): Plan {
   return finish(problem, found);
 }
 
+/**
+ * Milliseconds that the last check of a plan takes once the search has ended: about 0.06 a stage, measured with 4,400
+ * stages. Who stops by the clock stops so much earlier, so that the plan is there on time.
+ */
+export const closingMilliseconds = (problem: Problem): number =>
+  0.06 * problem.jobs.reduce((sum, job) => sum + job.stages.length, 0);
+
 /** The plan as it leaves the planner: asked of every rule once more, and what breaks one is left out with its reason. */
 function finish(problem: Problem, { d, bound, stats }: Found): Plan {
   const { shop } = d;

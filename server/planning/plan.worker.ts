@@ -1,5 +1,5 @@
 import { parentPort } from 'node:worker_threads';
-import { plan } from '#planner/index.ts';
+import { closingMilliseconds, plan } from '#planner/index.ts';
 import type { PlanMessage, PlanOrder } from './thread-messages.ts';
 
 /** A thread of its own for the planner, so that a search never holds up anything else. One order at a time. */
@@ -11,7 +11,8 @@ const say = (message: PlanMessage): void => port.postMessage(message);
 port.on('message', ({ problem, seed, milliseconds, evaluations, flags }: PlanOrder) => {
   const stopped = new Int32Array(flags);
   const begun = performance.now();
-  const share = (): number => Math.min(1, (performance.now() - begun) / milliseconds);
+  const searching = Math.max(milliseconds / 2, milliseconds - closingMilliseconds(problem));
+  const share = (): number => Math.min(1, (performance.now() - begun) / searching);
   const made = plan(problem, {
     seed,
     // Counted in evaluations it must come out the same whatever the clock says.
