@@ -41,10 +41,11 @@ export const phaseSource = z.enum([
 export type PhaseSource = z.output<typeof phaseSource>;
 
 /**
- * Where a gap before a stage comes from in the data sheet of the coating that was sprayed last before it. `recoat`: from the
- * flash before the next product to the end of the recoat window; `heat`: from the flash before heat, its end set by hand.
+ * Where a gap before a stage comes from in the data sheet of the coating that was put on last before it. `recoat`: from the
+ * flash before the next product to the end of the recoat window. `next`: the same beginning, an earlier end set by hand.
+ * `heat`: from the flash before heat, its end set by hand.
  */
-export const gapSource = z.enum(['recoat', 'heat']);
+export const gapSource = z.enum(['recoat', 'next', 'heat']);
 export type GapSource = z.output<typeof gapSource>;
 
 const lampCure = z.strictObject({ minutes: someMinutes, metres: z.number().min(0.1).max(3) });
@@ -63,8 +64,15 @@ export const coatingSheet = z.strictObject({
   recoatWithin: minutes.nullable(),
   potLife: someMinutes.nullable(),
   airDry: z.strictObject({ minutes: someMinutes, celsius }).nullable(),
-  /** `celsius` is metal or booth air, as the maker says. */
-  bake: z.strictObject({ minutes: someMinutes, celsius, measuredAt: z.enum(['metal', 'air']) }).nullable(),
+  /** `celsius` is metal or booth air, as the maker says; a metal time gets the shop's heat-up on top (absent: 10 min). */
+  bake: z
+    .strictObject({
+      minutes: someMinutes,
+      celsius,
+      measuredAt: z.enum(['metal', 'air']),
+      heatUp: z.number().int().min(0).max(240).optional(),
+    })
+    .nullable(),
   lampShort: lampCure.nullable(),
   lampMedium: lampCure.nullable(),
   /** The hottest the film may get. */
