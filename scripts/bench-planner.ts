@@ -1,6 +1,7 @@
 /**
  * Measures the planner against published and reference values, one table:
- *   npm run bench:planner -- [--seconds 1,10] [--only classics,no-wait,shops,growth,landings] [--data FOLDER] [--keep]
+ *   npm run bench:planner -- [--seconds 1,10] [--only classics,no-wait,shops,growth,landings,random]
+ *     [--growth-seconds 60] [--problems 2000] [--data FOLDER] [--keep]
  * Seconds are those of one core (user time of this process), so that a busy machine changes little. `--keep` adds the
  * figures to docs/bench/planner-DATE.json.
  */
@@ -10,6 +11,10 @@ import { pathToFileURL } from 'node:url';
 import { parseArgs } from 'node:util';
 import { checkPlan, landings, plan, type Plan, type Problem } from '#planner/index.ts';
 import { classicProblem, readClassics } from '../tests/planner/classics.ts';
+import { coreSeconds } from './bench/core-seconds.ts';
+import { growthExponent } from './bench/growth-exponent.ts';
+import { type Growth, grownShop, measureGrowth } from './bench/planner-growth.ts';
+import { runRandomProblems } from './bench/planner-random.ts';
 
 type Row = {
   what: string;
@@ -24,7 +29,9 @@ type Reference = { set: string; args: Record<string, number>; seed: number; load
 const { values: flags } = parseArgs({
   options: {
     seconds: { type: 'string', default: '1' },
-    only: { type: 'string', default: 'classics,no-wait,shops,growth,landings' },
+    only: { type: 'string', default: 'classics,no-wait,shops,growth,landings,random' },
+    'growth-seconds': { type: 'string', default: '60' },
+    problems: { type: 'string', default: '2000' },
     data: { type: 'string', default: new URL('../tests/planner/data', import.meta.url).pathname },
     sets: { type: 'string', default: 'S1,S2,M1,L1,L2,X1' },
     keep: { type: 'boolean', default: false },
@@ -33,8 +40,6 @@ const { values: flags } = parseArgs({
 const budgets = flags.seconds.split(',').map(Number);
 const wanted = new Set(flags.only.split(','));
 const rows: Row[] = [];
-
-const coreSeconds = (): number => process.cpuUsage().user / 1e6;
 
 type Run = { made: Plan; seconds: number };
 
@@ -120,32 +125,42 @@ function shops(set: string, seconds: number): void {
   });
 }
 
-/** Time and memory of the first whole plan, as the shop grows with the number of jobs. */
+/** First plan, time to near the end's cost, and memory, as the shop grows with the number of jobs. */
 function growth(): void {
-  for (const jobs of [10, 40, 160, 640]) {
-    const problem = makeShop({
-      jobs,
-      days: Math.max(1, jobs / 20),
-      booths: Math.ceil(jobs / 40),
-      prep: Math.ceil(jobs / 10) + 2,
-      lamps: 6,
-      people: Math.ceil(jobs / 10) + 4,
-      seed: 3,
-      loads: false,
-    });
-    const begun = coreSeconds();
-    const made = plan(problem, { seed: 1, evaluations: 1 });
-    const seconds = Number((coreSeconds() - begun).toFixed(3));
-    const megabytes = Math.round(process.memoryUsage().rss / 2 ** 20);
+  const seconds = Number(flags['growth-seconds']);
+  const all = [10, 40, 160, 640].map((jobs) => measureGrowth(makeShop(grownShop(jobs)), seconds));
+  for (const g of all)
     add({
-      what: `first plan, ${jobs} jobs`,
+      what: `growth, ${g.jobs} jobs`,
       seconds,
-      value: `${megabytes} MB`,
-      target: '< 500 MB',
+      value: `${g.first.toFixed(3)} s`,
+      target: g.jobs === 640 ? '< 2 s' : '',
       evaluationsPerSecond: 0,
-      detail: `${made.assignments.length} stages, ${made.unplaced.length} jobs unplaced`,
+      detail: `first plan; within 5 % after ${g.close.toFixed(2)} s; ${g.megabytes} MB; ${g.stages} stages, ${g.unplaced} jobs unplaced`,
     });
-  }
+  const exponent = (of: (g: Growth) => number): string =>
+    growthExponent(all.map((g) => ({ size: g.jobs, cost: of(g) }))).toFixed(2);
+  add({
+    what: 'growth, exponents',
+    seconds,
+    value: exponent((g) => g.first),
+    target: '< 1.3',
+    evaluationsPerSecond: 0,
+    detail: `first plan; within 5 % ${exponent((g) => g.close)}; memory ${exponent((g) => g.megabytes)}`,
+  });
+}
+
+async function randomProblems(): Promise<void> {
+  const { problems, faults, unplaced, worstOverrun, judges } = await runRandomProblems(Number(flags.problems));
+  add({
+    what: `${problems} random problems`,
+    seconds: 0.04,
+    value: `${faults.length} faults`,
+    target: '0',
+    evaluationsPerSecond: 0,
+    detail: `${judges} checkers; worst overrun ${worstOverrun.toFixed(0)} ms; ${unplaced} jobs unplaced, each with its reason`,
+  });
+  for (const fault of faults.slice(0, 20)) console.log(fault);
 }
 
 function landingTimes(): void {
@@ -177,12 +192,13 @@ for (const seconds of budgets) {
 }
 if (wanted.has('growth')) growth();
 if (wanted.has('landings')) landingTimes();
+if (wanted.has('random')) await randomProblems();
 /** Adds the rows to what the day has kept already; the same measure again replaces the older one. */
 function keep(): void {
   const date = new Date().toISOString().slice(0, 10);
   const file = new URL(`../docs/bench/planner-${date}.json`, import.meta.url).pathname;
   const kept = existsSync(file) ? (JSON.parse(readFileSync(file, 'utf8')) as { rows: Row[] }).rows : [];
-  const timed = (row: Row): string => `${row.what} ${row.what.startsWith('first plan') ? '' : row.seconds}`;
+  const timed = (row: Row): string => `${row.what} ${row.seconds}`;
   const mine = new Set(rows.map(timed));
   const all = [...kept.filter((row) => !mine.has(timed(row))), ...rows];
   writeFileSync(file, `${JSON.stringify({ date, node: process.version, load: loadavg(), rows: all }, null, 1)}\n`);

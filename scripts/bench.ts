@@ -10,8 +10,9 @@ import signIns from '../seeds/demo-sign-ins.json' with { type: 'json' };
 import { demoShopId, seedDemo } from '../seeds/index.ts';
 import { throwawayCluster } from '../tests/helpers/postgres.ts';
 import { measureDayView } from './bench/day-view.ts';
-import { growthExponent, timeFirstPlan } from './bench/first-plans.ts';
+import { timeFirstPlan } from './bench/first-plans.ts';
 import { growProblem } from './bench/grow-problem.ts';
+import { growthExponent } from './bench/growth-exponent.ts';
 
 const say = (line: string): boolean => process.stdout.write(`${line}\n`);
 const middle = (list: readonly number[]): number => [...list].sort((a, b) => a - b)[Math.floor(list.length / 2)]!;
@@ -38,7 +39,9 @@ function sayFirstPlans(demo: Problem): void {
       `  ${f.name.padEnd(34)}${String(f.jobs).padStart(6)}${String(f.stages).padStart(8)}` +
         `${f.milliseconds.toFixed(1).padStart(10)}${f.cost.toFixed(0).padStart(12)}${String(f.unplaced).padStart(10)}`,
     );
-  say(`  growth with jobs: exponent ${growthExponent(grown).toFixed(2)}`);
+  say(
+    `  growth with jobs: exponent ${growthExponent(grown.map((f) => ({ size: f.jobs, cost: f.milliseconds }))).toFixed(2)}`,
+  );
 }
 
 async function sayDayView(url: string): Promise<void> {

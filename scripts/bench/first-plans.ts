@@ -21,12 +21,3 @@ export function timeFirstPlan(name: string, problem: Problem): FirstPlan {
   const stages = problem.jobs.reduce((sum, job) => sum + job.stages.length, 0);
   return { name, jobs: problem.jobs.length, stages, ...runs[2]! };
 }
-
-/** Exponent of the growth of time with jobs, by least squares on logarithms: 1 is linear. */
-export function growthExponent(figures: readonly FirstPlan[]): number {
-  const points = figures.map(({ jobs, milliseconds }) => [Math.log(jobs), Math.log(milliseconds)] as const);
-  const mean = (k: 0 | 1): number => points.reduce((sum, point) => sum + point[k], 0) / points.length;
-  const [x, y] = [mean(0), mean(1)];
-  const above = points.reduce((sum, point) => sum + (point[0] - x) * (point[1] - y), 0);
-  return above / points.reduce((sum, point) => sum + (point[0] - x) ** 2, 0);
-}
