@@ -10,11 +10,16 @@ import * as plans from './202612011010_plans.ts';
 import * as queueAndLetters from './202612011020_queue_and_letters.ts';
 import * as changes from './202612011030_changes.ts';
 import * as changeIds from './202612011040_change_ids.ts';
+import * as attachments from './202612011500_attachments.ts';
+import * as coatingOfStage from './202612011502_coating_of_stage.ts';
 import * as airReadings from './202612011520_air_readings.ts';
 import * as airSettings from './202612011522_air_settings.ts';
 import * as apiKeys from './202612011524_api_keys.ts';
 import * as airOfPlans from './202612011526_air_of_plans.ts';
 import * as bakeTraces from './202612011528_bake_traces.ts';
+import * as setUpVersions from './202612011540_set_up_versions.ts';
+import * as filters from './202612011542_filters.ts';
+import * as peopleChange from './202612011550_people_change.ts';
 
 type Step = { up(knex: Knex): Promise<void>; down(knex: Knex): Promise<void> };
 
@@ -31,9 +36,14 @@ export const migrations: Record<string, Step> = {
   '202612011020_queue_and_letters': queueAndLetters,
   '202612011030_changes': changes,
   '202612011040_change_ids': changeIds,
+  '202612011500_attachments': attachments,
+  '202612011502_coating_of_stage': coatingOfStage,
   '202612011520_air_readings': airReadings,
   '202612011522_air_settings': airSettings,
   '202612011524_api_keys': apiKeys,
   '202612011526_air_of_plans': airOfPlans,
   '202612011528_bake_traces': bakeTraces,
+  '202612011540_set_up_versions': setUpVersions,
+  '202612011542_filters': filters,
+  '202612011550_people_change': peopleChange,
 };

@@ -52,6 +52,12 @@ export async function putInJob(
     trx,
     shopId,
     id,
-    stages.map(({ key, kind, title, ways }) => ({ id: demoId('stage', `${id}/${key}`), kind, title, ways })),
+    stages.map(({ key, kind, title, coating, ways }) => ({
+      id: demoId('stage', `${id}/${key}`),
+      kind,
+      title,
+      coatingId: coating === null ? null : demoId('coating', coating),
+      ways,
+    })),
   );
 }

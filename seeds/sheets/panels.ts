@@ -1,7 +1,7 @@
-import type { SheetSeed } from './types.ts';
+import type { Gap, SheetSeed } from './types.ts';
 import { clearCure, handwork, polish, primerCure, refit, spraying, withOption } from './ways.ts';
 
-const wet = { min: 15, max: 240, settle: 15 };
+const wet: Gap = { min: 15, max: 240, settle: 15, source: 'next' };
 
 export const newPanel: SheetSeed = {
   key: 'new-panel',
@@ -27,7 +27,7 @@ export const newPanel: SheetSeed = {
       minutes: 6,
       flash: 10,
       family: 'colour',
-      gap: { min: 15, max: 4320, settle: 15 },
+      gap: { min: 15, max: 4320, settle: 15, source: 'recoat' },
     }),
     spraying('clear', 'Clear', {
       coating: 'clear',

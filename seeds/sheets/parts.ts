@@ -1,4 +1,4 @@
-import type { SheetSeed } from './types.ts';
+import type { Gap, SheetSeed } from './types.ts';
 import {
   afterPrimer,
   airDry,
@@ -14,7 +14,7 @@ import {
   withOption,
 } from './ways.ts';
 
-const wet = { min: 15, max: 240, settle: 15 };
+const wet: Gap = { min: 15, max: 240, settle: 15, source: 'next' };
 
 export const bumper: SheetSeed = {
   key: 'bumper',
@@ -44,13 +44,13 @@ export const bumper: SheetSeed = {
       minutes: 6,
       flash: 10,
       family: 'primer',
-      gap: { min: 10, max: 60, settle: 10 },
+      gap: { min: 10, max: 60, settle: 10, source: 'recoat' },
     }),
     primerCure(),
     withOption('second-bake', handwork('open-up', 'prep', 'Open up with P400', { minutes: 20 })),
     withOption(
       'second-bake',
-      cure('second-bake', 'Bake primer again', [
+      cure('second-bake', 'Bake primer again', 'primer', [
         lampCure({ minutes: 20, celsius: 60, gap: { min: 0, max: null, settle: 0 } }),
         airDry({ minutes: 120, gap: { min: 0, max: null, settle: 0 } }),
       ]),
@@ -132,7 +132,7 @@ export const electricDoor: SheetSeed = {
       family: 'primer',
       places: ['prep', 'booth'],
     }),
-    cure('primer-cure', 'Primer cure, low heat', [
+    cure('primer-cure', 'Primer cure, low heat', 'primer', [
       lampCure({ minutes: 30, celsius: 45, gap: afterPrimer }),
       airDry({ minutes: 180, gap: afterPrimer }),
     ]),
@@ -154,9 +154,9 @@ export const electricDoor: SheetSeed = {
       minutes: 7,
       flash: 10,
       family: 'colour',
-      gap: { min: 15, max: 180, settle: 15 },
+      gap: { min: 15, max: 180, settle: 15, source: 'next' },
     }),
-    cure('clear-cure', 'Bake clear, low heat', [
+    cure('clear-cure', 'Bake clear, low heat', 'low-bake-clear', [
       boothBake({ minutes: 40, celsius: 45 }),
       airDry({ minutes: 480, gap: { min: 45, max: 720, settle: 45 } }),
     ]),

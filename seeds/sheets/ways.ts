@@ -1,14 +1,25 @@
 import type { Way } from '#contracts/sheets.ts';
 import type { Gap, Phase, StageSeed } from './types.ts';
 
-const hands = (kind: Phase['kind'], minutes: number): Phase => ({ kind, minutes, attendance: 'hands' });
-const onsite = (kind: Phase['kind'], minutes: number, lamp = false): Phase => ({
+type From = Pick<Phase, 'source'>;
+const hands = (kind: Phase['kind'], minutes: number, from: From = {}): Phase => ({
+  kind,
+  minutes,
+  attendance: 'hands',
+  ...from,
+});
+const onsite = (kind: Phase['kind'], minutes: number, more: Pick<Phase, 'source' | 'lamp'> = {}): Phase => ({
   kind,
   minutes,
   attendance: 'onsite',
-  ...(lamp ? { lamp } : {}),
+  ...more,
 });
-const alone = (kind: Phase['kind'], minutes: number): Phase => ({ kind, minutes, attendance: 'none' });
+const alone = (kind: Phase['kind'], minutes: number, from: From = {}): Phase => ({
+  kind,
+  minutes,
+  attendance: 'none',
+  ...from,
+});
 
 /** No wait before it and no limit after. */
 export const free: Gap = { min: 0, max: null, settle: 0 };
@@ -58,8 +69,8 @@ export const handwork = (key: string, kind: string, title: string, work: Work): 
 /** Coats with a flash between; the painter stays by it. */
 const coats = (count: number, spray: number, flash: number): Phase[] =>
   Array.from({ length: count }, (_, i) => [
-    hands('spray', spray),
-    ...(i < count - 1 ? [hands('flash', flash)] : []),
+    hands('spray', spray, { source: 'coat' }),
+    ...(i < count - 1 ? [hands('flash', flash, { source: 'flash-between' })] : []),
   ]).flat();
 
 type Spraying = {
@@ -108,9 +119,9 @@ export const boothBake = (given: { minutes: number; celsius: number; load?: stri
   stay: true,
   family: 'colour',
   load: given.load ?? null,
-  gap: { min: 10, max: 60, settle: 10 },
+  gap: { min: 10, max: 60, settle: 10, source: 'heat' },
   bakeCelsius: given.celsius,
-  phases: [alone('purge', 5), onsite('bake', given.minutes), alone('cool', 15)],
+  phases: [alone('purge', 5), onsite('bake', given.minutes, { source: 'bake' }), alone('cool', 15)],
 });
 
 /** Under one or two lamps at a prep station. */
@@ -122,7 +133,7 @@ export const lampCure = (given: { minutes: number; celsius: number; lamps?: numb
   lampCount: given.lamps ?? 1,
   gap: given.gap,
   bakeCelsius: given.celsius,
-  phases: [onsite('bake', given.minutes, true), alone('cool', 15)],
+  phases: [onsite('bake', given.minutes, { lamp: true, source: 'lamp-short' }), alone('cool', 15)],
 });
 
 export const airDry = (given: { minutes: number; gap: Gap }): Way => ({
@@ -131,25 +142,26 @@ export const airDry = (given: { minutes: number; gap: Gap }): Way => ({
   label: 'Air dry',
   placeKinds: ['rack', 'prep'],
   gap: given.gap,
-  phases: [alone('flash', given.minutes)],
+  phases: [alone('flash', given.minutes, { source: 'air' })],
 });
 
-export const cure = (key: string, title: string, ways: Way[]): StageSeed => stage({ key, kind: 'cure', title, ways });
+export const cure = (key: string, title: string, coating: string, ways: Way[]): StageSeed =>
+  stage({ key, kind: 'cure', title, coating, ways });
 
 /** Primer: flashed off before it is moved under the lamp or left to dry. */
-export const afterPrimer: Gap = { min: 15, max: 720, settle: 15 };
+export const afterPrimer: Gap = { min: 15, max: 720, settle: 15, source: 'heat' };
 /** Clear: dust-free before it leaves the booth. */
 export const afterClear: Gap = { min: 35, max: 720, settle: 35 };
 
 export const primerCure = (lamps = 1): StageSeed =>
-  cure('primer-cure', 'Primer bake', [
+  cure('primer-cure', 'Primer bake', 'primer', [
     lampCure({ minutes: 25, celsius: 60, lamps, gap: afterPrimer }),
     airDry({ minutes: 180, gap: afterPrimer }),
   ]);
 
 /** `spot`: small enough for a lamp. */
 export const clearCure = (given: { spot?: boolean; load?: string } = {}): StageSeed =>
-  cure('clear-cure', 'Bake clear', [
+  cure('clear-cure', 'Bake clear', 'clear', [
     boothBake({ minutes: 40, celsius: 60, ...(given.load === undefined ? {} : { load: given.load }) }),
     ...(given.spot ? [lampCure({ minutes: 20, celsius: 60, gap: afterClear })] : []),
     airDry({ minutes: 720, gap: afterClear }),

@@ -68,7 +68,7 @@ export async function insertStages(
   trx: Trx,
   shopId: string,
   jobId: string,
-  stages: { id: string; kind: string; title: string; ways: Way[] }[],
+  stages: { id: string; kind: string; title: string; coatingId?: string | null; ways: Way[] }[],
 ): Promise<void> {
   await trx('stage').insert(
     stages.map((stage, position) => ({
@@ -78,6 +78,7 @@ export async function insertStages(
       id: stage.id,
       kind: stage.kind,
       title: stage.title,
+      coating_id: stage.coatingId ?? null,
       ways: JSON.stringify(stage.ways),
     })),
   );

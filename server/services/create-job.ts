@@ -72,7 +72,7 @@ function stagesFor(sheet: Sheet | undefined, input: NewJobInput) {
     ...promiseFault(input.releaseAt, input.promiseAt),
   ];
   if (fields.length > 0) throw new Refusal('bad-request', { fields });
-  return stages.map(({ kind, title, ways }) => ({ id: uuid(), kind, title, ways }));
+  return stages.map(({ kind, title, coatingId, ways }) => ({ id: uuid(), kind, title, coatingId, ways }));
 }
 
 export const promiseFault = (releaseAt: string, promiseAt: string | null) =>
