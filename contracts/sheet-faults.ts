@@ -72,7 +72,8 @@ export const sheetFault = z.strictObject({
   names: z.array(z.string()),
   /** Minutes and C, as the code has them. */
   figures: z.array(z.number()),
-  /** Labels of the options with which it comes; empty: also without any but those that are on by themselves. */
+  /** Labels of the options it takes to come, and of those that must be left out; both empty: it is there as the sheet stands. */
   withOptions: z.array(z.string()),
+  withoutOptions: z.array(z.string()),
 });
 export type SheetFault = z.output<typeof sheetFault>;

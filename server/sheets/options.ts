@@ -1,4 +1,4 @@
-import type { SheetBody } from '#contracts/sheets.ts';
+import type { SheetBody, SheetOption } from '#contracts/sheets.ts';
 
 /** What may be there or not: a stage or a way. */
 type Conditional = { option?: string | null | undefined; unlessOption?: string | undefined };
@@ -14,8 +14,8 @@ export const timesChosen = (chosen: Chosen, key: string): number => chosen.filte
 export const optionsOn = (body: Pick<SheetBody, 'options'>): string[] =>
   body.options.filter(({ on }) => on).map(({ key }) => key);
 
-/** Above so many options only the usual choice and each single change of it are looked at, not every combination. */
-const ALL_COMBINED = 6;
+/** Above so many combinations only the usual choice and each single change of it are looked at. */
+const ALL_COMBINED = 128;
 
 /**
  * The choices of options by which a sheet is judged, the usual one first, then those that differ in least. An option that can
@@ -27,11 +27,13 @@ export function choicesOf(body: Pick<SheetBody, 'options'>): string[][] {
     ...choice.filter((one) => one !== key),
     ...Array.from({ length: times }, () => key),
   ];
+  const timesOf = ({ on, most = 1 }: SheetOption): number[] => [on ? 0 : 1, ...(most > 1 ? [most] : [])];
+  const all = body.options.reduce((product, option) => product * (timesOf(option).length + 1), 1) <= ALL_COMBINED;
   let choices = [usual];
-  for (const { key, on, most = 1 } of body.options) {
-    const others = on ? [0, ...(most > 1 ? [most] : [])] : [1, ...(most > 1 ? [most] : [])];
-    const from = body.options.length <= ALL_COMBINED ? choices : [usual];
-    choices = [...choices, ...others.flatMap((times) => from.map((choice) => changed(choice, key, times)))];
+  for (const option of body.options) {
+    const from = all ? choices : [usual];
+    const more = timesOf(option).flatMap((times) => from.map((choice) => changed(choice, option.key, times)));
+    choices = [...choices, ...more];
   }
   const distance = (choice: readonly string[]): number =>
     body.options.filter(({ key, on }) => choice.includes(key) !== on).length;

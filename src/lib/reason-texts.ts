@@ -1,11 +1,14 @@
 import type { Reason } from '#contracts/reasons.ts';
 import type { ViolationCode } from '#planner/types.ts';
+import { sheetFaultCode } from '#contracts/sheet-faults.ts';
 import type { Formats } from './formats.ts';
+import { sheetFaultText } from './sheet-fault-texts.ts';
 
 /** Codes that services add to the planner's. */
 type ServiceCode =
   | 'heat-limit'
   | 'heat-minutes'
+  | 'heat-unknown'
   | 'booth-heat'
   | 'purge-unknown'
   | 'no-purge'
@@ -21,7 +24,8 @@ type ServiceCode =
   | 'not-booked'
   | 'previous-not-done'
   | 'not-started'
-  | 'last-owner';
+  | 'last-owner'
+  | 'still-booked';
 
 type Say = (
   r: { names: Get; at: Get; minutes: (i: number) => number; count: number; rule: number | null },
@@ -106,6 +110,8 @@ const texts: Record<ViolationCode | ServiceCode, Say> = {
     `${names(0)} bakes at ${f.temperature(minutes(0))}, above the heat limit of ${f.temperature(minutes(1), 'limit')} of this vehicle or part.`,
   'heat-minutes': ({ names, minutes }, f) =>
     `${names(0)} needs ${f.duration(minutes(0))} of heat; this vehicle may have ${f.duration(minutes(1))} more over all its bakes.`,
+  'heat-unknown': ({ names }) =>
+    `${names(0)} heats, and its temperature is not known: no limit of part or vehicle could be kept.`,
   'booth-heat': ({ names, minutes }, f) => `${names(0)}: no booth may bake at ${f.temperature(minutes(0))}.`,
   'purge-unknown': ({ names }) =>
     `${names(0)}: no heat without a known purge. Volume and air flow of the booth are missing.`,
@@ -123,6 +129,7 @@ const texts: Record<ViolationCode | ServiceCode, Say> = {
   'previous-not-done': ({ names, count }) =>
     count > 0 ? `${names(0)} comes before it and is not done.` : 'The stage before it is not done.',
   'not-started': () => 'It has not been started.',
+  'still-booked': ({ names, at }) => `${names(0)} has posted work: ${names(1)}, ${at(0)}.`,
   'last-owner': ({ names }) => `${names(0)} is the only owner. Make somebody else an owner first.`,
 };
 
@@ -148,6 +155,12 @@ export const ruleText = (rule: number | null): string =>
 
 /** One reason as a sentence in the reader's clock and units. An unknown code is shown as it came, never left out. */
 export function reasonText(reason: Reason, formats: Formats): string {
+  const fault = sheetFaultCode.safeParse(/^sheet:(.+)$/.exec(reason.code)?.[1]);
+  if (fault.success) {
+    // A process sheet's fault: the first name says where.
+    const [where, ...names] = reason.names;
+    return `${where ? `${where}: ` : ''}${sheetFaultText({ code: fault.data, names, figures: reason.minutes }, formats)}`;
+  }
   const say = (texts as Partial<Record<string, Say>>)[reason.code];
   const named = reason.names.filter(Boolean).join(', ');
   if (!say)

@@ -44,7 +44,9 @@ export function heatLimitOf(job: OpenJob): HeatLimit {
 
 /** The way's temperature against the limit; how long it lasts is a matter of all stages together: `heat-budget.ts`. */
 export function tooHot(way: Way, limit: HeatLimit): WayRefusal | null {
-  if (way.bakeCelsius === null || heatMinutes(way) === 0) return null;
+  // No limit can be held against heat of an unknown temperature, so it is never offered.
+  if (way.bakeCelsius === null) return way.phases.some(heated) ? { code: 'heat-unknown', figures: [] } : null;
+  if (heatMinutes(way) === 0) return null;
   const bake = { celsius: way.bakeCelsius, minutes: heatMinutes(way), earlierHeatMinutes: 0 };
   const [refusal] = bakeRefusals({ ...limit, minutes: null }, bake);
   if (refusal?.code !== 'above-heat-limit') return null;

@@ -4,6 +4,7 @@ import { limitForDisplay } from '#chemistry/units/temperature.ts';
 export type WayRefusal =
   | { code: 'heat-limit'; figures: [wanted: number, limit: number] }
   | { code: 'heat-minutes'; figures: [wanted: number, left: number] }
+  | { code: 'heat-unknown'; figures: [] }
   | { code: 'booth-heat'; figures: [wanted: number] }
   | { code: 'purge-unknown'; figures: [] }
   | { code: 'no-purge'; figures: [] }
@@ -24,6 +25,8 @@ export function sayRefusal(refusal: WayRefusal): string {
       return `bakes at ${degrees(refusal.figures[0])}, above the heat limit of ${degrees(refusal.figures[1])} of this vehicle or part`;
     case 'heat-minutes':
       return `needs ${refusal.figures[0]} min of heat, and the vehicle has ${refusal.figures[1]} min left in all its bakes`;
+    case 'heat-unknown':
+      return 'heats, and its temperature is not known, so that no limit of part or vehicle can be kept';
     case 'booth-heat':
       return `no booth may bake at ${degrees(refusal.figures[0])}`;
     case 'purge-unknown':

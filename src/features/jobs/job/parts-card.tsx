@@ -3,7 +3,7 @@ import type { Job } from '#contracts/jobs.ts';
 import { useFormats } from '#src/lib/session.ts';
 import { HeatCaution } from '../heat-caution.tsx';
 import { assumedLimit, heatLimitOf } from '../model/assumed-limit.ts';
-import { substrateWords } from '../substrate-words.ts';
+import { substrateWords } from '#src/lib/substrate-words.ts';
 import { SideCard } from './side-card.tsx';
 
 /** Parts, and what heat the vehicle stands where that matters. */

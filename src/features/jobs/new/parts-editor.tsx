@@ -6,7 +6,7 @@ import { IconButton } from '#src/ui/icon-button.tsx';
 import { Select } from '#src/ui/select.tsx';
 import { TextField } from '#src/ui/text-field.tsx';
 import type { JobForm } from '../model/job-form.ts';
-import { substrateWords } from '../substrate-words.ts';
+import { substrateWords } from '#src/lib/substrate-words.ts';
 
 /** The parts, as the sheet proposes them, to be changed. Units are the room a part takes in a booth or on a rack. */
 export function PartsEditor() {
