@@ -12,6 +12,7 @@ import * as changes from './202612011030_changes.ts';
 import * as changeIds from './202612011040_change_ids.ts';
 import * as attachments from './202612011500_attachments.ts';
 import * as coatingOfStage from './202612011502_coating_of_stage.ts';
+import * as sheetNotes from './202612011510_sheet_notes.ts';
 import * as airReadings from './202612011520_air_readings.ts';
 import * as airSettings from './202612011522_air_settings.ts';
 import * as apiKeys from './202612011524_api_keys.ts';
@@ -38,6 +39,7 @@ export const migrations: Record<string, Step> = {
   '202612011040_change_ids': changeIds,
   '202612011500_attachments': attachments,
   '202612011502_coating_of_stage': coatingOfStage,
+  '202612011510_sheet_notes': sheetNotes,
   '202612011520_air_readings': airReadings,
   '202612011522_air_settings': airSettings,
   '202612011524_api_keys': apiKeys,
