@@ -2,6 +2,8 @@ import express, { Router, type Express } from 'express';
 import { openPlainPool } from './db/plain-pool.ts';
 import type { Deps } from './deps.ts';
 import { notFound } from './errors.ts';
+import { airRoutes } from './http/air.ts';
+import { apiKeyRoutes } from './http/api-keys.ts';
 import { benchRoutes } from './http/bench.ts';
 import { refuseOtherSites } from './http/csrf.ts';
 import { dayRoutes } from './http/day.ts';
@@ -15,7 +17,9 @@ import { liveRoutes } from './http/live.ts';
 import { mailboxRoutes } from './http/mailbox.ts';
 import { memberRoutes } from './http/members.ts';
 import { pages } from './http/pages.ts';
+import { peopleRoutes } from './http/people.ts';
 import { makePassport, readAccount } from './http/passport.ts';
+import { readingsDoor } from './http/readings-door.ts';
 import { requestLog } from './http/request-log.ts';
 import { Routes, type Route } from './http/route.ts';
 import { neverStore, securityHeaders } from './http/security.ts';
@@ -34,6 +38,9 @@ const nouns: ((routes: Routes, deps: Deps) => void)[] = [
   benchRoutes,
   useRoutes,
   mailboxRoutes,
+  airRoutes,
+  apiKeyRoutes,
+  peopleRoutes,
 ];
 
 export type App = {
@@ -60,6 +67,7 @@ export function createApp(deps: Deps): App {
 
   router.use('/api', neverStore);
   healthRoutes(routes, deps, () => hub.isListening());
+  readingsDoor(routes, router, deps, limits);
   router.use('/api', refuseOtherSites, express.json({ limit: bodyLimit, inflate: false }));
   router.use('/api', sessionStore(deps, pool), sessionTimeouts(deps), readAccount(passport));
   sessionRoutes(routes, deps, passport, limits);

@@ -4,7 +4,7 @@ const day = 86_400_000;
 
 /**
  * Forgets what is of no more use: sessions that ran out, links a month after their end, tasks done two weeks ago or given up three
- * months ago, rate limits that ran out. Makes the history's partitions of the months to come. Keys of requests are
+ * months ago, rate limits that ran out. Makes the partitions of history and air readings of the months to come. Keys of requests are
  * forgotten by their shops as they go (services/once.ts): only a shop may see its rows.
  */
 export async function prune(db: Knex, now: Date): Promise<Record<string, number>> {
@@ -14,6 +14,6 @@ export async function prune(db: Knex, now: Date): Promise<Record<string, number>
   const done = await db('task').where('done_at', '<', ago(14)).delete();
   const dead = await db('task').where('dead_at', '<', ago(90)).delete();
   const limits = await db('rate_limit').where('expire', '<', now.getTime()).delete();
-  await db.raw('select make_change_partitions(3)');
+  await db.raw('select make_change_partitions(3), make_air_partitions(3)');
   return { sessions, links, tasks: done + dead, limits };
 }

@@ -44,19 +44,21 @@ export class Routes {
 
   /**
    * A route in a shop: who is not a member is told the same as for a shop that does not exist. A write that comes with an
-   * Idempotency-Key is done once, however often it is sent.
+   * Idempotency-Key is done once, however often it is sent. `keepReply: false`: the answer holds a secret that must not be
+   * kept for a next time, so the key of the request is passed over; its body names an id of its own.
    */
   shop<E extends Endpoint>(
     endpoint: E,
     access: (actor: Actor) => boolean,
     handle: (call: Call<E> & { actor: Actor }) => Reply<E>,
+    { keepReply = true }: { keepReply?: boolean } = {},
   ): void {
     this.#add(endpoint, access, async (req, res) => {
       const actor = await actorOf(this.#deps, req);
       if (!access(actor)) throw new Refusal('forbidden');
       const call = parse(endpoint, req, res);
       const answer = async () => endpoint.reply.parse(await handle({ ...call, actor }));
-      const key = endpoint.method === 'GET' ? undefined : keyOf(req);
+      const key = endpoint.method === 'GET' || !keepReply ? undefined : keyOf(req);
       return key === undefined ? answer() : once(this.#deps, actor, keyed(key, endpoint, call), answer);
     });
   }

@@ -38,6 +38,9 @@ const all = (cell: Cell): Row => Object.fromEntries(who.map((one) => [one, cell]
 const anybody = all('may');
 const signedIn: Row = { ...anybody, anonymous: 401, disabledAccount: 401 };
 
+/** The door of loggers: a key of its own opens it, and no session is worth anything there. */
+const keyHolders = all(401);
+
 export const rights: Readonly<Record<string, Row>> = {
   'read-health': anybody,
   'read-ready': anybody,
@@ -81,11 +84,36 @@ export const rights: Readonly<Record<string, Row>> = {
   'start-stage': stageWorkers,
   'finish-stage': stageWorkers,
   'read-use': planners,
+
+  'read-air': everyone,
+  'list-readings': everyone,
+  'export-readings': everyone,
+  'add-reading': stageWorkers,
+  'import-readings': planners,
+  'change-air-settings': planners,
+  'change-zone-air': planners,
+  'send-readings': keyHolders,
+  'list-api-keys': owners,
+  'create-api-key': owners,
+  'revoke-api-key': owners,
+
+  'list-people': planners,
+  'create-person': owners,
+  'change-person': owners,
+  'order-people': owners,
+  'retire-person': owners,
+  'bring-back-person': owners,
+  'add-absence': planners,
+  'remove-absence': planners,
+  'export-people': planners,
+  'import-people': owners,
+  'export-absences': planners,
+  'import-absences': planners,
 };
 
 /** Ids of rows that the test makes in another shop; the same names stand in paths. */
 export type ForeignIds = Record<
-  'jobId' | 'stageId' | 'memberId' | 'runId' | 'sheetId' | 'placeId' | 'personId',
+  'jobId' | 'stageId' | 'memberId' | 'runId' | 'sheetId' | 'placeId' | 'personId' | 'zoneId' | 'keyId',
   string
 >;
 
@@ -121,6 +149,24 @@ export const withForeignIds: Readonly<Record<string, (ids: ForeignIds) => { body
   'read-plan-run': () => ({}),
   'stop-plan-run': () => ({ body: {} }),
   'read-bench': ({ personId }) => ({ query: `?personId=${personId}` }),
+  'change-person': () => ({ body: { version: 1, name: 'Mine now' } }),
+  'order-people': ({ personId }) => ({ body: { personIds: [personId] } }),
+  'retire-person': () => ({ body: { version: 1, lastDay: null } }),
+  'bring-back-person': () => ({ body: { version: 1 } }),
+  'add-absence': () => ({ body: { from: '2026-03-11T13:00:00Z', to: null, reason: '' } }),
+  'remove-absence': () => ({}),
   'start-stage': () => ({ body: { version: 1 } }),
   'finish-stage': () => ({ body: { version: 1 } }),
+  'list-readings': () => ({ query: '?from=2026-03-10T00:00:00Z&to=2026-03-11T00:00:00Z' }),
+  'add-reading': () => ({
+    body: {
+      id: '0190a0a0-0000-7000-8000-000000000002',
+      at: '2026-03-10T12:00:00Z',
+      celsius: 20,
+      humidity: 50,
+      surfaceCelsius: null,
+    },
+  }),
+  'change-zone-air': () => ({ body: { version: 0, source: 'latest', schedule: [] } }),
+  'revoke-api-key': () => ({ body: {} }),
 };

@@ -47,6 +47,11 @@ afterAll(async () => {
 async function rowsOf(shop: { id: string; booth: string }, memberId: string): Promise<ForeignIds> {
   const job = await aJob(app.deps.db, shop);
   const runId = uuid();
+  const [zoneId, keyId] = [uuid(), uuid()];
+  await app.owner('zone').insert({ shop_id: shop.id, id: zoneId, name: 'Zone' });
+  await app
+    .owner('api_key')
+    .insert({ shop_id: shop.id, id: keyId, label: 'Logger', hint: 'abcdef', token_hash: Buffer.from('hash') });
   await app.owner('plan_run').insert({ shop_id: shop.id, id: runId, scope: 'all', seed: 1, seconds: 5 });
   return {
     jobId: job.id,
@@ -56,6 +61,8 @@ async function rowsOf(shop: { id: string; booth: string }, memberId: string): Pr
     sheetId: await aSheet(app.deps.db, shop),
     placeId: shop.booth,
     personId: (await makePerson(app.owner, shop)).id,
+    zoneId,
+    keyId,
   };
 }
 
