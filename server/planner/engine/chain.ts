@@ -1,7 +1,8 @@
 import { NEVER } from './calendar.ts';
 import { bestFit, enterBest, type Placer, takeOut } from './placer.ts';
-import type { Block, Variant } from './shop.ts';
-import { firstEnding } from './track.ts';
+import { ride } from './ride.ts';
+import { settles } from './settles.ts';
+import { ALONE, type Block, RIDES, type Variant } from './shop.ts';
 
 /** Most placings that one block may take before it counts as not fitting. */
 const MOST_STEPS = 3000;
@@ -12,7 +13,7 @@ export function floorOf(p: Placer, block: Block, gapMax: number): number {
   const first = shop.jobs[block.job]!.first;
   if (gapMax >= NEVER) return block.first;
   let s = block.first;
-  while (s > first && shop.fixedAt[s - 1]! < 0 && state.at.way[s - 1]) {
+  while (s > first && shop.fixedAt[s - 1]! < 0 && state.at.way[s - 1]?.share === ALONE) {
     s--;
     if (p.wayOf[s]!.gapMax >= NEVER) break;
   }
@@ -26,7 +27,12 @@ export function floorOf(p: Placer, block: Block, gapMax: number): number {
  * on failure the block's stages are out, and earlier ones may be out or moved.
  */
 export function placeChain(p: Placer, block: Block, variant: Variant, limit: number): number {
-  const { state } = p;
+  const floor = prepareChain(p, block, variant);
+  return runChain(p, block, variant, limit, floor);
+}
+
+/** Sets ways and places of a block's stages and forgets older bounds. Returns the first stage that may move later. */
+export function prepareChain(p: Placer, block: Block, variant: Variant): number {
   for (let s = block.first; s <= block.last; s++) {
     p.wayOf[s] = variant.ways[s - block.first]!;
     p.pinOf[s] = variant.pins[s - block.first]!;
@@ -34,6 +40,12 @@ export function placeChain(p: Placer, block: Block, variant: Variant, limit: num
   const floor = floorOf(p, block, variant.ways[0]!.gapMax);
   p.notBefore.fill(0, floor, block.last + 1);
   p.endAtLeast.fill(0, floor, block.last + 1);
+  return floor;
+}
+
+/** Places a prepared block, see `placeChain`. */
+export function runChain(p: Placer, block: Block, variant: Variant, limit: number, floor: number): number {
+  const { state } = p;
   let s = block.first;
   for (let steps = 0; s <= block.last; steps++) {
     if (steps > MOST_STEPS) return s;
@@ -63,7 +75,7 @@ export function setAsk(p: Placer, s: number): boolean {
     ask.place = at.place[s - 1]!;
     if (way.units > shop.placeUnits[ask.place]!) return false;
   } else if (s > job.first && shop.fixedAt[s - 1]! >= 0 && way.settle > 0 && !settles(p, s)) return false;
-  ask.settle = 0;
+  ask.settle = p.letSettle[s]!;
   ask.goesOn = false;
   ask.holdUntil = 0;
   if (s === job.last) return true;
@@ -72,17 +84,9 @@ export function setAsk(p: Placer, s: number): boolean {
   const inBlock = fixedNext || shop.blockOf[s + 1] === shop.blockOf[s];
   if (!next || !inBlock) return true;
   ask.goesOn = next.stay;
-  if (!next.stay) ask.settle = next.settle;
+  if (!next.stay) ask.settle = Math.max(ask.settle, next.settle);
   else if (fixedNext) ask.holdUntil = at.start[s + 1]!;
   return true;
-}
-
-/** Whether what stands fixed before `s` may settle where it is. */
-function settles(p: Placer, s: number): boolean {
-  const { at, places } = p.state;
-  const track = places[at.place[s - 1]!]!;
-  const i = firstEnding(track, at.end[s - 1]!);
-  return i >= track.n || track.from[i]! >= at.end[s - 1]! + p.wayOf[s]!.settle;
 }
 
 /** Places one stage. Returns the stage to place next: `s + 1`, or an earlier one that has to move, or -1. */
@@ -91,6 +95,7 @@ function placeStage(p: Placer, block: Block, s: number, limit: number): number {
   const { at } = state;
   const job = shop.jobs[block.job]!;
   const way = p.wayOf[s]!;
+  if (way.share === RIDES) return ride(p, s);
   const before = s > job.first;
   if (!setAsk(p, s)) return -1;
   const deadline = s < job.last && shop.fixedAt[s + 1]! >= 0 ? s + 1 : -1;

@@ -1,6 +1,8 @@
 import type { Problem } from '../types.ts';
 import { blocksOf } from './blocks.ts';
 import { makeCalendar } from './calendar.ts';
+import { makeJoints } from './joint-ways.ts';
+import { addLoads } from './load-mates.ts';
 import { BOOTH, type CompiledJob, PREP, RACK, type Shop, type Way } from './shop.ts';
 import { compileWay, type Indexes, indexesOf, indexOf, sortByDemand } from './ways.ts';
 
@@ -72,6 +74,11 @@ export function compileShop(problem: Problem): Shop {
     basePerson: new Int32Array(stages.length).fill(-1),
     baseStart: new Int32Array(stages.length).fill(-1),
     tail: new Int32Array(stages.length),
+    joints: makeJoints(at, wayId),
+    mates: [],
+    shares: false,
+    standing: [],
+    published: [],
   };
   return withJobs(shop, at);
 }
@@ -80,6 +87,7 @@ function withJobs(shop: Shop, at: Indexes): Shop {
   addJobs(shop);
   addKnown(shop, at);
   for (const job of shop.jobs) blocksOf(shop, job);
+  addLoads(shop);
   return shop;
 }
 

@@ -1,13 +1,18 @@
 import { NEVER } from './calendar.ts';
-import { floorOf, placeChain } from './chain.ts';
+import { placeChain } from './chain.ts';
+import { keepBefore, keepThis, lowest, putBack, takeKept } from './keep.ts';
+import { makeParty, type Party } from './party.ts';
 import { makePlacer, type Placer, takeOut } from './placer.ts';
-import { type Block, BOOTH, type Shop, type Variant } from './shop.ts';
-import { copyStage, enter, type Placing } from './state.ts';
+import { makeRing, type Ring } from './ring.ts';
+import { type Block, BOOTH, type Shop } from './shop.ts';
 
 /** A placer with what a whole schedule needs: which jobs are out, which variant each block takes, and the cost so far. */
 export type Decoder = Placer & {
   /** Variant of each block; -1: try all and take the one that ends first. */
   choice: Int32Array;
+  /** Which blocks run as one load. */
+  ring: Ring;
+  party: Party;
   /** Per job: 1 where it found no room. */
   out: Uint8Array;
   /** Per job the stage that found no room. */
@@ -18,6 +23,8 @@ export function makeDecoder(shop: Shop): Decoder {
   return {
     ...makePlacer(shop),
     choice: new Int32Array(shop.blocks.length).fill(-1),
+    ring: makeRing(shop.blocks.length),
+    party: makeParty(shop),
     out: new Uint8Array(shop.jobs.length),
     outStage: new Int32Array(shop.jobs.length).fill(-1),
   };
@@ -108,56 +115,3 @@ function firstImpossible(shop: Shop, block: Block): number {
   }
   return block.first;
 }
-
-/** The first stage that any variant of the block may push. */
-const lowest = (d: Decoder, block: Block): number =>
-  floorOf(
-    d,
-    block,
-    block.variants.reduce((most, v) => Math.min(most, v.ways[0]!.gapMax), NEVER),
-  );
-
-/** Remembers where the stages stand that a block may push later. */
-function keepBefore(d: Decoder, block: Block, floor: number): void {
-  for (let s = floor; s < block.first; s++) copyStage(d.shop, d.state.at, d.before, s);
-}
-
-/** Takes the block out and puts earlier stages back where they stood. */
-function putBack(d: Decoder, block: Block, floor: number): void {
-  const { at } = d.state;
-  for (let s = block.first; s <= block.last; s++) if (at.way[s]) takeOut(d, s);
-  for (let s = floor; s < block.first; s++) restore(d, s, d.before);
-}
-
-function keepThis(d: Decoder, block: Block, floor: number): void {
-  for (let s = floor; s <= block.last; s++) copyStage(d.shop, d.state.at, d.kept, s);
-}
-
-function takeKept(d: Decoder, block: Block, floor: number, variant: Variant): void {
-  for (let s = floor; s < block.first; s++) restore(d, s, d.kept);
-  for (let s = block.first; s <= block.last; s++) {
-    d.wayOf[s] = variant.ways[s - block.first]!;
-    d.pinOf[s] = variant.pins[s - block.first]!;
-    restore(d, s, d.kept);
-  }
-}
-
-/** Puts a stage where another record says. */
-export function restore(d: Placer, s: number, from: Placing): void {
-  const way = from.way[s]!;
-  if (way && way.rigid && way.lampCount === 0 && d.state.at.way[s] === way && standsAs(d.state.at, from, s)) return;
-  takeOut(d, s);
-  if (!way) return;
-  copyStage(d.shop, from, d.state.at, s);
-  enter(d.state, s, way);
-}
-
-/** Same times, place, person and hold; enough for ways whose segments and lamps cannot differ then. */
-const standsAs = (a: Placing, b: Placing, s: number): boolean =>
-  a.start[s] === b.start[s] &&
-  a.place[s] === b.place[s] &&
-  a.person[s] === b.person[s] &&
-  a.holdFrom[s] === b.holdFrom[s] &&
-  a.holdTo[s] === b.holdTo[s] &&
-  a.goesOn[s] === b.goesOn[s] &&
-  a.units[s] === b.units[s];

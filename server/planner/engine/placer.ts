@@ -18,6 +18,12 @@ export type Placer = {
   wishOf: Int32Array;
   notBefore: Int32Array;
   endAtLeast: Int32Array;
+  /** Per stage that rides in a load: the stage that leads it. */
+  leadOf: Int32Array;
+  /** Minutes that the members of a load ask for to settle, at the last stage they share; 0 elsewhere. */
+  letSettle: Int32Array;
+  /** Why a stage could not ride: its leader's stage has to start and to end this late. -1: for another reason. */
+  wants: { lead: number; start: number; end: number };
   ask: Ask;
   fit: Fit;
   best: Fit;
@@ -48,6 +54,9 @@ export function makePlacer(shop: Shop): Placer {
     wishOf: new Int32Array(n),
     notBefore: new Int32Array(n),
     endAtLeast: new Int32Array(n),
+    leadOf: new Int32Array(n).fill(-1),
+    letSettle: new Int32Array(n),
+    wants: { lead: -1, start: 0, end: 0 },
     ask: {
       stage: 0,
       way: anyWay,

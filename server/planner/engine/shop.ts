@@ -1,5 +1,6 @@
-import type { Problem } from '../types.ts';
+import type { Mode, Problem } from '../types.ts';
 import type { Calendar } from './calendar.ts';
+import type { Joints } from './joint-ways.ts';
 
 /** What a segment asks of people and the premises. */
 export const NONE = 0;
@@ -7,6 +8,11 @@ export const HANDS = 1;
 export const ONSITE = 2;
 /** Hands that may pause where the person's shift pauses. */
 export const PAUSED = 3;
+
+/** A way by itself; the way of a load, which holds place, person and lamps for all of it; a member's way beside that one. */
+export const ALONE = 0;
+export const LEADS = 1;
+export const RIDES = 2;
 
 /**
  * A mode, compiled. Phases that follow each other back to back and need the same attendance are merged into segments,
@@ -46,6 +52,10 @@ export type Way = {
   rigid: boolean;
   /** One segment per phase, each with its own length: the way of a fixed assignment, whose minutes reality wrote. */
   apart: boolean;
+  /** What it was compiled from; for a load all members' as one. */
+  mode: Mode;
+  /** ALONE, LEADS or RIDES. */
+  share: number;
 };
 
 /** One choice of ways for the stages of a block, and per stage the place where a chain of stays begins (-1: any). */
@@ -114,6 +124,14 @@ export type Shop = {
   baseStart: Int32Array;
   /** Least minutes from the end of a stage to the end of its job, by durations and least gaps. */
   tail: Int32Array;
+  joints: Joints;
+  /** Per block those of other jobs that it could share a run with. */
+  mates: Int32Array[];
+  /** Whether any has a mate. */
+  shares: boolean;
+  /** Pairs of blocks that go on from one fixed load, and those that run as one load in the baseline. */
+  standing: [number, number][];
+  published: [number, number][];
 };
 
 export const BOOTH = 0;

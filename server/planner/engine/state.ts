@@ -1,5 +1,5 @@
 import type { Assignment } from '../types.ts';
-import { BOOTH, HANDS, PAUSED, RACK, type Shop, type Way } from './shop.ts';
+import { BOOTH, HANDS, PAUSED, RACK, RIDES, type Shop, type Way } from './shop.ts';
 import { firstEnding, insertUse, makeTrack, removeUse, type Track } from './track.ts';
 
 /** Where each stage stands; `way[s]` is null while it has no place. Flat lists: one slot per segment, one per lamp. */
@@ -106,10 +106,11 @@ type Edit = (t: Track, from: number, to: number, a: number, b: number) => void;
 /** Applies an edit to every track that a placed stage uses. */
 function eachUse(state: State, s: number, way: Way, edit: Edit): void {
   const { shop, at } = state;
+  settleFixed(state, s, way, edit);
+  if (way.share === RIDES) return; // the one that leads the load has it all
   const place = at.place[s]!;
   const data = shop.placeKind[place] === RACK ? at.units[s]! : way.family;
   edit(state.places[place]!, at.holdFrom[s]!, at.holdTo[s]!, data, s * 2 + at.goesOn[s]!);
-  settleFixed(state, s, way, edit);
   const base = s * shop.maxSegments;
   if (at.person[s]! >= 0) {
     const busy = state.people[at.person[s]!]!;
@@ -148,9 +149,10 @@ function eachLampUse(state: State, s: number, way: Way, zone: number, edit: Edit
 }
 
 /** Keeps the sums that the objective weighs. */
-function count(state: State, s: number, sign: number): void {
+function count(state: State, s: number, way: Way, sign: number): void {
   const { shop, at } = state;
-  if (shop.placeKind[at.place[s]!] === BOOTH) state.boothMinutes += sign * (at.holdTo[s]! - at.holdFrom[s]!);
+  if (way.share !== RIDES && shop.placeKind[at.place[s]!] === BOOTH)
+    state.boothMinutes += sign * (at.holdTo[s]! - at.holdFrom[s]!);
   if (shop.basePlace[s]! >= 0 && moved(state, s)) state.moves += sign;
 }
 
@@ -162,7 +164,7 @@ export const moved = ({ shop, at }: State, s: number): boolean =>
 export function enter(state: State, s: number, way: Way): void {
   state.at.way[s] = way;
   eachUse(state, s, way, insertUse);
-  count(state, s, 1);
+  count(state, s, way, 1);
 }
 
 /** Takes a placed stage out of the tracks. */
@@ -170,7 +172,7 @@ export function remove(state: State, s: number): void {
   const way = state.at.way[s];
   if (!way) return;
   eachUse(state, s, way, removeUse);
-  count(state, s, -1);
+  count(state, s, way, -1);
   state.at.way[s] = null;
 }
 

@@ -1,6 +1,6 @@
 import type { Mode, Phase, Problem } from '../types.ts';
 import { NEVER } from './calendar.ts';
-import { HANDS, NONE, ONSITE, PAUSED, type Way } from './shop.ts';
+import { ALONE, HANDS, NONE, ONSITE, PAUSED, type Way } from './shop.ts';
 
 /** Where a mode's ids stand in the compiled shop. */
 export type Indexes = {
@@ -99,6 +99,8 @@ export function compileWay(id: number, mode: Mode, at: Indexes, apart = false): 
     minutes: mode.phases.reduce((sum, p) => sum + p.minutes, 0),
     rigid: s.need.every((need, k) => need !== PAUSED && (s.wait[k] === 0 || k === s.need.length - 1)),
     apart,
+    mode,
+    share: ALONE,
   };
 }
 

@@ -1,12 +1,22 @@
 import { NEVER } from '../engine/calendar.ts';
-import { type Decoder, decodeBlock, IS_OUT, makeDecoder, restore, TOO_LATE } from '../engine/decode.ts';
+import { type Decoder, makeDecoder } from '../engine/decode.ts';
+import { restore } from '../engine/keep.ts';
 import { forgetTouched, takeOut } from '../engine/placer.ts';
-import { costOf, latestEnd, type Ledger, makeLedger, OUT, setEnd, setOut, settleLedger } from '../engine/run-cost.ts';
+import { costOf, type Ledger, makeLedger, setEnd, setOut, settleLedger } from '../engine/run-cost.ts';
+import { joinRings, makeRing, type Ring, resetRing } from '../engine/ring.ts';
 import type { Shop } from '../engine/shop.ts';
 import { copyStage, makePlacing, type Placing } from '../engine/state.ts';
+import { placeNext, reachBack } from './place-next.ts';
 
 /** Everything that makes a schedule again: the order of blocks, and what is chosen for them. */
-export type Genes = { order: Int32Array; choice: Int32Array; hand: Int32Array; spot: Int32Array; wish: Int32Array };
+export type Genes = {
+  order: Int32Array;
+  choice: Int32Array;
+  hand: Int32Array;
+  spot: Int32Array;
+  wish: Int32Array;
+  ring: Ring;
+};
 
 /**
  * The schedule that the search stands on, and the candidate it tries. A candidate shares the front of the order with it:
@@ -26,6 +36,8 @@ export type Search = {
   heldOutStage: Int32Array;
   cost: number;
   evaluations: number;
+  /** Per block: 1 while what comes before its load is being placed. */
+  awaited: Uint8Array;
   /** Asked now and then while many blocks are placed: true gives the candidate up. */
   halt: () => boolean;
 };
@@ -44,6 +56,7 @@ export function makeSearch(shop: Shop, alone: Int32Array): Search {
       hand: new Int32Array(shop.stageCount).fill(-1),
       spot: new Int32Array(shop.stageCount).fill(-1),
       wish: new Int32Array(shop.stageCount),
+      ring: makeRing(blocks),
     },
     heldPlacing: makePlacing(shop),
     heldPins: new Int32Array(shop.stageCount).fill(-1),
@@ -51,6 +64,7 @@ export function makeSearch(shop: Shop, alone: Int32Array): Search {
     heldOutStage: new Int32Array(shop.jobs.length).fill(-1),
     cost: Infinity,
     evaluations: 0,
+    awaited: new Uint8Array(blocks),
     halt: () => false,
   };
   for (let s = 0; s < shop.stageCount; s++) copyStage(shop, d.state.at, search.heldPlacing, s);
@@ -93,24 +107,6 @@ function placeFrom(s: Search, from: number, limit: number): boolean {
   return true;
 }
 
-/** Places one block; false where the cost passes `limit` by it. */
-function placeNext(s: Search, id: number, limit: number): boolean {
-  const { d, ledger } = s;
-  const { shop } = d;
-  const { job, last } = shop.blocks[id]!;
-  if (d.out[job]) return true;
-  // While a job is out, any end is better than none.
-  const end = limit >= OUT ? NEVER : latestEnd(d, ledger, job, limit) - shop.tail[last]!;
-  const outcome = decodeBlock(d, id, end);
-  if (outcome === TOO_LATE) return false;
-  if (outcome === IS_OUT) setOut(ledger, shop, job);
-  else {
-    const at = d.state.at.end[last]! + shop.tail[last]!;
-    if (last === shop.jobs[job]!.last || at > ledger.est[job]!) setEnd(ledger, shop, job, at);
-  }
-  return costOf(d, ledger) <= limit;
-}
-
 /**
  * Tries the order in `s.order` with the genes in the decoder, unchanged before position `from`. Accepts it if its cost
  * does not pass `limit`; otherwise everything is as before. Returns whether it was accepted.
@@ -118,18 +114,19 @@ function placeNext(s: Search, id: number, limit: number): boolean {
 export function attempt(s: Search, from: number, limit: number): boolean {
   forgetTouched(s.d);
   s.evaluations++;
-  clearFrom(s, from);
-  if (placeFrom(s, from, limit)) {
-    accept(s, from);
+  const first = reachBack(s, from);
+  clearFrom(s, first);
+  if (placeFrom(s, first, limit)) {
+    accept(s, first);
     return true;
   }
-  refuse(s, from);
+  refuse(s, first);
   return false;
 }
 
 /**
  * Takes some blocks out of the schedule and places them again in the order given, into what is free; everything else
- * stays where it is. A block comes with all later ones of its job. Accepts like `attempt`; then the order of all blocks
+ * stays where it is. A block comes with all later ones of its job, and with those of its load. Accepts like `attempt`; then the order of all blocks
  * follows their starts.
  */
 export function attemptBlocks(s: Search, ids: readonly number[], limit: number): boolean {
@@ -186,6 +183,7 @@ function accept(s: Search, from: number): void {
   held.hand.set(d.handOf);
   held.spot.set(d.spotOf);
   held.wish.set(d.wishOf);
+  held.ring.set(d.ring);
   s.heldOut.set(d.out);
   s.heldOutStage.set(d.outStage);
   s.cost = costOf(d, s.ledger);
@@ -212,6 +210,7 @@ function settleGenes(s: Search, all: boolean): void {
   d.handOf.set(held.hand);
   d.spotOf.set(held.spot);
   d.wishOf.set(held.wish);
+  d.ring.set(held.ring);
   d.out.set(s.heldOut);
   d.outStage.set(s.heldOutStage);
   for (let j = 0; j < shop.jobs.length; j++) {
@@ -230,6 +229,13 @@ export function settleHeld(s: Search): void {
 
 /** Starts over from an order: everything is placed anew, with every choice free or as the published plan has it. */
 export function startFrom(s: Search, order: Int32Array, published = false): void {
+  const { shop } = s.d;
+  const loads = published ? [...shop.standing, ...shop.published] : shop.standing;
+  if (begin(s, order, published, loads) || loads.length === 0) return;
+  begin(s, order, published, []); // a load left somebody without room
+}
+
+function begin(s: Search, order: Int32Array, published: boolean, loads: readonly [number, number][]): boolean {
   const { d } = s;
   s.order.set(order);
   if (s.cost === Infinity) s.held.order.set(order);
@@ -237,8 +243,10 @@ export function startFrom(s: Search, order: Int32Array, published = false): void
   d.handOf.fill(-1);
   d.spotOf.fill(-1);
   d.wishOf.fill(0);
+  resetRing(d.ring);
   if (published) for (let k = 0; k < d.shop.stageCount; k++) wishPublished(s, k);
-  attempt(s, 0, Infinity);
+  for (const [a, b] of loads) joinRings(d.ring, a, b);
+  return attempt(s, 0, Infinity);
 }
 
 /** Asks for a stage what the published plan has: its place, its person, and not to start before. */

@@ -1,4 +1,4 @@
-import { restore } from '../engine/decode.ts';
+import { restore } from '../engine/keep.ts';
 import { forgetTouched } from '../engine/placer.ts';
 import { OUT } from '../engine/run-cost.ts';
 import { copyStage, makePlacing, type Placing } from '../engine/state.ts';
@@ -24,6 +24,7 @@ export function makeKept({ d, held }: Search): Kept {
       hand: held.hand.slice(),
       spot: held.spot.slice(),
       wish: held.wish.slice(),
+      ring: held.ring.slice(),
     },
     placing: makePlacing(shop),
     pins: new Int32Array(shop.stageCount),
@@ -41,6 +42,7 @@ export function keepHeld(s: Search, kept: Kept): void {
   kept.genes.hand.set(s.held.hand);
   kept.genes.spot.set(s.held.spot);
   kept.genes.wish.set(s.held.wish);
+  kept.genes.ring.set(s.held.ring);
   for (let k = 0; k < shop.stageCount; k++) copyStage(shop, s.heldPlacing, kept.placing, k);
   kept.pins.set(s.heldPins);
   kept.out.set(s.heldOut);
@@ -62,6 +64,7 @@ export function standOn(s: Search, kept: Kept): void {
   held.hand.set(kept.genes.hand);
   held.spot.set(kept.genes.spot);
   held.wish.set(kept.genes.wish);
+  held.ring.set(kept.genes.ring);
   s.heldPins.set(kept.pins);
   s.heldOut.set(kept.out);
   s.heldOutStage.set(kept.outStage);

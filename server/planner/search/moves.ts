@@ -1,5 +1,7 @@
+import { leaveRing } from '../engine/ring.ts';
 import { below, type Random } from '../random.ts';
 import { type Search, wishPublished } from './candidate.ts';
+import { type Cut, shareRuns } from './share-runs.ts';
 
 /** Changes `s.order` or the genes in the decoder. Returns the first changed position, or -1 where nothing changed. */
 export type Move = (s: Search, random: Random) => number;
@@ -34,7 +36,9 @@ export const moveBlock: Move = (s, random) => {
   }
   if (hi <= lo) return -1;
   const to = lo + below(random, hi - lo + 1);
-  return to === from ? -1 : shift(s.order, from, to);
+  if (to === from) return -1;
+  leaveRing(s.d.ring, id);
+  return shift(s.order, from, to);
 };
 
 /** Place, way and person of a job's blocks are chosen anew. */
@@ -42,6 +46,7 @@ function freeChoices(s: Search, job: number): void {
   for (const id of s.d.shop.jobs[job]!.blocks) {
     const { first, last } = s.d.shop.blocks[id]!;
     s.d.choice[id] = -1;
+    leaveRing(s.d.ring, id);
     s.d.handOf.fill(-1, first, last + 1);
     s.d.spotOf.fill(-1, first, last + 1);
     s.d.wishOf.fill(0, first, last + 1);
@@ -101,6 +106,7 @@ export const changeWay: Move = (s, random) => {
   if (n < 2) return -1;
   const next = below(random, n);
   s.d.choice[id] = next === s.d.choice[id] ? -1 : next;
+  for (let mate = s.d.ring[id]!; mate !== id; mate = s.d.ring[mate]!) s.d.choice[mate] = -1;
   return from;
 };
 
@@ -149,10 +155,12 @@ export function ruin(s: Search, random: Random): number[] {
   const { shop } = s.d;
   const count = 1 + below(random, 4);
   const whole = random() < 0.7;
-  const queues = neighbours(s, random, count).map((job) => {
+  const cuts = neighbours(s, random, count).map((job): Cut => {
     const { blocks } = shop.jobs[job]!;
-    return blocks.slice(whole || s.heldOut[job] ? 0 : below(random, blocks.length));
+    return { job, from: whole || s.heldOut[job] ? 0 : below(random, blocks.length) };
   });
+  if (shop.shares) shareRuns(s, random, cuts);
+  const queues = cuts.map(({ job, from }) => shop.jobs[job]!.blocks.slice(from));
   for (let i = queues.length - 1; i > 0; i--) {
     const k = below(random, i + 1);
     [queues[i], queues[k]] = [queues[k]!, queues[i]!];
