@@ -180,6 +180,9 @@ export const sendReadings = endpoint({
   name: 'send-readings',
   method: 'POST',
   path: '/api/readings',
-  body: z.preprocess((body) => (Array.isArray(body) ? body : [body]), z.array(sentReading).min(1).max(500)),
+  body: z.preprocess(
+    (body: unknown): unknown => (Array.isArray(body) ? body : [body]),
+    z.array(sentReading).min(1).max(500),
+  ),
   reply: written,
 });
