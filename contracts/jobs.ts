@@ -142,7 +142,7 @@ export const newJob = z.strictObject({
   /** Made by the browser, so that sending twice makes one job. */
   id,
   sheetId: id,
-  /** Keys of the sheet's options that are chosen. */
+  /** Keys of the sheet's options that are chosen; of extra coats as often as there are to be. */
   options: z.array(z.string()).max(40),
   parts: z.array(partInput).min(1).max(40),
   ...jobFields,

@@ -158,8 +158,8 @@ export const readSheet = endpoint({
 export const readSheetVersion = endpoint({
   name: 'read-sheet-version',
   method: 'GET',
-  path: '/api/shops/:shopId/process-sheets/:sheetId/versions/:version',
-  params: inSheet.extend({ version: z.coerce.number().int().min(1).max(1_000_000) }),
+  path: '/api/shops/:shopId/process-sheets/:sheetId/versions/:versionId',
+  params: inSheet.extend({ versionId: id }),
   reply: z.strictObject({ version: z.number().int(), versionId: id, body: sheetBody, ...savedBy }),
 });
 

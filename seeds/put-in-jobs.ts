@@ -1,11 +1,12 @@
 import type { Trx } from '#server/db/in-shop.ts';
 import { insertJob, takeJobNumber } from '#server/db/jobs.ts';
 import { insertStages } from '#server/db/stages.ts';
+import { expandSheet } from '#server/sheets/expand-sheet.ts';
 import type { DemoCalendar } from './calendar.ts';
 import { demoId, spread } from './ids.ts';
 import type { JobSeed } from './jobs.ts';
 import { accountOf } from './put-in-accounts.ts';
-import { sheets } from './sheets/index.ts';
+import { bodyOf, sheets } from './sheets/index.ts';
 
 export const jobIdOf = (seed: JobSeed): string => demoId('job', `${seed.title}/${seed.vehicle}`);
 
@@ -29,7 +30,7 @@ export async function putInJob(
   const id = jobIdOf(seed);
   const chosen = [...sheet.options.flatMap(({ key, on }) => (on ? [key] : [])), ...(seed.options ?? [])];
   const parts = (seed.parts ?? sheet.parts).map((part, i) => ({ id: demoId('part', `${id}/${i}`), ...part }));
-  const stages = sheet.stages.filter(({ option }) => option === null || chosen.includes(option));
+  const stages = expandSheet(bodyOf(sheet), chosen);
   await insertJob(trx, shopId, {
     id,
     number: await takeJobNumber(trx, shopId),
@@ -52,12 +53,6 @@ export async function putInJob(
     trx,
     shopId,
     id,
-    stages.map(({ key, kind, title, coating, ways }) => ({
-      id: demoId('stage', `${id}/${key}`),
-      kind,
-      title,
-      coatingId: coating === null ? null : demoId('coating', coating),
-      ways,
-    })),
+    stages.map(({ key, ...stage }) => ({ id: demoId('stage', `${id}/${key}`), ...stage })),
   );
 }

@@ -5,7 +5,7 @@ import type { DemoCalendar } from './calendar.ts';
 import { coatings } from './coatings.ts';
 import { demoId } from './ids.ts';
 import { people, shifts } from './people.ts';
-import { sheets } from './sheets/index.ts';
+import { bodyOf, sheets } from './sheets/index.ts';
 import { circuits, lamps, maintenance, opening, places, shop, weekdays } from './shop.ts';
 
 /** Set-up of the demo shop: places, lamps, calendars, people, coatings, process sheets. */
@@ -26,18 +26,12 @@ export async function putInShop(trx: Trx, shopId: string, calendar: DemoCalendar
   await putInPeople(trx, shopId, calendar);
   for (const { key, ...coating } of coatings)
     await insertCoating(trx, shopId, { ...coating, id: demoId('coating', key) });
-  for (const { key, name, stages, ...body } of sheets)
+  for (const sheet of sheets)
     await insertSheet(trx, shopId, {
-      id: demoId('sheet', key),
-      versionId: demoId('sheet', `${key}/1`),
-      name,
-      body: {
-        ...body,
-        stages: stages.map(({ coating, ...stage }) => ({
-          ...stage,
-          coatingId: coating === null ? null : demoId('coating', coating),
-        })),
-      },
+      id: demoId('sheet', sheet.key),
+      versionId: demoId('sheet', `${sheet.key}/1`),
+      name: sheet.name,
+      body: bodyOf(sheet),
     });
 }
 

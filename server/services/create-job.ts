@@ -12,6 +12,7 @@ import { insertStages } from '../db/stages.ts';
 import type { Deps } from '../deps.ts';
 import { Refusal } from '../errors.ts';
 import type { Actor } from '../policies.ts';
+import { expandSheet } from '../sheets/expand-sheet.ts';
 import { jobInShop } from './read-job.ts';
 
 export type NewJobInput = z.output<typeof newJob>;
@@ -59,21 +60,26 @@ async function makeJob(trx: Trx, actor: Actor, input: NewJobInput): Promise<void
 
 /** The stages the options leave. Everything that is wrong is said at once. */
 function stagesFor(sheet: Sheet | undefined, input: NewJobInput) {
-  const known = new Set(sheet?.body.options.map((option) => option.key));
-  const stages = (sheet?.body.stages ?? []).filter(
-    (stage) => stage.option === null || input.options.includes(stage.option),
-  );
+  const stages = sheet ? expandSheet(sheet.body, input.options) : [];
   const fields = [
-    ...(sheet ? [] : [{ path: 'body.sheetId', message: 'no such process sheet' }]),
-    ...input.options.flatMap((key, i) =>
-      sheet && !known.has(key) ? [{ path: `body.options.${i}`, message: 'not an option of this process sheet' }] : [],
-    ),
+    ...(sheet ? optionFaults(sheet, input.options) : [{ path: 'body.sheetId', message: 'no such process sheet' }]),
     ...(sheet && stages.length === 0 ? [{ path: 'body.options', message: 'no stage is left' }] : []),
     ...promiseFault(input.releaseAt, input.promiseAt),
   ];
   if (fields.length > 0) throw new Refusal('bad-request', { fields });
   return stages.map(({ kind, title, coatingId, ways }) => ({ id: uuid(), kind, title, coatingId, ways }));
 }
+
+/** An option is named as often as it is chosen: once, or up to what the sheet allows of extra coats. */
+const optionFaults = ({ body }: Sheet, chosen: readonly string[]) =>
+  chosen.flatMap((key, i) => {
+    const path = `body.options.${i}`;
+    const option = body.options.find((one) => one.key === key);
+    if (!option) return [{ path, message: 'not an option of this process sheet' }];
+    const { most = 1 } = option;
+    const before = chosen.slice(0, i).filter((one) => one === key).length;
+    return before >= most ? [{ path, message: `can be chosen ${most === 1 ? 'once' : `${most} times at most`}` }] : [];
+  });
 
 export const promiseFault = (releaseAt: string, promiseAt: string | null) =>
   promiseAt !== null && new Date(promiseAt) < new Date(releaseAt)

@@ -30,6 +30,7 @@ const inShop = (painter: Cell, office: Cell, lead: Cell, owner: Cell): Row => ({
 });
 const everyone = inShop('may', 'may', 'may', 'may');
 const planners = inShop(403, 403, 'may', 'may');
+const sheetKeepers = planners;
 const jobKeepers = inShop(403, 'may', 'may', 'may');
 const stageWorkers = inShop('may', 403, 'may', 'may');
 const owners = inShop(403, 403, 403, 'may');
@@ -68,6 +69,16 @@ export const rights: Readonly<Record<string, Row>> = {
   'change-job': jobKeepers,
   'withdraw-job': jobKeepers,
   'list-sheets': everyone,
+  'survey-sheets': everyone,
+  'read-sheet-ground': everyone,
+  'read-sheet': everyone,
+  'read-sheet-version': everyone,
+  'create-sheet': sheetKeepers,
+  'save-sheet': sheetKeepers,
+  'change-sheet': sheetKeepers,
+  'export-sheet': everyone,
+  'import-sheet': sheetKeepers,
+  'export-sheets': everyone,
   'list-coatings': everyone,
 
   'read-day': everyone,
@@ -117,6 +128,37 @@ export type ForeignIds = Record<
   string
 >;
 
+const someSheetBody = {
+  summary: '',
+  options: [],
+  parts: [],
+  stages: [
+    {
+      key: 'prep',
+      kind: 'prep',
+      title: 'Prepare',
+      option: null,
+      coatingId: null,
+      ways: [
+        {
+          id: 'by-hand',
+          label: 'By hand',
+          placeKinds: ['prep'],
+          stay: false,
+          skill: 'prep',
+          lampCount: 0,
+          family: null,
+          load: null,
+          gap: { min: 0, max: null, settle: 0 },
+          split: true,
+          bakeCelsius: null,
+          phases: [{ kind: 'work', minutes: 30, attendance: 'hands' }],
+        },
+      ],
+    },
+  ],
+};
+
 /**
  * For each route that takes an id beside the shop's: a request that is right but for the ids. The test sends it with another
  * shop's ids and with ids of nothing, and the answers must be the same to the byte.
@@ -142,6 +184,14 @@ export const withForeignIds: Readonly<Record<string, (ids: ForeignIds) => { body
       heatLimitCelsius: null,
       heatLimitMinutes: null,
     },
+  }),
+  'read-sheet': () => ({}),
+  'read-sheet-version': () => ({}),
+  'save-sheet': () => ({ body: { version: 1, body: someSheetBody } }),
+  'change-sheet': () => ({ body: { revision: 1, name: 'Mine now' } }),
+  'export-sheet': () => ({}),
+  'create-sheet': ({ sheetId }) => ({
+    body: { id: '0190a0a0-0000-7000-8000-000000000002', name: 'Copy', copyOf: sheetId },
   }),
   'change-job': () => ({ body: { version: 1, title: 'Mine now' } }),
   'withdraw-job': () => ({ body: { version: 1 } }),
