@@ -38,13 +38,15 @@ export const layers = [
   },
   { name: 'program', at: /^server\/program\.ts$/, mayUse: [...kernel, 'db'], never: [...webServer, ...mailers] },
   { name: 'db', at: /^server\/db\//, mayUse: [...kernel, 'migrations'], never: [...webServer, ...mailers] },
+  { name: 'csv', at: /^server\/csv\//, mayUse: ['contracts', 'db'], never: [...webServer, ...mailers] },
+  { name: 'starter', at: /^server\/starter\//, mayUse: pure, only: [] },
   { name: 'planning', at: /^server\/planning\//, mayUse: [...kernel, 'db'], never: [...webServer, ...mailers] },
   { name: 'mail', at: /^server\/mail\//, mayUse: [...kernel, 'db'], never: webServer },
   { name: 'realtime', at: /^server\/realtime\//, mayUse: [...kernel, 'db'], never: mailers },
   {
     name: 'services',
     at: /^server\/services\//,
-    mayUse: [...kernel, 'db', 'planning'],
+    mayUse: [...kernel, 'db', 'csv', 'planning', 'starter'],
     never: [...webServer, ...mailers],
   },
   {
@@ -63,7 +65,7 @@ export const layers = [
   {
     name: 'seeds',
     at: /^seeds\//,
-    mayUse: [...kernel, 'db', 'services', 'planning'],
+    mayUse: [...kernel, 'db', 'services', 'planning', 'starter'],
     never: [...webServer, ...mailers],
   },
   { name: 'browser paths', at: /^src\/app\/paths\.ts$/, mayUse: ['contracts'], never: nodeOnly },

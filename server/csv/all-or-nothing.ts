@@ -17,7 +17,8 @@ export async function allOrNothing(
 ): Promise<CsvReport> {
   try {
     return await inShop(db, scope, async (trx) => {
-      const { added, changed, faults } = await work(trx);
+      const { added, changed, ...found } = await work(trx);
+      const faults = found.faults.toSorted((a, b) => a.line - b.line);
       const isClean = faults.length === 0;
       const report = { lines, added: isClean ? added : 0, changed: isClean ? changed : 0, faults };
       if (tryOnly || !isClean) throw new Undone(report);

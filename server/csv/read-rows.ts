@@ -9,7 +9,13 @@ const mostFaults = 500;
 
 export type ReadRow<T> = { line: number; value: T };
 /** With a fault anywhere nothing may be taken; `rows` then holds the lines that are right by themselves. */
-export type ReadRows<T> = { lines: number; rows: ReadRow<T>[]; faults: CsvFault[] };
+export type ReadRows<T> = {
+  lines: number;
+  rows: ReadRow<T>[];
+  faults: CsvFault[];
+  /** Keys whose column the file has: what it does not speak of it need not change. */
+  columns: ReadonlySet<string>;
+};
 
 /**
  * Reads a file of rows by its header. The schema's keys are the columns (`goodUntil` is found under `good until`, `Good
@@ -19,13 +25,13 @@ export type ReadRows<T> = { lines: number; rows: ReadRow<T>[]; faults: CsvFault[
 export function readRows<S extends z.ZodObject>(text: string, schema: S): ReadRows<z.output<S>> {
   const keys = new Map(Object.keys(schema.shape).map((key) => [sameHeader(headerOf(key)), key]));
   const file = split(text, (header) => keys.has(sameHeader(unescapeCell(header))));
-  if ('fault' in file) return { lines: 0, rows: [], faults: [file.fault] };
+  if ('fault' in file) return { ...nothing, faults: [file.fault] };
   const [head, ...body] = file.lines;
   if (!head) return onlyFault(0, 'The file is empty. Its first line names the columns.');
   if (body.length > mostLines)
     return onlyFault(body.length, `The file has ${body.length} lines; ${mostLines} can be taken at once. Divide it.`);
   const columns = readHead(head, keys, schema);
-  if (columns.faults.length > 0) return { lines: body.length, rows: [], faults: columns.faults };
+  if (columns.faults.length > 0) return { ...nothing, lines: body.length, faults: columns.faults };
   const rows: ReadRow<z.output<S>>[] = [];
   const faults: CsvFault[] = [];
   for (const line of body) {
@@ -34,12 +40,15 @@ export function readRows<S extends z.ZodObject>(text: string, schema: S): ReadRo
     else faults.push(...read.faults);
     if (faults.length >= mostFaults) break;
   }
-  return { lines: body.length, rows, faults };
+  const named = new Set(columns.named.flatMap((column) => column?.key ?? []));
+  return { lines: body.length, rows, faults, columns: named };
 }
 
+const nothing = { lines: 0, rows: [], columns: new Set<string>() };
+
 const onlyFault = (lines: number, message: string): ReadRows<never> => ({
+  ...nothing,
   lines,
-  rows: [],
   faults: [{ line: 1, column: null, message }],
 });
 
@@ -82,7 +91,9 @@ function readLine<S extends z.ZodObject>(
   });
   const read = schema.safeParse(given);
   if (read.success) return { value: read.data };
-  const faults = read.error.issues.map((issue) => {
+  // One word on a cell is enough: the first.
+  const first = new Map(read.error.issues.toReversed().map((issue) => [issue.path[0], issue]));
+  const faults = [...first.values()].toReversed().map((issue) => {
     const key = issue.path[0];
     const header = columns.find((column) => column?.key === key)?.header ?? null;
     const isEmpty = typeof key === 'string' && given[key] === undefined && issue.code === 'invalid_type';

@@ -25,7 +25,8 @@ type ServiceCode =
   | 'previous-not-done'
   | 'not-started'
   | 'last-owner'
-  | 'still-booked';
+  | 'still-booked'
+  | 'still-used-by';
 
 type Say = (
   r: { names: Get; at: Get; minutes: (i: number) => number; count: number; rule: number | null },
@@ -130,6 +131,8 @@ const texts: Record<ViolationCode | ServiceCode, Say> = {
     count > 0 ? `${names(0)} comes before it and is not done.` : 'The stage before it is not done.',
   'not-started': () => 'It has not been started.',
   'still-booked': ({ names, at }) => `${names(0)} has posted work: ${names(1)}, ${at(0)}.`,
+  'still-used-by': ({ names, count }) =>
+    `${names(0)} is still used by ${names(1)}${count > 1 ? ` and ${count - 1} more` : ''}.`,
   'last-owner': ({ names }) => `${names(0)} is the only owner. Make somebody else an owner first.`,
 };
 
