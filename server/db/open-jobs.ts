@@ -7,6 +7,8 @@ export type OpenStage = {
   position: number;
   kind: string;
   title: string;
+  /** What the stage puts on or cures, if any. */
+  coatingId: string | null;
   ways: Way[];
   state: 'waiting' | 'running' | 'done';
   startedAt: Date | null;
@@ -61,7 +63,7 @@ const OPEN_JOBS = `
     ) parts on parts.job_id = job.id
     left join (
       select job_id, json_agg(json_build_object('id', id, 'position', position, 'kind', kind, 'title', title,
-          'ways', ways, 'state', state, 'startedAt', started_at, 'finishedAt', finished_at, 'version', version)
+          'coatingId', coating_id, 'ways', ways, 'state', state, 'startedAt', started_at, 'finishedAt', finished_at, 'version', version)
           order by position) as list
         from stage where shop_id = :shopId group by job_id
     ) stages on stages.job_id = job.id

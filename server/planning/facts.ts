@@ -1,3 +1,6 @@
+import type { CoatingSheet } from '#contracts/coatings.ts';
+import { loadAir, type AirOfShop } from '#server/db/air.ts';
+import { everyCoating } from '#server/db/coatings.ts';
 import type { Booked, Booking } from '#server/db/bookings.ts';
 import { loadOpenBookings } from '#server/db/bookings.ts';
 import { findOpenDraft, loadDraftItems, type Draft, type DraftItem } from '#server/db/drafts.ts';
@@ -14,18 +17,23 @@ export type Facts = {
   draft: Draft | null;
   /** Items of the open draft; empty where there is none. */
   items: Map<string, DraftItem>;
+  air: AirOfShop;
+  /** Data sheets by coating. */
+  coatings: Map<string, CoatingSheet>;
 };
 
 const byStage = <T extends Booked>(list: readonly T[]): Map<string, T> => new Map(list.map((b) => [b.stageId, b]));
 
-/** Five statements, whatever the shop's size. */
+/** Seven statements, whatever the shop's size. */
 export async function loadFacts(trx: Trx, shopId: string, now: Date): Promise<Facts> {
   const resources = await loadResources(trx, shopId);
   const jobs = await loadOpenJobs(trx, shopId);
   const bookings = byStage(await loadOpenBookings(trx, shopId));
   const draft = (await findOpenDraft(trx, shopId, { lock: false })) ?? null;
   const items = byStage(draft ? await loadDraftItems(trx, shopId, draft.id) : []);
-  return { now, resources, jobs, bookings, draft, items };
+  const air = await loadAir(trx, shopId);
+  const coatings = new Map((await everyCoating(trx, shopId)).map(({ id, sheet }) => [id, sheet]));
+  return { now, resources, jobs, bookings, draft, items, air, coatings };
 }
 
 /**

@@ -4,6 +4,7 @@ import type { UnplacedNote } from '#server/db/drafts.ts';
 import { standingOf, type Facts } from './facts.ts';
 import type { Built } from './problem/build-problem.ts';
 import type { Clock } from './problem/clock.ts';
+import { wayOfMode } from './problem/mode-id.ts';
 import { sayNoWay } from './problem/refusals.ts';
 import { personOf } from './problem/roster.ts';
 
@@ -11,7 +12,7 @@ import { personOf } from './problem/roster.ts';
 export function toBooked(at: Assignment, clock: Clock, keep: { loadId: string; pinned: boolean }): Booked {
   return {
     stageId: at.stage,
-    way: at.mode,
+    way: wayOfMode(at.mode),
     placeId: at.place,
     personId: at.person === null ? null : personOf(at.person),
     lampIds: at.lamps,

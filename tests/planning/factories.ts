@@ -1,4 +1,5 @@
 import { v7 as uuid } from 'uuid';
+import { defaultAirSettings } from '#contracts/air.ts';
 import type { Way } from '#contracts/sheets.ts';
 import type { Booked, Booking } from '#server/db/bookings.ts';
 import type { DraftItem } from '#server/db/drafts.ts';
@@ -113,6 +114,7 @@ export const stage = (ways: Way[], part: Partial<OpenStage> = {}): OpenStage => 
   position: 0,
   kind: 'paint',
   title: 'Paint',
+  coatingId: null,
   ways,
   state: 'waiting',
   startedAt: null,
@@ -170,7 +172,7 @@ type Shop = Partial<Omit<Resources, 'shop'>> & { shop?: Partial<Resources['shop'
 export function facts(
   shop: Shop,
   jobs: OpenJob[],
-  part: { now?: Date; bookings?: Booking[]; items?: DraftItem[] } = {},
+  part: Partial<Pick<Facts, 'air' | 'coatings'>> & { now?: Date; bookings?: Booking[]; items?: DraftItem[] } = {},
 ): Facts {
   const people = shop.people ?? [person()];
   const week = { startsLocal: '2026-01-05T07:00', rule: 'FREQ=WEEKLY;BYDAY=MO,TU,WE,TH,FR', minutes: 600 };
@@ -217,5 +219,7 @@ export function facts(
         }
       : null,
     items: new Map((part.items ?? []).map((i) => [i.stageId, i])),
+    air: part.air ?? { settings: defaultAirSettings, zones: [] },
+    coatings: part.coatings ?? new Map(),
   };
 }

@@ -3,6 +3,7 @@ import type { Assignment, Job, Mode, Place, Problem } from '#planner/types.ts';
 import type { OpenJob } from '#server/db/open-jobs.ts';
 import type { Resources } from '#server/db/resources.ts';
 import { closedSpans, openSpans } from '../calendars.ts';
+import { airBook } from '../air/air-book.ts';
 import { standingOf, type Facts } from '../facts.ts';
 import { localDayOf, spanOfLocalDay } from '../local-time.ts';
 import type { Span } from '../spans.ts';
@@ -10,7 +11,8 @@ import { chooseFixed, type Purpose } from './choose-fixed.ts';
 import { clockFrom, type Clock } from './clock.ts';
 import { begunStage, ELSEWHERE, standingMode, toAssignment, type Standing } from './fixed.ts';
 import { purgeOf } from './heat.ts';
-import { offersFor, type FixedSpot, type Offer } from './offers.ts';
+import { modeAt } from './mode-id.ts';
+import { offersFor, type ChosenSpot, type FixedSpot, type Offer } from './offers.ts';
 import { rosterOf, type Roster } from './roster.ts';
 
 const DAY = 24 * 3_600_000;
@@ -116,10 +118,11 @@ export function buildProblem(facts: Facts, frame: Frame, purpose: Purpose, now: 
   for (const [id, { assignment: at }] of standing)
     spots.set(id, { place: places.get(at.place) ?? null, way: at.mode, phases: at.phases });
   const offers = new Map<string, Offer>();
-  const chosen = purpose.kind === 'judge' ? waysChosen(facts) : null;
+  const chosen = purpose.kind === 'judge' ? chosenSpots(facts, purpose.loose) : null;
+  const air = airBook({ ...facts, openings: facts.resources.openings });
   const jobs = facts.jobs.filter((job) => job.stages.length > 0);
   for (const job of jobs)
-    for (const [id, offer] of offersFor(job, { resources: facts.resources, roster, fixed: spots, chosen }))
+    for (const [id, offer] of offersFor(job, { resources: facts.resources, roster, fixed: spots, chosen, air }))
       offers.set(id, offer);
   const fixed = sharedLoads([...standing.values()].map(({ assignment }) => assignment));
   return {
@@ -132,7 +135,7 @@ export function buildProblem(facts: Facts, frame: Frame, purpose: Purpose, now: 
       horizon: Math.max(shop.horizon, clock.up(now), ...fixed.map(({ end }) => end)),
       jobs: jobs.map((job) => jobOf(job, clock, standing, offers)),
       fixed,
-      baseline: baselineOf(facts, frame, standing),
+      baseline: baselineOf(facts, frame, standing, offers),
     },
   };
 }
@@ -167,12 +170,15 @@ export function sharedLoads(assignments: readonly Assignment[]): Assignment[] {
   return assignments.map((at) => (at.load !== null && size.get(at.load) === 1 ? { ...at, load: null } : at));
 }
 
-const waysChosen = (facts: Facts): Map<string, string> =>
+/** Where the plan that is judged has each stage. One that is being moved is laid anew, in the air of where it goes. */
+const chosenSpots = (facts: Facts, loose: ReadonlySet<string>): Map<string, ChosenSpot> =>
   new Map(
     facts.jobs.flatMap((job) =>
       job.stages.flatMap((stage) => {
         const booked = standingOf(facts, stage);
-        return booked ? [[stage.id, booked.way] as const] : [];
+        if (!booked) return [];
+        const { way, placeId } = booked;
+        return [[stage.id, { way, placeId, phases: loose.has(stage.id) ? null : booked.phases }] as const];
       }),
     ),
   );
@@ -207,11 +213,22 @@ const NO_WAY: Mode = {
   phases: [{ kind: 'work', minutes: 1, attendance: 'none' }],
 };
 
-function baselineOf(facts: Facts, frame: Frame, standing: Map<string, Standing>): Assignment[] {
+function baselineOf(
+  facts: Facts,
+  frame: Frame,
+  standing: Map<string, Standing>,
+  offers: Map<string, Offer>,
+): Assignment[] {
   const waiting = new Set(
     facts.jobs
       .flatMap((job) => job.stages.filter(({ id, state }) => state === 'waiting' && !standing.has(id)))
       .map(({ id }) => id),
   );
-  return [...facts.bookings.values()].filter(({ stageId }) => waiting.has(stageId)).map((b) => toAssignment(b, frame));
+  return [...facts.bookings.values()]
+    .filter(({ stageId }) => waiting.has(stageId))
+    .map((booked) => {
+      const mode = modeAt(offers.get(booked.stageId)?.modes ?? [], booked.way, booked.placeId);
+      const at = toAssignment(booked, frame);
+      return mode === undefined ? at : { ...at, mode };
+    });
 }

@@ -2,9 +2,9 @@ import type { Way } from '#contracts/sheets.ts';
 import type { Assignment, Interval, Mode, Phase } from '#planner/types.ts';
 import type { Booked } from '#server/db/bookings.ts';
 import type { OpenJob, OpenStage } from '#server/db/open-jobs.ts';
-import { unitsOf } from './offers.ts';
 import type { Clock } from './clock.ts';
 import type { Roster } from './roster.ts';
+import { unitsOf } from './units.ts';
 
 /** A place of no shop: where something was done that nobody had booked. */
 export const ELSEWHERE = 'elsewhere';

@@ -1,38 +1,38 @@
 import { LEAST_PURGE_MINUTES } from '#chemistry/purge/purge-minutes.ts';
 import type { Way } from '#contracts/sheets.ts';
-import type { Mode, Phase } from '#planner/types.ts';
+import type { Mode } from '#planner/types.ts';
 import type { OpenJob, OpenStage } from '#server/db/open-jobs.ts';
 import type { PlaceSetUp, Resources } from '#server/db/resources.ts';
+import type { AirBook } from '../air/air-book.ts';
 import { heatLimitOf, heatMinutes, heatRefusedAt, heatsBooth, purgeOf, tooHot, usesLamps } from './heat.ts';
 import { withinHeatBudget } from './heat-budget.ts';
 import type { WayRefusal } from './refusals.ts';
 import type { Roster } from './roster.ts';
+import { toOffer } from './to-offer.ts';
+import { unitsOf } from './units.ts';
 
 /** Where a stage that is fixed stands: later stages may stay there. */
 export type FixedSpot = { place: PlaceSetUp | null; phases: readonly (readonly [number, number])[]; way: string };
-type Setting = {
+/** Where a plan that is judged has a stage; `phases` null: it is being moved, so they are laid anew. */
+export type ChosenSpot = { way: string; placeId: string; phases: readonly (readonly [number, number])[] | null };
+export type Setting = {
   resources: Resources;
   roster: Roster;
   fixed: ReadonlyMap<string, FixedSpot>;
   /** To judge a plan that is there: only the ways it has chosen, by stage. Null: any way, the planner chooses. */
-  chosen: ReadonlyMap<string, string> | null;
+  chosen: ReadonlyMap<string, ChosenSpot> | null;
+  air: AirBook;
 };
 
 /** The ways of one stage that are left, as the planner's modes, and why the others are not. */
 export type Offer = { modes: Mode[]; refused: Map<string, WayRefusal> };
 
 /** A way on its way to becoming a mode: the places are still being narrowed. */
-type Candidate = { way: Way; places: PlaceSetUp[]; purge: number };
-type Narrowed = { stage: OpenStage; candidates: Candidate[]; refused: Map<string, WayRefusal> };
-
-export const unitsOf = (job: OpenJob): number =>
-  Math.max(
-    1,
-    job.parts.reduce((sum, part) => sum + part.units, 0),
-  );
+export type Candidate = { way: Way; places: PlaceSetUp[]; purge: number };
+export type Narrowed = { stage: OpenStage; candidates: Candidate[]; refused: Map<string, WayRefusal> };
 
 const waysOf = (stage: OpenStage, chosen: Setting['chosen']): Way[] =>
-  chosen === null ? stage.ways : stage.ways.filter((way) => way.id === chosen.get(stage.id));
+  chosen === null ? stage.ways : stage.ways.filter((way) => way.id === chosen.get(stage.id)?.way);
 
 /** What may be done with each stage of a job that is not fixed. */
 export function offersFor(job: OpenJob, setting: Setting): Map<string, Offer> {
@@ -45,9 +45,17 @@ export function offersFor(job: OpenJob, setting: Setting): Map<string, Offer> {
     chain.push(spot ?? narrow(job, stage, refused.get(stage.id) ?? new Map<string, WayRefusal>(), chain, setting));
   }
   const offers = new Map<string, Offer>();
-  for (const link of chain) if ('stage' in link) offers.set(link.stage.id, toOffer(job, link, setting));
+  for (const [i, link] of chain.entries())
+    if ('stage' in link) offers.set(link.stage.id, toOffer(job, link, placesOf(chain[i - 1]), setting));
   return offers;
 }
+
+/** Where a stage may leave the part. */
+const placesOf = (link: Narrowed | FixedSpot | undefined): PlaceSetUp[] => {
+  if (link === undefined) return [];
+  if (!('stage' in link)) return link.place === null ? [] : [link.place];
+  return [...new Set(link.candidates.flatMap(({ places }) => places))];
+};
 
 function refusedByHeat(job: OpenJob, stage: OpenStage): Map<string, WayRefusal> {
   const limit = heatLimitOf(job);
@@ -151,76 +159,4 @@ function stayPlaces(way: Way, before: (Narrowed | FixedSpot)[]): PlaceSetUp[] | 
 function purgeNeed(way: Way, places: readonly PlaceSetUp[]): number {
   if (!heatsBooth(way) && !usesLamps(way)) return 0;
   return Math.max(LEAST_PURGE_MINUTES, ...places.map((place) => purgeOf(place) ?? 0));
-}
-
-function toOffer(job: OpenJob, { candidates, refused }: Narrowed, setting: Setting): Offer {
-  const modes = candidates.flatMap(({ way, places, purge }): Mode[] => {
-    const mode = toMode(job, way, places, purge, setting);
-    if (!('code' in mode)) return [mode];
-    refused.set(way.id, mode);
-    return [];
-  });
-  return { modes, refused };
-}
-
-function toMode(
-  job: OpenJob,
-  way: Way,
-  places: readonly PlaceSetUp[],
-  purge: number,
-  { resources, roster }: Setting,
-): Mode | WayRefusal {
-  if (places.length === 0) return { code: 'no-place', figures: [] };
-  const hands = way.phases.some((phase) => phase.attendance === 'hands');
-  const spraying = way.phases.some((phase) => phase.kind === 'spray');
-  const people = hands ? roster.who(way.skill, spraying) : [];
-  if (hands && people.length === 0)
-    return {
-      code: roster.who(way.skill, false).length > 0 ? 'no-trained-person' : 'no-person',
-      figures: [],
-      skill: way.skill ?? '',
-    };
-  const lamps = way.lampCount > 0 ? resources.lamps.filter((lamp) => !lamp.retired).map(({ id }) => id) : [];
-  if (lamps.length < way.lampCount) return { code: 'no-lamps', figures: [way.lampCount, lamps.length] };
-  const timed = withPurge(way, purge);
-  if ('code' in timed) return timed;
-  return {
-    id: way.id,
-    places: way.stay ? [] : places.map(({ id }) => id),
-    stay: way.stay,
-    people,
-    lamps,
-    lampCount: way.lampCount,
-    units: unitsOf(job),
-    family: way.family,
-    load: way.load,
-    split: way.split,
-    ...timed,
-  };
-}
-
-/**
- * A purge phase before the first heat is at least as long as the place asks. A way without one waits that long after the
- * stage before it, or, where it sprays itself, flashes that long.
- */
-function withPurge(way: Way, purge: number): Pick<Mode, 'gap' | 'phases'> | WayRefusal {
-  const phases: Phase[] = way.phases.map(({ kind, minutes, attendance, lamp, wait }) => ({
-    kind,
-    minutes,
-    attendance,
-    ...(lamp === undefined ? {} : { lamp }),
-    ...(wait === undefined ? {} : { wait }),
-  }));
-  const heat = phases.findIndex((phase) => phase.kind === 'bake' || phase.lamp === true);
-  if (purge === 0 || heat < 0) return { gap: way.gap, phases };
-  const sprayed = phases.slice(0, heat).findLastIndex((phase) => phase.kind === 'spray');
-  const between = phases.slice(sprayed + 1, heat);
-  const own =
-    between.findLast((phase) => phase.kind === 'purge') ?? between.findLast((phase) => phase.kind === 'flash');
-  if (own && (own.kind === 'purge' || sprayed >= 0)) {
-    own.minutes = Math.max(own.minutes, purge);
-    return { gap: way.gap, phases };
-  }
-  if (sprayed >= 0 || (way.gap.max !== null && way.gap.max < purge)) return { code: 'no-purge', figures: [] };
-  return { gap: { ...way.gap, min: Math.max(way.gap.min, purge) }, phases };
 }

@@ -13,7 +13,8 @@ export type WayRefusal =
   | { code: 'no-person'; figures: []; skill: string }
   | { code: 'no-trained-person'; figures: []; skill: string }
   | { code: 'no-lamps'; figures: [wanted: number, there: number] }
-  | { code: 'nothing-to-stay-on'; figures: [] };
+  | { code: 'nothing-to-stay-on'; figures: [] }
+  | { code: 'flash-past-window'; figures: [wanted: number, most: number] };
 
 // Rounded down, so that a limit never reads higher than it is.
 const degrees = (celsius: number): string => `${limitForDisplay(celsius, 1)} C`;
@@ -45,6 +46,8 @@ export function sayRefusal(refusal: WayRefusal): string {
       return `needs ${refusal.figures[0]} lamps, the shop has ${refusal.figures[1]}`;
     case 'nothing-to-stay-on':
       return 'is done where the part stands, but nothing comes before it';
+    case 'flash-past-window':
+      return `has to flash ${refusal.figures[0]} min in the air expected there, past the ${refusal.figures[1]} min of its window`;
   }
 }
 
