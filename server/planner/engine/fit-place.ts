@@ -1,5 +1,6 @@
 import { firstAfter } from './calendar.ts';
 import type { Ask, Fit } from './fit.ts';
+import { fixedTogether } from './load-mates.ts';
 import { BOOTH, RACK } from './shop.ts';
 import type { State } from './state.ts';
 import { firstEnding, firstReaching, type Track } from './track.ts';
@@ -66,9 +67,10 @@ function cleanFrees(state: State, ask: Ask, track: Track, from: number, to: numb
   const next = firstEnding(track, from);
   for (let i = next - 1; i >= 0 && track.to[i]! + longestCleanup > start; i--) {
     const other = track.a[i]!;
-    const own = track.b[i]! >> 1 === ask.stage - 1; // where it stays, what stood there is its own previous stage
-    if (other < 0 || (track.b[i]! & 1) === 1 || (own && ask.stayFrom >= 0)) continue;
-    const clean = track.to[i]! + cleanup[other * families + family]!;
+    if (other < 0 || (track.b[i]! & 1) === 1) continue;
+    const own = isPrevious(state, ask.stage, track.b[i]! >> 1);
+    if (own && ask.stayFrom >= 0) continue; // where it stays, what stood there is its own previous stage
+    const clean = track.to[i]! + (own ? settleBefore(state, ask) : 0) + cleanup[other * families + family]!;
     if (clean > start) return Math.max(clean, from + 1);
   }
   if (ask.goesOn) return from;
@@ -79,3 +81,12 @@ function cleanFrees(state: State, ask: Ask, track: Track, from: number, to: numb
   }
   return from;
 }
+
+/** Whether `other` is the stage before, or was fixed in one load with it. */
+function isPrevious({ shop }: State, stage: number, other: number): boolean {
+  if (stage === shop.jobs[shop.stageJob[stage]!]!.first) return false;
+  return other === stage - 1 || (shop.fixedAt[stage - 1]! >= 0 && fixedTogether(shop, other, stage - 1));
+}
+
+/** A fixed stage's use does not know yet for how long it has to settle before this one. */
+const settleBefore = ({ shop }: State, { stage, way }: Ask): number => (shop.fixedAt[stage - 1]! >= 0 ? way.settle : 0);

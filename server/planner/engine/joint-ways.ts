@@ -65,12 +65,12 @@ const areAlike = (a: Mode, b: Mode): boolean =>
   a.phases.length === b.phases.length &&
   a.phases.every((p, k) => alikePhases(p, b.phases[k]!));
 
-/** Whether two ways could be one load in this place (-1: in any), without making its way. */
+/** Whether two ways could be one load in this place (-1: in any, or where they stay), without making its way. */
 export const mayJoin = (shop: Shop, a: Way, b: Way, place: number): boolean =>
   areAlike(a.mode, b.mode) &&
   (place >= 0
     ? a.units + b.units <= shop.placeUnits[place]!
-    : a.places.some((p) => b.places.includes(p) && a.units + b.units <= shop.placeUnits[p]!));
+    : a.stay || a.places.some((p) => b.places.includes(p) && a.units + b.units <= shop.placeUnits[p]!));
 
 const alikePhases = (p: Phase, q: Phase): boolean =>
   p.kind === q.kind && p.attendance === q.attendance && (p.lamp ?? false) === (q.lamp ?? false);

@@ -186,10 +186,14 @@ function placeFixed(state: State): void {
   const stage = new Map(shop.stageIds.map((id, s) => [id, s]));
   for (const f of byStart) fillFixed(state, stage.get(f.stage)!, f);
   // Holds reach to the next stage, so every fixed stage must be filled in before any is entered.
-  const loads = new Set<string>();
+  const leads = new Map<string, number>();
+  for (const f of byStart) holdFixed(state, stage.get(f.stage)!, f.load, leads);
   for (const f of byStart) {
-    enterFixed(state, stage.get(f.stage)!, f.load !== null && loads.has(f.load));
-    if (f.load !== null) loads.add(f.load);
+    const s = stage.get(f.stage)!;
+    const lead = f.load === null ? s : leads.get(f.load)!;
+    state.at.holdTo[s] = Math.max(state.at.holdTo[s]!, state.at.holdTo[lead]!);
+    state.at.goesOn[s] = Math.max(state.at.goesOn[s]!, state.at.goesOn[lead]!);
+    enterClipped(state, s, state.at.way[s]!, lead !== s);
   }
 }
 
@@ -211,16 +215,20 @@ function fillFixed(state: State, s: number, f: Assignment): void {
   f.lamps.forEach((id, k) => (at.lamps[s * shop.maxLamps + k] = lamps.findIndex((l) => l.id === id)));
 }
 
-function enterFixed(state: State, s: number, joins: boolean): void {
+/** How long a fixed stage holds its place. The first of its load, in `leads`, holds as long as any of them. */
+function holdFixed(state: State, s: number, load: string | null, leads: Map<string, number>): void {
   const { shop, at } = state;
-  const way = at.way[s]!;
   const next = s + 1;
   if (s < shop.jobs[shop.stageJob[s]!]!.last && shop.fixedAt[next]! >= 0) {
     const onward = at.way[next]!;
     at.holdTo[s] = onward.stay ? Math.max(at.end[s]!, at.start[next]!) : at.end[s]! + onward.settle;
     at.goesOn[s] = onward.stay ? 1 : 0;
   }
-  enterClipped(state, s, way, joins);
+  if (load === null) return;
+  const lead = leads.get(load) ?? s;
+  leads.set(load, lead);
+  at.holdTo[lead] = Math.max(at.holdTo[lead]!, at.holdTo[s]!);
+  at.goesOn[lead] = Math.max(at.goesOn[lead]!, at.goesOn[s]!);
 }
 
 /** Like `enter`, cutting off what exclusive tracks already hold. One that joins a load draws no current of its own. */
