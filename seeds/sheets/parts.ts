@@ -44,15 +44,16 @@ export const bumper: SheetSeed = {
       minutes: 6,
       flash: 10,
       family: 'primer',
-      gap: { min: 10, max: 60, settle: 10, source: 'recoat' },
+      // Five minutes short of the window: the set-up comes before the coat.
+      gap: { min: 10, max: 55, settle: 10, source: 'next' },
     }),
     primerCure(),
     withOption('second-bake', handwork('open-up', 'prep', 'Open up with P400', { minutes: 20 })),
     withOption(
       'second-bake',
       cure('second-bake', 'Bake primer again', 'primer', [
-        lampCure({ minutes: 20, celsius: 60, gap: { min: 0, max: null, settle: 0 } }),
-        airDry({ minutes: 120, gap: { min: 0, max: null, settle: 0 } }),
+        lampCure({ minutes: 20, celsius: 60, own: true, gap: { min: 3, max: null, settle: 0 } }),
+        airDry({ minutes: 120, own: true, gap: { min: 0, max: null, settle: 0 } }),
       ]),
     ),
     // Overnight: what the primer still gives off would show as sand scratches later.
@@ -62,7 +63,7 @@ export const bumper: SheetSeed = {
       setup: 15,
       coats: 4,
       minutes: 5,
-      flash: 8,
+      flash: 10,
       family: 'colour',
       places: ['booth'],
       gap: { min: 0, max: 1440, settle: 0 },
@@ -95,7 +96,7 @@ export const smallParts: SheetSeed = {
       setup: 10,
       coats: 3,
       minutes: 4,
-      flash: 8,
+      flash: 10,
       family: 'colour',
       places: ['booth'],
       load: 'small-colour',
@@ -133,7 +134,7 @@ export const electricDoor: SheetSeed = {
       places: ['prep', 'booth'],
     }),
     cure('primer-cure', 'Primer cure, low heat', 'primer', [
-      lampCure({ minutes: 30, celsius: 45, gap: afterPrimer }),
+      lampCure({ minutes: 30, celsius: 45, own: true, gap: afterPrimer }),
       airDry({ minutes: 180, gap: afterPrimer }),
     ]),
     handwork('block', 'block', 'Block-sand', { minutes: 45 }),

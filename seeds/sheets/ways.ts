@@ -45,6 +45,17 @@ const stage = (given: Pick<StageSeed, 'key' | 'kind' | 'title' | 'ways'> & Parti
   ...given,
 });
 export const withOption = (option: string, given: StageSeed): StageSeed => ({ ...given, option });
+export const unlessOption = (option: string, given: StageSeed): StageSeed => ({ ...given, unlessOption: option });
+
+/** One stage with the ways of several, each under its own condition: the options choose among them. */
+export const eitherWay = (first: StageSeed, ...others: { ways: Way[] }[]): StageSeed => ({
+  ...first,
+  ways: [...first.ways, ...others.flatMap(({ ways }) => ways)],
+});
+export const waysWith = (given: StageSeed, part: Partial<Way>): StageSeed => ({
+  ...given,
+  ways: given.ways.map((way) => ({ ...way, ...part })),
+});
 
 type Work = { minutes: number; skill?: string; gap?: Gap };
 
@@ -73,6 +84,12 @@ const coats = (count: number, spray: number, flash: number): Phase[] =>
     ...(i < count - 1 ? [hands('flash', flash, { source: 'flash-between' })] : []),
   ]).flat();
 
+const extraCoat = (option: string, spray: number, flash: number): Phase[] =>
+  [hands('flash', flash, { source: 'flash-between' }), hands('spray', spray, { source: 'coat' })].map((phase) => ({
+    ...phase,
+    perExtraCoat: option,
+  }));
+
 type Spraying = {
   coating: string;
   setup: number;
@@ -84,6 +101,8 @@ type Spraying = {
   places?: Way['placeKinds'];
   gap?: Gap;
   load?: string;
+  /** Option by which coats are added, each with its flash before it. */
+  extra?: string;
 };
 
 export const spraying = (key: string, title: string, given: Spraying): StageSeed =>
@@ -106,6 +125,7 @@ export const spraying = (key: string, title: string, given: Spraying): StageSeed
         phases: [
           ...(given.setup > 0 ? [hands('setup', given.setup)] : []),
           ...coats(given.coats, given.minutes, given.flash),
+          ...(given.extra === undefined ? [] : extraCoat(given.extra, given.minutes, given.flash)),
         ],
       },
     ],
@@ -124,8 +144,14 @@ export const boothBake = (given: { minutes: number; celsius: number; load?: stri
   phases: [alone('purge', 5), onsite('bake', given.minutes, { source: 'bake' }), alone('cool', 15)],
 });
 
-/** Under one or two lamps at a prep station. */
-export const lampCure = (given: { minutes: number; celsius: number; lamps?: number; gap: Gap }): Way => ({
+/** Under one or two lamps at a prep station. `own`: minutes of the shop's, not of the data sheet. */
+export const lampCure = (given: {
+  minutes: number;
+  celsius: number;
+  lamps?: number;
+  gap: Gap;
+  own?: boolean;
+}): Way => ({
   ...plain,
   id: 'lamp',
   label: given.lamps === 2 ? 'Two lamps' : 'Lamp',
@@ -133,16 +159,19 @@ export const lampCure = (given: { minutes: number; celsius: number; lamps?: numb
   lampCount: given.lamps ?? 1,
   gap: given.gap,
   bakeCelsius: given.celsius,
-  phases: [onsite('bake', given.minutes, { lamp: true, source: 'lamp-short' }), alone('cool', 15)],
+  phases: [
+    onsite('bake', given.minutes, { lamp: true, ...(given.own ? {} : { source: 'lamp-short' }) }),
+    alone('cool', 15),
+  ],
 });
 
-export const airDry = (given: { minutes: number; gap: Gap }): Way => ({
+export const airDry = (given: { minutes: number; gap: Gap; own?: boolean }): Way => ({
   ...plain,
   id: 'air',
   label: 'Air dry',
   placeKinds: ['rack', 'prep'],
   gap: given.gap,
-  phases: [alone('flash', given.minutes, { source: 'air' })],
+  phases: [alone('flash', given.minutes, given.own ? {} : { source: 'air' })],
 });
 
 export const cure = (key: string, title: string, coating: string, ways: Way[]): StageSeed =>

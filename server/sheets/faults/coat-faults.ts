@@ -19,7 +19,8 @@ export function coatFaults(stage: SettledStage, way: Way, coating: Coating): Fou
     ...(coats > 0 && (coats < from || coats > to)
       ? [at.warn('coats-off-sheet', 'phases', { names: [name], figures: [coats, from, to] })]
       : []),
-    ...(coats > 1 && shortest < sheet.flashBetweenCoats
+    // A flash that says it comes from the sheet is told of by `sheet-differs` already.
+    ...(coats > 1 && shortest < sheet.flashBetweenCoats && !way.phases.some(({ source }) => source === 'flash-between')
       ? [at.warn('flash-short', 'phases', { names: [name], figures: [shortest, sheet.flashBetweenCoats] })]
       : []),
     ...(coats > 0 && outlives(mix, sheet.potLife)
