@@ -1,5 +1,7 @@
 import * as z from 'zod';
-import { id, inShop, name } from './common.ts';
+import { attachment } from './attachments.ts';
+import { id, inShop, instant, name } from './common.ts';
+import { csvExport, csvImport, csvReport } from './csv.ts';
 import { endpoint } from './endpoint.ts';
 
 /** As `minutes` of a process sheet: two weeks at most. */
@@ -113,10 +115,104 @@ export const emptySheet: CoatingSheet = {
 export const coating = z.strictObject({ id, name, kind: coatingKind, sheet: coatingSheet });
 export type Coating = z.output<typeof coating>;
 
+export const inCoating = inShop.extend({ coatingId: id });
+
+/** For use: the data sheets that are not retired. */
 export const listCoatings = endpoint({
   name: 'list-coatings',
   method: 'GET',
   path: '/api/shops/:shopId/coatings',
   params: inShop,
   reply: z.strictObject({ coatings: z.array(coating) }),
+});
+
+/** A data sheet as its page shows it. */
+export const coatingDetail = coating.extend({
+  version: z.number().int(),
+  retiredAt: instant.nullable(),
+  /** The maker's own sheet, as a file. */
+  document: attachment.nullable(),
+  /** Process sheets in use whose newest version names it. */
+  usedBy: z.array(z.strictObject({ id, name: z.string() })),
+});
+export type CoatingDetail = z.output<typeof coatingDetail>;
+
+/** For keeping them: by name, those in use or those that are retired. */
+export const surveyCoatings = endpoint({
+  name: 'survey-coatings',
+  method: 'GET',
+  path: '/api/shops/:shopId/coating-survey',
+  params: inShop,
+  query: z.strictObject({ retired: z.enum(['no', 'yes']).default('no') }),
+  reply: z.strictObject({ coatings: z.array(coatingDetail) }),
+});
+
+export const readCoating = endpoint({
+  name: 'read-coating',
+  method: 'GET',
+  path: '/api/shops/:shopId/coatings/:coatingId',
+  params: inCoating,
+  reply: coatingDetail,
+});
+
+const fields = { name, kind: coatingKind, sheet: coatingSheet };
+
+/** The id is made by the browser, so that sending twice makes one. */
+export const newCoating = z.strictObject({ id, ...fields });
+export const createCoating = endpoint({
+  name: 'create-coating',
+  method: 'POST',
+  path: '/api/shops/:shopId/coatings',
+  params: inShop,
+  body: newCoating,
+  reply: coatingDetail,
+});
+
+/** `retired` takes it out of use or brings it back. What says the same as before changes nothing. */
+export const coatingChange = z.strictObject({
+  version: z.number().int(),
+  name: name.optional(),
+  kind: coatingKind.optional(),
+  sheet: coatingSheet.optional(),
+  retired: z.boolean().optional(),
+});
+export const changeCoating = endpoint({
+  name: 'change-coating',
+  method: 'PATCH',
+  path: '/api/shops/:shopId/coatings/:coatingId',
+  params: inCoating,
+  body: coatingChange,
+  reply: coatingDetail,
+});
+
+export const exportCoatings = endpoint({
+  name: 'export-coatings',
+  method: 'GET',
+  path: '/api/shops/:shopId/coatings-csv',
+  params: inShop,
+  reply: csvExport,
+});
+export const importCoatings = endpoint({
+  name: 'import-coatings',
+  method: 'POST',
+  path: '/api/shops/:shopId/coating-imports',
+  params: inShop,
+  body: csvImport,
+  reply: csvReport,
+});
+
+export const uploadDataSheet = {
+  name: 'upload-data-sheet',
+  method: 'POST',
+  path: '/api/shops/:shopId/coatings/:coatingId/document',
+  params: inCoating,
+  reply: coatingDetail,
+} as const;
+
+export const removeDataSheet = endpoint({
+  name: 'remove-data-sheet',
+  method: 'DELETE',
+  path: '/api/shops/:shopId/coatings/:coatingId/document',
+  params: inCoating,
+  reply: coatingDetail,
 });

@@ -5,6 +5,7 @@ import { notFound } from './errors.ts';
 import { airRoutes } from './http/air.ts';
 import { apiKeyRoutes } from './http/api-keys.ts';
 import { benchRoutes } from './http/bench.ts';
+import { coatingRoutes } from './http/coatings.ts';
 import { refuseOtherSites } from './http/csrf.ts';
 import { dayRoutes } from './http/day.ts';
 import { draftRoutes } from './http/drafts.ts';
@@ -33,6 +34,7 @@ import { makeHub } from './realtime/hub.ts';
 const nouns: ((routes: Routes, deps: Deps) => void)[] = [
   jobRoutes,
   sheetRoutes,
+  coatingRoutes,
   dayRoutes,
   draftRoutes,
   benchRoutes,

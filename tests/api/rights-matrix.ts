@@ -80,6 +80,14 @@ export const rights: Readonly<Record<string, Row>> = {
   'import-sheet': sheetKeepers,
   'export-sheets': everyone,
   'list-coatings': everyone,
+  'survey-coatings': everyone,
+  'read-coating': everyone,
+  'create-coating': sheetKeepers,
+  'change-coating': sheetKeepers,
+  'export-coatings': everyone,
+  'import-coatings': sheetKeepers,
+  'touched-by-coating': everyone,
+  'retime-with-coating': sheetKeepers,
 
   'read-day': everyone,
   'open-draft': planners,
@@ -124,7 +132,7 @@ export const rights: Readonly<Record<string, Row>> = {
 
 /** Ids of rows that the test makes in another shop; the same names stand in paths. */
 export type ForeignIds = Record<
-  'jobId' | 'stageId' | 'memberId' | 'runId' | 'sheetId' | 'placeId' | 'personId' | 'zoneId' | 'keyId',
+  'jobId' | 'stageId' | 'memberId' | 'runId' | 'sheetId' | 'placeId' | 'personId' | 'zoneId' | 'keyId' | 'coatingId',
   string
 >;
 
@@ -196,6 +204,10 @@ export const withForeignIds: Readonly<Record<string, (ids: ForeignIds) => { body
   'change-job': () => ({ body: { version: 1, title: 'Mine now' } }),
   'withdraw-job': () => ({ body: { version: 1 } }),
   'move-stage': ({ placeId }) => ({ body: { version: 1, start: '2026-03-11T13:00:00Z', placeId } }),
+  'read-coating': () => ({}),
+  'change-coating': () => ({ body: { version: 1, name: 'Mine now' } }),
+  'touched-by-coating': () => ({}),
+  'retime-with-coating': ({ sheetId, jobId }) => ({ body: { version: 1, sheetIds: [sheetId], jobIds: [jobId] } }),
   'read-plan-run': () => ({}),
   'stop-plan-run': () => ({ body: {} }),
   'read-bench': ({ personId }) => ({ query: `?personId=${personId}` }),

@@ -1,8 +1,10 @@
 import { randomUUID } from 'node:crypto';
 import type { Knex } from 'knex';
 import type { Role, Substrate } from '#contracts/common.ts';
+import { emptySheet, type Coating } from '#contracts/coatings.ts';
 import type { NewJob } from '#contracts/jobs.ts';
 import type { SheetBody, Way } from '#contracts/sheets.ts';
+import { insertCoating } from '#server/db/coatings.ts';
 import { inShop } from '#server/db/in-shop.ts';
 import { insertJob, takeJobNumber } from '#server/db/jobs.ts';
 import { insertSheet } from '#server/db/sheets.ts';
@@ -135,6 +137,14 @@ export async function aSheet(db: Knex, shop: { id: string }, body = aSheetBody()
   return id;
 }
 
+export async function aCoating(db: Knex, shop: { id: string }, given: Partial<Coating> = {}): Promise<string> {
+  const id = given.id ?? randomUUID();
+  await inShop(db, { shopId: shop.id, accountId: null }, (trx) =>
+    insertCoating(trx, shop.id, { name: 'Coating', kind: 'clear', sheet: emptySheet, ...given, id }),
+  );
+  return id;
+}
+
 export type TestJob = { id: string; number: number; stages: string[] };
 export type TestJobInput = {
   title?: string;
@@ -142,7 +152,7 @@ export type TestJobInput = {
   releaseAt?: Date;
   promiseAt?: Date | null;
   parts?: { name: string; substrate: Substrate; units: number }[];
-  stages?: { title?: string; kind?: string; ways?: Way[] }[];
+  stages?: { title?: string; kind?: string; coatingId?: string | null; ways?: Way[] }[];
 };
 
 /** A job of two stages of an hour each unless said otherwise. */
@@ -152,6 +162,7 @@ export async function aJob(db: Knex, shop: { id: string }, given: TestJobInput =
     id: randomUUID(),
     kind: stage.kind ?? 'prep',
     title: stage.title ?? `Stage ${i + 1}`,
+    coatingId: stage.coatingId ?? null,
     ways: stage.ways ?? [aWay()],
   }));
   return inShop(db, { shopId: shop.id, accountId: null }, async (trx) => {
