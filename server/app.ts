@@ -11,6 +11,7 @@ import { dayRoutes } from './http/day.ts';
 import { draftRoutes } from './http/drafts.ts';
 import { errorHandler } from './http/error-handler.ts';
 import { healthRoutes } from './http/health.ts';
+import { hoursRoutes } from './http/hours.ts';
 import { jobRoutes } from './http/jobs.ts';
 import { makeLimits } from './http/limits.ts';
 import { linkRoutes } from './http/links.ts';
@@ -18,6 +19,7 @@ import { liveRoutes } from './http/live.ts';
 import { mailboxRoutes } from './http/mailbox.ts';
 import { memberRoutes } from './http/members.ts';
 import { pages } from './http/pages.ts';
+import { lampRoutes, placeRoutes } from './http/places.ts';
 import { peopleRoutes } from './http/people.ts';
 import { makePassport, readAccount } from './http/passport.ts';
 import { readingsDoor } from './http/readings-door.ts';
@@ -26,7 +28,9 @@ import { Routes, type Route } from './http/route.ts';
 import { neverStore, securityHeaders } from './http/security.ts';
 import { sessionRoutes } from './http/session.ts';
 import { sessionStore, sessionTimeouts } from './http/session-store.ts';
+import { shopRoutes } from './http/shop-settings.ts';
 import { sheetRoutes } from './http/sheets.ts';
+import { upkeepRoutes } from './http/upkeep.ts';
 import { useRoutes } from './http/use.ts';
 import { makeHub } from './realtime/hub.ts';
 
@@ -43,6 +47,11 @@ const nouns: ((routes: Routes, deps: Deps) => void)[] = [
   airRoutes,
   apiKeyRoutes,
   peopleRoutes,
+  placeRoutes,
+  lampRoutes,
+  hoursRoutes,
+  upkeepRoutes,
+  shopRoutes,
 ];
 
 export type App = {

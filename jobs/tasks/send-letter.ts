@@ -3,6 +3,7 @@ import type { Trx } from '#server/db/in-shop.ts';
 import type { LetterRow } from '#server/db/letters.ts';
 import { findLetterShop, findReader } from '#server/db/readers.ts';
 import { planChangedLetter } from '#server/mail/letters/plan-changed.tsx';
+import { testLetter } from '#server/mail/letters/test-letter.tsx';
 import { linkTo } from '#server/mail/links.ts';
 import type { Letter } from '#server/mail/mailer.ts';
 import { GiveUp, type JobDeps, type TaskFunction } from '../task-function.ts';
@@ -28,13 +29,15 @@ export const sendLetter: TaskFunction = (deps, task) =>
 
 /** Null where the reader has left the shop. */
 async function compose(deps: JobDeps, trx: Trx, shopId: string, letter: LetterRow): Promise<Letter | null> {
-  if (letter.kind !== 'plan-changed') throw new GiveUp(`no letter of kind ${letter.kind}`);
   const shop = await findLetterShop(trx, shopId);
   const reader = letter.accountId === null ? undefined : await findReader(trx, shopId, letter.accountId);
   if (!shop || (reader && !reader.isMember)) return null;
+  const name = reader?.name ?? letter.to;
+  if (letter.kind === 'test') return testLetter({ name, shopName: shop.name, link: linkTo(deps.config).settings() });
+  if (letter.kind !== 'plan-changed') throw new GiveUp(`no letter of kind ${letter.kind}`);
   return planChangedLetter({
     ...planChanged.parse(letter.data),
-    name: reader?.name ?? letter.to,
+    name,
     shopName: shop.name,
     timeZone: shop.timeZone,
     clock: reader?.clock ?? '24',

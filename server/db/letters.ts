@@ -19,9 +19,11 @@ export type PlanChangedData = {
   }[];
 };
 export type InvitationData = { invitationId: string };
+/** Sent to who asks for it, to see that letters arrive. */
+export type TestData = { askedAt: string };
 
 /** Kinds of letters a shop sends and what each is made of. Names, zone and clock of the reader are looked up when sent. */
-export type LetterData = { 'plan-changed': PlanChangedData; invitation: InvitationData };
+export type LetterData = { 'plan-changed': PlanChangedData; invitation: InvitationData; test: TestData };
 export type LetterKind = keyof LetterData;
 
 /**

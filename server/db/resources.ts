@@ -95,7 +95,7 @@ const SET_UP = `
         'objective', objective, 'changeSeq', change_seq, 'planNumber', plan_number)
       from shop where id = :shopId) as shop,
     (select coalesce(json_agg(json_build_object('id', id, 'name', name) order by name), '[]')
-      from zone where shop_id = :shopId) as zones,
+      from zone where shop_id = :shopId and retired_at is null) as zones,
     (select coalesce(json_agg(json_build_object('id', id, 'kind', kind, 'name', name, 'zoneId', zone_id,
         'units', units, 'bakes', bakes, 'bakeLimitCelsius', bake_limit_celsius, 'volumeM3', volume_m3,
         'airFlowM3PerHour', air_flow_m3_per_hour, 'clearanceMinutes', clearance_minutes,

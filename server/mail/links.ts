@@ -4,5 +4,6 @@ import type { Config } from '../config.ts';
 export const linkTo = (config: Config) => ({
   reset: (token: string) => `${config.PUBLIC_URL}/password-reset#${token}`,
   invitation: (token: string) => `${config.PUBLIC_URL}/invitation#${token}`,
+  settings: () => `${config.PUBLIC_URL}/shop/settings`,
   bench: () => `${config.PUBLIC_URL}/bench`,
 });

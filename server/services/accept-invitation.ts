@@ -3,6 +3,7 @@ import { findAccount, findAccountByEmail, insertAccount, setPasswordHash, type A
 import { recordChange } from '../db/changes.ts';
 import { inShop, type Trx } from '../db/in-shop.ts';
 import { putMember } from '../db/members.ts';
+import { giveShopUnits } from '../db/shop.ts';
 import { findOpenInvitation, useInvitation } from '../db/tokens.ts';
 import type { Deps } from '../deps.ts';
 import { Refusal } from '../errors.ts';
@@ -28,6 +29,7 @@ export async function acceptInvitation(deps: Deps, given: Given): Promise<Accoun
   return inShop(deps.db, { shopId, accountId }, async (trx) => {
     if (!(await useInvitation(trx, hash, deps.now()))) throw new Refusal('gone');
     await putAccount(trx, { id: accountId, email, name: given.name, passwordHash }, existing !== undefined);
+    if (!existing) await giveShopUnits(trx, shopId, accountId);
     await putMember(trx, shopId, { id: uuid(), accountId, role, personId });
     await recordChange(trx, { shopId, accountId }, { kind: 'member-changed', ids: [accountId], detail: { role } });
     const account = await findAccount(trx, accountId);

@@ -25,6 +25,8 @@ type ServiceCode =
   | 'previous-not-done'
   | 'not-started'
   | 'last-owner'
+  | 'dew-point'
+  | 'flash-past-window'
   | 'still-booked'
   | 'still-used-by';
 
@@ -132,7 +134,11 @@ const texts: Record<ViolationCode | ServiceCode, Say> = {
   'not-started': () => 'It has not been started.',
   'still-booked': ({ names, at }) => `${names(0)} has posted work: ${names(1)}, ${at(0)}.`,
   'still-used-by': ({ names, count }) =>
-    `${names(0)} is still used by ${names(1)}${count > 1 ? ` and ${count - 1} more` : ''}.`,
+    `${names(0)} is still used by ${names(1)}${count > 2 ? ` and ${count - 2} more` : ''}.`,
+  'flash-past-window': ({ names, minutes }, f) =>
+    `${names(0)} has to flash ${f.duration(minutes(0))} in the air expected there, past the ${f.duration(minutes(1))} of its window.`,
+  'dew-point': ({ names, at, minutes }, f) =>
+    `Too near the dew point to spray${names(0) ? ` in ${names(0)}` : ''}: at ${at(0)} it was ${f.temperature(minutes(0))} and ${Math.round(minutes(1))} %, dew point ${f.temperature(minutes(3))}; the surface${minutes(6) === 1 ? '' : ', taken to be as warm as the air,'} is ${f.temperature(minutes(2))}, ${minutes(4).toFixed(1)} C over it, and needs ${minutes(5).toFixed(1)} C. Warm the part or dry the air, and measure again.`,
   'last-owner': ({ names }) => `${names(0)} is the only owner. Make somebody else an owner first.`,
 };
 

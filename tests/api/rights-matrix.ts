@@ -1,3 +1,5 @@
+import { setUpWithForeignIds } from './foreign-set-up.ts';
+
 /**
  * Who may do what, as data. A new route needs a row here.
  *
@@ -128,11 +130,66 @@ export const rights: Readonly<Record<string, Row>> = {
   'import-people': owners,
   'export-absences': planners,
   'import-absences': planners,
+
+  'list-places': everyone,
+  'create-place': owners,
+  'change-place': owners,
+  'retire-place': owners,
+  'bring-back-place': owners,
+  'order-places': owners,
+  'create-zone': owners,
+  'change-zone': owners,
+  'remove-zone': owners,
+  'export-places': everyone,
+  'import-places': owners,
+  'list-lamps': everyone,
+  'create-lamp': owners,
+  'change-lamp': owners,
+  'retire-lamp': owners,
+  'bring-back-lamp': owners,
+  'order-lamps': owners,
+  'create-circuit': owners,
+  'change-circuit': owners,
+  'remove-circuit': owners,
+  'export-lamps': everyone,
+  'import-lamps': owners,
+  'read-hours': everyone,
+  'set-week': owners,
+  'add-opening': owners,
+  'remove-opening': owners,
+  'create-closure': planners,
+  'change-closure': planners,
+  'remove-closure': planners,
+  'export-closures': everyone,
+  'import-closures': planners,
+  'list-filters': everyone,
+  'create-filter': owners,
+  'change-filter': owners,
+  'add-filter-entry': stageWorkers,
+  'remove-filter-entry': planners,
+  'read-shop': planners,
+  'change-shop': owners,
+  'send-test-letter': owners,
 };
 
 /** Ids of rows that the test makes in another shop; the same names stand in paths. */
 export type ForeignIds = Record<
-  'jobId' | 'stageId' | 'memberId' | 'runId' | 'sheetId' | 'placeId' | 'personId' | 'zoneId' | 'keyId' | 'coatingId',
+  | 'jobId'
+  | 'stageId'
+  | 'memberId'
+  | 'runId'
+  | 'sheetId'
+  | 'placeId'
+  | 'personId'
+  | 'zoneId'
+  | 'keyId'
+  | 'coatingId'
+  | 'lampId'
+  | 'circuitId'
+  | 'openingId'
+  | 'closureId'
+  | 'filterId'
+  | 'entryId',
   string
 >;
 
@@ -231,4 +288,5 @@ export const withForeignIds: Readonly<Record<string, (ids: ForeignIds) => { body
   }),
   'change-zone-air': () => ({ body: { version: 0, source: 'latest', schedule: [] } }),
   'revoke-api-key': () => ({ body: {} }),
+  ...setUpWithForeignIds,
 };

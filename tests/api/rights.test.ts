@@ -44,7 +44,7 @@ afterAll(async () => {
   await database.drop();
 });
 
-async function rowsOf(shop: { id: string; booth: string }, memberId: string): Promise<ForeignIds> {
+async function rowsOf(shop: { id: string; booth: string; lamp: string }, memberId: string): Promise<ForeignIds> {
   const job = await aJob(app.deps.db, shop);
   const runId = uuid();
   const [zoneId, keyId] = [uuid(), uuid()];
@@ -64,7 +64,24 @@ async function rowsOf(shop: { id: string; booth: string }, memberId: string): Pr
     zoneId,
     keyId,
     coatingId: await aCoating(app.deps.db, shop),
+    ...(await setUpOf(shop)),
   };
+}
+
+/** Lamps, hours and filters of another shop. */
+async function setUpOf(shop: { id: string; booth: string; lamp: string }) {
+  const [closureId, filterId, entryId] = [uuid(), uuid(), uuid()];
+  const inIt = { shop_id: shop.id };
+  const circuit = await app.owner('circuit').where(inIt).first<{ id: string }>('id');
+  const opening = await app.owner('opening').where(inIt).first<{ id: string }>('id');
+  await app
+    .owner('closure')
+    .insert({ ...inIt, id: closureId, kind: 'closure', starts_local: '2026-03-11T07:00', minutes: 60 });
+  await app.owner('filter').insert({ ...inIt, id: filterId, place_id: shop.booth, name: 'Exhaust' });
+  await app
+    .owner('filter_entry')
+    .insert({ ...inIt, id: entryId, filter_id: filterId, kind: 'change', at: app.clock.now });
+  return { lampId: shop.lamp, circuitId: circuit.id, openingId: opening.id, closureId, filterId, entryId };
 }
 
 type Sent = { method: string; body?: object | undefined };

@@ -25,6 +25,7 @@ const states: Record<State, { word: string; tone: Tone }> = {
 };
 const kinds: Record<string, string> = {
   invitation: 'Invitation',
+  test: 'Test letter',
   'plan-changed': 'Plan has changed',
   reset: 'New password',
 };
