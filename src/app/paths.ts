@@ -15,6 +15,7 @@ export const paths = {
   use: (search?: Search) => withSearch('/use', search),
   cure: (search?: Search) => withSearch('/cure', search),
   account: () => '/account',
+  people: () => '/shop/people',
   members: () => '/shop/members',
   letters: () => '/shop/letters',
   mailbox: (letterId?: string) => withSearch('/mailbox', letterId === undefined ? undefined : { letter: letterId }),

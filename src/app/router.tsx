@@ -16,6 +16,7 @@ const atDesk: RouteObject[] = [
   {
     lazy: () => import('#src/features/shop/shop-layout.tsx'),
     children: [
+      { path: '/shop/people', lazy: () => import('#src/features/shop/people/people-page.tsx') },
       { path: '/shop/members', lazy: () => import('#src/features/account/members-page.tsx') },
       { path: '/shop/letters', lazy: () => import('#src/features/account/letters-page.tsx') },
     ],

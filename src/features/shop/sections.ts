@@ -7,6 +7,10 @@ type Group = { title: string; sections: Section[] };
 /** The set-up in the order in which a shop thinks of it. A new page is one line here and one in the router. */
 export const groups: Group[] = [
   {
+    title: 'Who works here',
+    sections: [{ to: '/shop/people', label: 'People', seen: may.plan }],
+  },
+  {
     title: 'Who signs in',
     sections: [
       { to: '/shop/members', label: 'Members', seen: may.setUp },
