@@ -16,6 +16,16 @@ export const paths = {
   cure: (search?: Search) => withSearch('/cure', search),
   account: () => '/account',
   people: () => '/shop/people',
+  places: () => '/shop/places',
+  lamps: () => '/shop/lamps',
+  hours: () => '/shop/hours',
+  upkeep: () => '/shop/upkeep',
+  settings: () => '/shop/settings',
+  sheets: () => '/shop/sheets',
+  /** `copyOf`: the sheet it begins like. */
+  newSheet: (copyOf?: string) => withSearch('/shop/sheets/new', copyOf === undefined ? undefined : { copy: copyOf }),
+  sheet: (sheetId: string, stage?: string) =>
+    withSearch(`/shop/sheets/${sheetId}`, stage === undefined ? undefined : { stage }),
   members: () => '/shop/members',
   letters: () => '/shop/letters',
   mailbox: (letterId?: string) => withSearch('/mailbox', letterId === undefined ? undefined : { letter: letterId }),

@@ -16,7 +16,15 @@ const atDesk: RouteObject[] = [
   {
     lazy: () => import('#src/features/shop/shop-layout.tsx'),
     children: [
+      { path: '/shop/places', lazy: () => import('#src/features/shop/places/places-page.tsx') },
+      { path: '/shop/lamps', lazy: () => import('#src/features/shop/lamps/lamps-page.tsx') },
+      { path: '/shop/hours', lazy: () => import('#src/features/shop/hours/hours-page.tsx') },
+      { path: '/shop/upkeep', lazy: () => import('#src/features/shop/upkeep/upkeep-page.tsx') },
+      { path: '/shop/settings', lazy: () => import('#src/features/shop/settings/settings-page.tsx') },
       { path: '/shop/people', lazy: () => import('#src/features/shop/people/people-page.tsx') },
+      { path: '/shop/sheets', lazy: () => import('#src/features/shop/sheets/sheets-page.tsx') },
+      { path: '/shop/sheets/new', lazy: () => import('#src/features/shop/sheets/new-sheet-page.tsx') },
+      { path: '/shop/sheets/:sheetId', lazy: () => import('#src/features/shop/sheets/sheet-page.tsx') },
       { path: '/shop/members', lazy: () => import('#src/features/account/members-page.tsx') },
       { path: '/shop/letters', lazy: () => import('#src/features/account/letters-page.tsx') },
     ],
