@@ -2,11 +2,12 @@ import type { Trx } from '#server/db/in-shop.ts';
 import { insertJob, takeJobNumber } from '#server/db/jobs.ts';
 import { insertStages } from '#server/db/stages.ts';
 import { expandSheet } from '#server/sheets/expand-sheet.ts';
+import { sheets } from '#server/starter/sheets/index.ts';
 import type { DemoCalendar } from './calendar.ts';
 import { demoId, spread } from './ids.ts';
 import type { JobSeed } from './jobs.ts';
 import { accountOf } from './put-in-accounts.ts';
-import { bodyOf, sheets } from './sheets/index.ts';
+import { storedBody } from './stored-body.ts';
 
 export const jobIdOf = (seed: JobSeed): string => demoId('job', `${seed.title}/${seed.vehicle}`);
 
@@ -30,7 +31,7 @@ export async function putInJob(
   const id = jobIdOf(seed);
   const chosen = [...sheet.options.flatMap(({ key, on }) => (on ? [key] : [])), ...(seed.options ?? [])];
   const parts = (seed.parts ?? sheet.parts).map((part, i) => ({ id: demoId('part', `${id}/${i}`), ...part }));
-  const stages = expandSheet(bodyOf(sheet), chosen);
+  const stages = expandSheet(storedBody(sheet), chosen);
   await insertJob(trx, shopId, {
     id,
     number: await takeJobNumber(trx, shopId),

@@ -1,11 +1,12 @@
 import type { Trx } from '#server/db/in-shop.ts';
 import { insertCoating } from '#server/db/coatings.ts';
 import { insertSheet } from '#server/db/sheets.ts';
+import { coatings } from '#server/starter/coatings.ts';
+import { sheets } from '#server/starter/sheets/index.ts';
 import type { DemoCalendar } from './calendar.ts';
-import { coatings } from './coatings.ts';
 import { demoId } from './ids.ts';
 import { people, shifts } from './people.ts';
-import { bodyOf, sheets } from './sheets/index.ts';
+import { storedBody } from './stored-body.ts';
 import { circuits, lamps, maintenance, opening, places, shop, weekdays } from './shop.ts';
 
 /** Set-up of the demo shop: places, lamps, calendars, people, coatings, process sheets. */
@@ -31,7 +32,7 @@ export async function putInShop(trx: Trx, shopId: string, calendar: DemoCalendar
       id: demoId('sheet', sheet.key),
       versionId: demoId('sheet', `${sheet.key}/1`),
       name: sheet.name,
-      body: bodyOf(sheet),
+      body: storedBody(sheet),
     });
 }
 
