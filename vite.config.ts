@@ -6,7 +6,7 @@ const port = Number(process.env['PORT'] ?? 5180);
 const api = process.env['OVENBIRD_API'] ?? 'http://127.0.0.1:5181';
 
 // Tests that need no database and no document; they start at once and run in parallel.
-const pureTests = ['tests/{planner,chemistry,sheets,borders,contracts,csv}/**/*.test.ts', 'src/**/*.test.ts'];
+const pureTests = ['tests/{planner,chemistry,sheets,borders,contracts,csv,storage}/**/*.test.ts', 'src/**/*.test.ts'];
 const browserTests = ['tests/browser/**/*.test.{ts,tsx}'];
 // Against hanging, not against slowness: a busy machine fails no test.
 const patience = { testTimeout: 60_000, hookTimeout: 120_000 };

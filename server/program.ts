@@ -2,6 +2,7 @@ import { pino } from 'pino';
 import { ConfigFault, readConfig, type Config } from './config.ts';
 import { connect } from './db/connect.ts';
 import type { Deps } from './deps.ts';
+import { openStorage } from './storage/open-storage.ts';
 
 /** Says in one line why a program cannot start, and ends it. */
 export function fail(message: string): never {
@@ -24,5 +25,6 @@ export function openProgram(): Deps {
   const secrets = ['password', 'currentPassword', 'newPassword', 'token', 'cookie', 'authorization'];
   const redact = [...secrets, ...secrets.map((name) => `*.${name}`), 'req.headers', 'res.headers'];
   const log = pino({ level: config.LOG_LEVEL, redact, base: null, timestamp: pino.stdTimeFunctions.isoTime });
-  return { config, db: connect(config.DATABASE_URL, config.DATABASE_POOL), log, now: () => new Date() };
+  const db = connect(config.DATABASE_URL, config.DATABASE_POOL);
+  return { config, db, log, now: () => new Date(), storage: openStorage(config) };
 }

@@ -9,6 +9,7 @@ import { pino } from 'pino';
 import { createApp } from '#server/app.ts';
 import { readConfig } from '#server/config.ts';
 import { connect } from '#server/db/connect.ts';
+import { diskStorage } from '#server/storage/disk.ts';
 import type { Deps } from '#server/deps.ts';
 
 type Sample = { requestsPerSecond: number; p50: number; p99: number };
@@ -28,6 +29,7 @@ export async function measureDayView(
     db: connect(databaseUrl, 10),
     log: pino({ level: 'silent' }),
     now: () => new Date(),
+    storage: diskStorage('.data/files'),
   };
   const program = createApp(deps);
   const pool = new pg.Pool({ connectionString: databaseUrl, max: 10 });

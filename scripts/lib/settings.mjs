@@ -44,6 +44,7 @@ export async function settle(dataDir) {
   env['HOST'] = given('HOST', '127.0.0.1');
   env['PORT'] = given('PORT', '5180');
   env['DATA_DIR'] = dataDir;
+  env['FILES_DIR'] = given('FILES_DIR', path.join(dataDir, 'files'));
   env['WEB_ROOT'] = given('WEB_ROOT', inRoot('dist/web'));
   // Each request in the log is for those who ask for it; at a terminal it would bury the address.
   env['LOG_LEVEL'] = given('LOG_LEVEL', 'warn');

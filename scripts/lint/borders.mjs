@@ -33,10 +33,16 @@ export const layers = [
   {
     name: 'deps',
     at: /^server\/deps\.ts$/,
-    mayUse: ['errors', ...pure, 'db', 'planning', 'mail', 'realtime'],
+    mayUse: ['errors', ...pure, 'db', 'planning', 'mail', 'realtime', 'storage'],
     never: webServer,
   },
-  { name: 'program', at: /^server\/program\.ts$/, mayUse: [...kernel, 'db'], never: [...webServer, ...mailers] },
+  { name: 'storage', at: /^server\/storage\//, mayUse: ['errors'], never: [...webServer, ...mailers, ...database] },
+  {
+    name: 'program',
+    at: /^server\/program\.ts$/,
+    mayUse: [...kernel, 'db', 'storage'],
+    never: [...webServer, ...mailers],
+  },
   { name: 'db', at: /^server\/db\//, mayUse: [...kernel, 'migrations'], never: [...webServer, ...mailers] },
   { name: 'csv', at: /^server\/csv\//, mayUse: ['contracts', 'db'], never: [...webServer, ...mailers] },
   { name: 'starter', at: /^server\/starter\//, mayUse: pure, only: [] },
@@ -46,7 +52,7 @@ export const layers = [
   {
     name: 'services',
     at: /^server\/services\//,
-    mayUse: [...kernel, 'db', 'csv', 'planning', 'starter'],
+    mayUse: [...kernel, 'db', 'csv', 'planning', 'starter', 'storage'],
     never: [...webServer, ...mailers],
   },
   {
@@ -58,7 +64,7 @@ export const layers = [
   {
     name: 'jobs',
     at: /^jobs\//,
-    mayUse: [...kernel, 'program', 'services', 'mail', 'db', 'planning', 'realtime'],
+    mayUse: [...kernel, 'program', 'services', 'mail', 'db', 'planning', 'realtime', 'storage'],
     never: webServer,
   },
   { name: 'migrations', at: /^migrations\//, mayUse: [], only: ['knex'] },

@@ -7,6 +7,7 @@ import type { Deps } from '#server/deps.ts';
 import { errorHandler } from '#server/http/error-handler.ts';
 import { Routes } from '#server/http/route.ts';
 import { freshDatabase } from './database.ts';
+import { tempStorage } from './storage.ts';
 
 /** Routes on a database of their own, with a clock that stands still until it is set. Sessions are tested elsewhere. */
 export type TestApi = {
@@ -25,6 +26,7 @@ export async function testApi(register: (routes: Routes, deps: Deps) => void, no
     db: connect(database.url, 6),
     log: pino({ level: 'silent' }),
     now: () => clock,
+    storage: tempStorage(),
   };
   const app = express();
   app.use(express.json(), actingAccount(deps));

@@ -11,6 +11,7 @@ import { readConfig } from '#server/config.ts';
 import { connect } from '#server/db/connect.ts';
 import type { Deps } from '#server/deps.ts';
 import type { TestDatabase } from './database.ts';
+import { tempStorage } from './storage.ts';
 
 /** Hashing that costs nothing; what it costs in the product is tested in tests/api/passwords.test.ts. */
 export const cheapHashing = { memoryCost: 64, timeCost: 1, parallelism: 1 };
@@ -50,6 +51,7 @@ export function testDeps(database: TestDatabase, options: TestAppOptions = {}) {
     db: connect(database.url, 8),
     log: pino({ level: 'silent' }),
     now: () => clock.now,
+    storage: tempStorage(),
     passwordCost: cheapHashing,
     ...options.deps,
   };
