@@ -1,7 +1,16 @@
 import * as z from 'zod';
+import { airFigures, airGate } from './air.ts';
 import { endpoint } from './endpoint.ts';
 import { id, inShop, instant, localDay, phaseKind } from './common.ts';
 import { window } from './jobs.ts';
+
+/** The latest reading where something is to be sprayed, against the gate; null: no zone, or nobody has measured. */
+export const sprayAir = z.strictObject({
+  zoneName: z.string().nullable(),
+  reading: airFigures.extend({ at: instant }).nullable(),
+  gate: airGate.nullable(),
+});
+export type SprayAir = z.output<typeof sprayAir>;
 
 export const benchStage = z.strictObject({
   id,
@@ -27,6 +36,8 @@ export const benchStage = z.strictObject({
   /** True: what comes before it in the job is done, so it can be started. */
   ready: z.boolean(),
   sharedWith: z.array(z.string()),
+  /** Null: nothing is sprayed in it. */
+  air: sprayAir.nullable(),
 });
 export type BenchStage = z.output<typeof benchStage>;
 
@@ -56,8 +67,10 @@ export const startStage = endpoint({
   method: 'POST',
   path: '/api/shops/:shopId/stages/:stageId/start',
   params: inStage,
-  body: tap,
-  reply: z.strictObject({ version: z.number().int() }),
+  /** `overrule`: why it is sprayed although the dew-point gate is shut; only who leads may. */
+  body: tap.extend({ overrule: z.string().trim().min(3).max(400).optional() }),
+  /** `air`: what the gate saw; null where nothing is sprayed. */
+  reply: z.strictObject({ version: z.number().int(), air: sprayAir.nullable() }),
 });
 export const finishStage = endpoint({
   name: 'finish-stage',

@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import { airFigures, airGate } from './air.ts';
 import { endpoint } from './endpoint.ts';
 import { attendance, id, inShop, instant, phaseKind, span } from './common.ts';
 import { window } from './jobs.ts';
@@ -91,7 +92,13 @@ export const dayView = z.strictObject({
   /** Number of the last change in the shop that this answer has seen. */
   seq: z.number().int(),
   shown: z.enum(['posted', 'draft']),
-  posted: z.strictObject({ number: z.number().int(), at: instant.nullable(), by: z.string().nullable() }),
+  posted: z.strictObject({
+    number: z.number().int(),
+    at: instant.nullable(),
+    by: z.string().nullable(),
+    /** Zones whose air is no longer what the plan was made with, by more than the shop lets pass. */
+    changedAir: z.array(z.strictObject({ zoneId: id, name: z.string(), then: airFigures, now: airFigures })),
+  }),
   draft: z
     .strictObject({
       id,
@@ -108,6 +115,8 @@ export const dayView = z.strictObject({
     .nullable(),
   open: z.array(span),
   rows: z.array(dayRow),
+  /** The latest reading of each zone that has one of the last day. */
+  air: z.array(airFigures.extend({ zoneId: id, name: z.string(), at: instant, gate: airGate })),
   circuits: z.array(z.strictObject({ id, name: z.string(), kilowatts: z.number() })),
   bars: z.array(bar),
   unplaced: z.array(unplacedJob),

@@ -71,6 +71,15 @@ export const bookingView = z.strictObject({
   state: z.enum(['planned', 'running', 'done']),
 });
 
+/** Why a stage was begun although a gate was shut, by whom and when; for `dew-point` figures as in its reason. */
+export const overruled = z.strictObject({
+  rule: z.literal('dew-point'),
+  reason: z.string(),
+  by: z.string().nullable(),
+  at: instant,
+  figures: z.array(z.number()),
+});
+
 export const jobStage = z.strictObject({
   id,
   position: z.number().int(),
@@ -82,6 +91,7 @@ export const jobStage = z.strictObject({
   ways: z.array(way),
   window,
   booking: bookingView.nullable(),
+  overruled: overruled.nullable(),
 });
 export type JobStage = z.output<typeof jobStage>;
 

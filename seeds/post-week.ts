@@ -2,6 +2,7 @@ import { plan } from '#planner/index.ts';
 import { insertBookings } from '#server/db/bookings.ts';
 import type { Trx } from '#server/db/in-shop.ts';
 import { insertPostedPlan } from '#server/db/posted-plans.ts';
+import { airOfPlan } from '#server/planning/air/air-of-plan.ts';
 import { loadFacts } from '#server/planning/facts.ts';
 import { problemToPlan } from '#server/planning/problem/problem-to-plan.ts';
 import { readPlan, readUnplaced } from '#server/planning/read-plan.ts';
@@ -29,6 +30,7 @@ export async function postWeek(trx: Trx, shopId: string, at: Date): Promise<{ st
     accountId: accountOf('Orlin'),
     cost: made.cost,
     body: { bookings },
+    air: airOfPlan(facts.air, at),
   });
   return { stageIds: bookings.map(({ stageId }) => stageId) };
 }

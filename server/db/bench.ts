@@ -15,6 +15,7 @@ export type BenchRow = {
   title: string;
   way: Way;
   placeName: string;
+  zoneId: string | null;
   lampNames: string[];
   from: Date;
   to: Date;
@@ -45,7 +46,7 @@ const BENCH = `
                    where part.shop_id = j.shop_id and part.job_id = j.id), '') as "partNames",
          j.colour_note as "colourNote", s.kind, s.title,
          (select w from jsonb_array_elements(s.ways) w where w ->> 'id' = b.way) as way,
-         place.name as "placeName",
+         place.name as "placeName", place.zone_id as "zoneId",
          array(select lamp.name from lamp where lamp.shop_id = b.shop_id and lamp.id = any (b.lamp_ids)
                order by lamp.position, lamp.name) as "lampNames",
          lower(b.during) as "from", upper(b.during) as "to", b.phases,

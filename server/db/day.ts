@@ -1,5 +1,6 @@
 import type { PlanRun } from '#contracts/day.ts';
 import type { Way } from '#contracts/sheets.ts';
+import type { PlanAir } from '#server/planning/air/air-of-plan.ts';
 import type { Trx } from './in-shop.ts';
 import type { StageState } from './stages.ts';
 
@@ -147,7 +148,7 @@ type Json<T> = { [K in keyof T]: T[K] extends Date | null ? string | Extract<T[K
 
 /** Moments are as PostgreSQL writes them in JSON. */
 export type PlanHeads = {
-  posted: { at: string | null; by: string | null } | null;
+  posted: { at: string | null; by: string | null; air: PlanAir | null } | null;
   draft: Json<{
     id: string;
     version: number;
@@ -168,7 +169,7 @@ export async function planHeads(trx: Trx, shopId: string): Promise<PlanHeads> {
 
 const HEADS = `
   select
-    (select json_build_object('at', p.posted_at, 'by', account.name)
+    (select json_build_object('at', p.posted_at, 'by', account.name, 'air', p.air)
      from shop
      join posted_plan p on p.shop_id = shop.id and p.number = shop.plan_number
      left join account on account.id = p.posted_by

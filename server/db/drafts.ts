@@ -1,4 +1,5 @@
 import { v7 as uuid } from 'uuid';
+import type { PlanAir } from '#server/planning/air/air-of-plan.ts';
 import { bookedColumns, bookedRow, rangeOf, type Booked } from './bookings.ts';
 import type { Trx } from './in-shop.ts';
 
@@ -14,6 +15,8 @@ export type Draft = {
   unplaced: UnplacedNote[];
   updatedBy: string | null;
   updatedAt: Date;
+  /** The air the planner made it with; null: it was made by hand. */
+  air: PlanAir | null;
 };
 
 const draftColumns = {
@@ -25,6 +28,7 @@ const draftColumns = {
   unplaced: 'unplaced',
   updatedBy: 'updated_by',
   updatedAt: 'updated_at',
+  air: 'air',
 } as const;
 
 /** The shop's open draft, if there is one. `lock`: nobody else changes it until this transaction ends. */
@@ -99,14 +103,16 @@ export async function touchDraft(
     cost?: number | null;
     bound?: number | null;
     unplaced?: readonly UnplacedNote[];
+    air?: PlanAir;
   },
 ): Promise<number> {
-  const { at, accountId, unplaced, ...figures } = change;
+  const { at, accountId, unplaced, air, ...figures } = change;
   const rows = await trx('draft')
     .where({ shop_id: shopId, id: draftId, state: 'open' })
     .update({
       ...figures,
       ...(unplaced ? { unplaced: JSON.stringify(unplaced) } : {}),
+      ...(air ? { air: JSON.stringify(air) } : {}),
       version: trx.raw('version + 1'),
       updated_by: accountId,
       updated_at: at,

@@ -1,10 +1,19 @@
+import type { PlanAir } from '#server/planning/air/air-of-plan.ts';
 import type { Trx } from './in-shop.ts';
 
 /** Keeps a posted plan whole and makes it the shop's plan. */
 export async function insertPostedPlan(
   trx: Trx,
   shopId: string,
-  plan: { id: string; number: number; at: Date; accountId: string | null; cost: number | null; body: unknown },
+  plan: {
+    id: string;
+    number: number;
+    at: Date;
+    accountId: string | null;
+    cost: number | null;
+    body: unknown;
+    air: PlanAir;
+  },
 ): Promise<void> {
   await trx('posted_plan').insert({
     shop_id: shopId,
@@ -14,6 +23,7 @@ export async function insertPostedPlan(
     posted_by: plan.accountId,
     cost: plan.cost,
     body: JSON.stringify(plan.body),
+    air: JSON.stringify(plan.air),
   });
   await trx('shop').where({ id: shopId }).update({ plan_number: plan.number });
 }

@@ -28,6 +28,8 @@ export type StageFacts = {
   startedAt: Date | null;
   finishedAt: Date | null;
   ways: Way[];
+  /** Why it was begun although the dew-point gate was shut, with the name of who said so. */
+  overruled: { rule: 'dew-point'; reason: string; by: string | null; at: string; figures: number[] } | null;
 };
 
 export type BookedStage = StageFacts & { booking: BookingFacts | null };
@@ -38,6 +40,7 @@ type FlatStage = StageFacts & { [K in keyof BookingFacts as `booking:${K}`]: Boo
 export async function stagesOfJob(trx: Trx, shopId: string, jobId: string): Promise<BookedStage[]> {
   const { rows } = await trx.raw<{ rows: FlatStage[] }>(
     `select s.id, s.position, s.kind, s.title, s.state, s.started_at as "startedAt", s.finished_at as "finishedAt", s.ways,
+            s.overruled || jsonb_build_object('by', (select name from account where id = (s.overruled ->> 'by')::uuid)) as overruled,
             b.id as "booking:id", b.way as "booking:way", b.place_id as "booking:placeId", place.name as "booking:placeName",
             b.person_id as "booking:personId", person.name as "booking:personName",
             lower(b.during) as "booking:from", upper(b.during) as "booking:to", b.phases as "booking:phases",
@@ -56,12 +59,12 @@ export async function stagesOfJob(trx: Trx, shopId: string, jobId: string): Prom
 }
 
 function nest(row: FlatStage): BookedStage {
-  const { id, position, kind, title, state, startedAt, finishedAt, ways } = row;
+  const { id, position, kind, title, state, startedAt, finishedAt, ways, overruled } = row;
   const entries = Object.entries(row).flatMap(([key, value]) =>
     key.startsWith('booking:') ? [[key.slice('booking:'.length), value]] : [],
   );
   const booking = row['booking:id'] === null ? null : (Object.fromEntries(entries) as BookingFacts);
-  return { id, position, kind, title, state, startedAt, finishedAt, ways, booking };
+  return { id, position, kind, title, state, startedAt, finishedAt, ways, overruled, booking };
 }
 
 export async function insertStages(
@@ -99,6 +102,9 @@ export type TappedStage = {
   previousId: string | null;
   previousTitle: string | null;
   previousState: StageState | null;
+  /** Where it is booked, and whether its way sprays there. */
+  zoneId: string | null;
+  sprays: boolean;
 };
 
 const loadOf = `
@@ -139,10 +145,14 @@ export async function lockTapped(trx: Trx, shopId: string, stageId: string): Pro
 const TAPPED = `
   select s.id, s.job_id as "jobId", s.title, s.version, s.state, s.started_at as "startedAt", j.state as "jobState",
          b.id as "bookingId", b.person_id as "personId", b.load_id as "loadId",
-         previous.id as "previousId", previous.title as "previousTitle", previous.state as "previousState"
+         previous.id as "previousId", previous.title as "previousTitle", previous.state as "previousState",
+         place.zone_id as "zoneId",
+         exists (select 1 from jsonb_array_elements(s.ways) w, jsonb_array_elements(w -> 'phases') p
+                 where w ->> 'id' = b.way and p ->> 'kind' = 'spray') as sprays
   from stage s
   join job j on j.shop_id = s.shop_id and j.id = s.job_id
   left join booking b on b.shop_id = s.shop_id and b.stage_id = s.id and b.state <> 'cancelled'
+  left join place on place.shop_id = b.shop_id and place.id = b.place_id
   left join lateral (
     select p.id, p.title, p.state from stage p
     where p.shop_id = s.shop_id and p.job_id = s.job_id and p.position < s.position
@@ -163,6 +173,14 @@ export async function markStarted(trx: Trx, shopId: string, stageIds: string[], 
     .update({ state: 'running', started_at: at })
     .increment('version', 1);
   await markBookings(trx, shopId, stageIds, 'running');
+}
+
+/** Keeps with stages why they were begun although a gate was shut. */
+export async function keepOverruled(trx: Trx, shopId: string, stageIds: string[], overruled: object): Promise<void> {
+  await trx('stage')
+    .where({ shop_id: shopId })
+    .whereIn('id', stageIds)
+    .update({ overruled: JSON.stringify(overruled) });
 }
 
 /** Also where the clock was put back since the start: a stage never ends before it began. */

@@ -9,7 +9,7 @@ import type { Routes } from './route.ts';
 export function benchRoutes(routes: Routes, deps: Deps): void {
   routes.shop(readBench, may.workStages, ({ actor, query }) => read.readBench(deps, actor, query));
   routes.shop(startStage, may.workStages, ({ actor, params, body }) =>
-    start.startStage(deps, actor, params.stageId, body.version),
+    start.startStage(deps, actor, params.stageId, body),
   );
   routes.shop(finishStage, may.workStages, ({ actor, params, body }) =>
     finish.finishStage(deps, actor, params.stageId, body.version),

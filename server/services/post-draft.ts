@@ -11,6 +11,7 @@ import { insertPostedPlan } from '../db/posted-plans.ts';
 import { tryAgain } from '../db/try-again.ts';
 import type { Deps } from '../deps.ts';
 import { Refusal } from '../errors.ts';
+import { airOfPlan } from '../planning/air/air-of-plan.ts';
 import { changesForPerson } from '../planning/changes-for-person.ts';
 import { loadFacts, sameBooking, standingOf, type Facts } from '../planning/facts.ts';
 import type { Judged } from '../planning/judge.ts';
@@ -51,7 +52,10 @@ async function post(trx: Trx, actor: Actor, version: number, now: Date): Promise
   await writeOccupancy(trx, actor.shopId, facts, judged, bookingIds);
   const planId = uuid();
   const body = { bookings: bookedStages(facts) };
-  await insertPostedPlan(trx, actor.shopId, { id: planId, number, at: now, accountId: actor.accountId, cost, body });
+  // Moved by hand alone, it is right for the air of now in the eyes of who posts it.
+  const air = draft.air ?? airOfPlan(facts.air, now);
+  const plan = { id: planId, number, at: now, accountId: actor.accountId, cost, body, air };
+  await insertPostedPlan(trx, actor.shopId, plan);
   await closeDraft(trx, actor.shopId, draft.id, { state: 'posted', at: now, accountId: actor.accountId });
   const letters = await writeLetters(trx, actor, facts, number, changes);
   await recordChange(trx, actor, {

@@ -1,9 +1,11 @@
 import type { BenchStage, BenchView } from '#contracts/bench.ts';
+import { loadAir, type AirOfShop } from '../db/air.ts';
 import { benchStages, type BenchRow } from '../db/bench.ts';
 import { inShop } from '../db/in-shop.ts';
 import { loadResources } from '../db/resources.ts';
 import type { Deps } from '../deps.ts';
 import { notFound, Refusal } from '../errors.ts';
+import { sprayAir, sprays } from '../planning/air/spray-air.ts';
 import { workingSpans } from '../planning/calendars.ts';
 import { localDayOf, spanOfLocalDay } from '../planning/local-time.ts';
 import type { Span } from '../planning/spans.ts';
@@ -31,19 +33,20 @@ export function readBench(deps: Deps, actor: Actor, asked: Asked): Promise<Bench
     if (!person) throw notFound();
     const span = spanOfLocalDay(day, setUp.shop.timeZone);
     const rows = await benchStages(trx, actor.shopId, { personId, ...span, withOverdue: day === today });
+    const air = await loadAir(trx, actor.shopId);
     return {
       ...head,
       person: { id: person.id, name: person.name },
       working: workingSpans(setUp, personId, span).map(iso),
-      stages: rows.map(present),
+      stages: rows.map((row) => present(row, air, now)),
     };
   });
 }
 
 const iso = (span: Span) => ({ from: span.from.toISOString(), to: span.to.toISOString() });
 
-function present(row: BenchRow): BenchStage {
-  const { way, phases, previousState, previousEnd, startedAt, finishedAt, from, to, ...rest } = row;
+function present(row: BenchRow, air: AirOfShop, now: Date): BenchStage {
+  const { way, zoneId, phases, previousState, previousEnd, startedAt, finishedAt, from, to, ...rest } = row;
   const window = windowOf(previousEnd, [way], way.id);
   return {
     ...rest,
@@ -54,5 +57,6 @@ function present(row: BenchRow): BenchStage {
     startedAt: startedAt?.toISOString() ?? null,
     finishedAt: finishedAt?.toISOString() ?? null,
     ready: previousState === null || previousState === 'done',
+    air: sprays(way) ? sprayAir(air, zoneId, now) : null,
   };
 }

@@ -13,6 +13,7 @@ import { loadFacts, type Facts } from '../planning/facts.ts';
 import { PlannerThreadDied, type PlannerThreads, type Search } from '../planning/planner-threads.ts';
 import type { Built } from '../planning/problem/build-problem.ts';
 import { problemToPlan } from '../planning/problem/problem-to-plan.ts';
+import { airOfPlan } from '../planning/air/air-of-plan.ts';
 import { readPlan, readUnplaced } from '../planning/read-plan.ts';
 
 /** How often a run looks whether it shall stop and, where there is something new, tells how far it is. */
@@ -153,6 +154,7 @@ function store(deps: Deps, { run, scope, facts, built }: Begun, plan: Plan): Pro
       cost: plan.cost,
       bound: plan.bound ?? null,
       unplaced: readUnplaced(facts, built, plan),
+      air: airOfPlan(facts.air, facts.now),
     });
     await recordChange(trx, scope, { kind: draft ? 'draft-changed' : 'draft-opened', ids: [head.id] });
     const progress = {

@@ -1,7 +1,7 @@
 import type { Reason } from '#contracts/reasons.ts';
 import type { ViolationCode } from '#planner/types.ts';
 import { sheetFaultCode } from '#contracts/sheet-faults.ts';
-import type { Formats } from './formats.ts';
+import { formatDegrees, type Formats } from './formats.ts';
 import { sheetFaultText } from './sheet-fault-texts.ts';
 
 /** Codes that services add to the planner's. */
@@ -138,7 +138,7 @@ const texts: Record<ViolationCode | ServiceCode, Say> = {
   'flash-past-window': ({ names, minutes }, f) =>
     `${names(0)} has to flash ${f.duration(minutes(0))} in the air expected there, past the ${f.duration(minutes(1))} of its window.`,
   'dew-point': ({ names, at, minutes }, f) =>
-    `Too near the dew point to spray${names(0) ? ` in ${names(0)}` : ''}: at ${at(0)} it was ${f.temperature(minutes(0))} and ${Math.round(minutes(1))} %, dew point ${f.temperature(minutes(3))}; the surface${minutes(6) === 1 ? '' : ', taken to be as warm as the air,'} is ${f.temperature(minutes(2))}, ${minutes(4).toFixed(1)} C over it, and needs ${minutes(5).toFixed(1)} C. Warm the part or dry the air, and measure again.`,
+    `Too near the dew point to spray${names(0) ? ` in ${names(0)}` : ''}: at ${at(0)} it was ${f.temperature(minutes(0))} and ${Math.round(minutes(1))} %, dew point ${f.temperature(minutes(3))}; the surface${minutes(6) === 1 ? '' : ', taken to be as warm as the air,'} is ${f.temperature(minutes(2))}, ${formatDegrees(minutes(4), f.unit)} over it, and has to be ${formatDegrees(minutes(5), f.unit)}. Warm the part or dry the air, and measure again.`,
   'last-owner': ({ names }) => `${names(0)} is the only owner. Make somebody else an owner first.`,
 };
 

@@ -61,7 +61,7 @@ describe('starting and finishing', () => {
     const made = await twoStages();
     const [first, second] = [stageOf(made, 0), stageOf(made, 1)];
     api.setClock('2026-03-02T09:04:00.000Z');
-    expect((await tap(painter, first, 'start', 1).expect(200)).body).toEqual({ version: 2 });
+    expect((await tap(painter, first, 'start', 1).expect(200)).body).toEqual({ version: 2, air: null });
     expect(await job(made.id)).toMatchObject({ state: 'running', stages: [{ booking: { state: 'running' } }, {}] });
     const early = await tap(painter, second, 'start', 1).expect(422);
     expect(early.body.error.reasons).toMatchObject([
@@ -94,7 +94,9 @@ describe('starting and finishing', () => {
     const made = await twoStages();
     const stage = stageOf(made, 0);
     const taps = await Promise.all([1, 2, 3].map(() => tap(painter, stage, 'start', 1)));
-    expect(taps.map((answer) => [answer.status, answer.body as unknown])).toEqual(Array(3).fill([200, { version: 2 }]));
+    expect(taps.map((answer) => [answer.status, answer.body as unknown])).toEqual(
+      Array(3).fill([200, { version: 2, air: null }]),
+    );
     api.setClock('2026-03-02T09:30:00.000Z');
     await tap(painter, stage, 'start', 1).expect(200);
     await tap(painter, stage, 'finish', 2).expect(200);
@@ -160,7 +162,7 @@ describe('starting and finishing', () => {
     ]);
     await tap(painter, members[0]!, 'start', 1).expect(200);
     expect((await bench(painter)).stages.map((stage) => stage.state)).toEqual(['running', 'running', 'waiting']);
-    await tap(painter, members[1]!, 'start', 1).expect(200, { version: 2 });
+    await tap(painter, members[1]!, 'start', 1).expect(200, { version: 2, air: null });
     await tap(painter, members[1]!, 'finish', 2).expect(200);
     expect((await bench(painter)).stages.map((stage) => stage.state)).toEqual(['done', 'done', 'waiting']);
     expect((await job(jobs[0]!.id)).state).toBe('done');

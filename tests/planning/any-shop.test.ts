@@ -161,6 +161,7 @@ function shopOf(drawn: Drawn): Facts {
             unplaced: [],
             updatedBy: null,
             updatedAt: at(1, '06:00'),
+            air: null,
           }
         : null,
   };

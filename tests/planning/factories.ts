@@ -216,6 +216,7 @@ export function facts(
           unplaced: [],
           updatedBy: null,
           updatedAt: now,
+          air: null,
         }
       : null,
     items: new Map((part.items ?? []).map((i) => [i.stageId, i])),

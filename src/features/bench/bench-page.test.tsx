@@ -179,7 +179,8 @@ const dayWith = (people: { id: string; name: string }[]) => ({
   serverTime: bench.serverTime,
   seq: 1,
   shown: 'posted',
-  posted: { number: 1, at: null, by: null },
+  posted: { number: 1, at: null, by: null, changedAir: [] },
+  air: [],
   draft: null,
   open: [],
   rows: people.map(({ id, name }) => ({

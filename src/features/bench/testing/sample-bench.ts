@@ -37,6 +37,7 @@ export function sampleStage(n: number, { start = '08:30', plan = [['work', 60]],
     finishedAt: null,
     ready: true,
     sharedWith: [],
+    air: null,
     ...given,
   };
 }

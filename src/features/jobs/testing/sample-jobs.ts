@@ -82,6 +82,7 @@ export function sampleJob(given: Partial<Job> = {}): Job {
         startedAt: state === 'waiting' ? null : iso(from + 3 * minute),
         finishedAt: state === 'done' ? iso(phaseAt + 4 * minute) : null,
         ways,
+        overruled: null,
         window: {
           earliest: position === 0 ? null : iso(previousEnd + way.gap.min * minute),
           latest: position === 0 || way.gap.max === null ? null : iso(previousEnd + way.gap.max * minute),
