@@ -1,4 +1,10 @@
-import { defaultAirSettings, type AirHours, type AirSettings, type AirSource } from '#contracts/air.ts';
+import {
+  defaultAirSettings,
+  type AirFigures,
+  type AirHours,
+  type AirSettings,
+  type AirSource,
+} from '#contracts/air.ts';
 import type { Trx } from './in-shop.ts';
 import type { ReadingOfZone } from './air-readings.ts';
 
@@ -13,6 +19,9 @@ export type ZoneAirFacts = {
   version: number;
   latest: ReadingOfZone | null;
 };
+/** The air that a plan was made with: what was expected, by hour or all day, and what was read then, by zone. */
+export type PlanAir = { zones: Record<string, { hours: AirFigures[]; reading: AirFigures | null }> };
+
 /** What is known of a shop's air. */
 export type AirOfShop = { settings: AirSettings; zones: ZoneAirFacts[] };
 

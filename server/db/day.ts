@@ -1,6 +1,6 @@
 import type { PlanRun } from '#contracts/day.ts';
 import type { Way } from '#contracts/sheets.ts';
-import type { PlanAir } from '#server/planning/air/air-of-plan.ts';
+import type { PlanAir } from './air.ts';
 import type { Trx } from './in-shop.ts';
 import type { StageState } from './stages.ts';
 

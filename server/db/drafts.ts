@@ -1,5 +1,5 @@
 import { v7 as uuid } from 'uuid';
-import type { PlanAir } from '#server/planning/air/air-of-plan.ts';
+import type { PlanAir } from './air.ts';
 import { bookedColumns, bookedRow, rangeOf, type Booked } from './bookings.ts';
 import type { Trx } from './in-shop.ts';
 

@@ -1,4 +1,4 @@
-import type { PlanAir } from '#server/planning/air/air-of-plan.ts';
+import type { PlanAir } from './air.ts';
 import type { Trx } from './in-shop.ts';
 
 /** Keeps a posted plan whole and makes it the shop's plan. */

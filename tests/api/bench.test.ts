@@ -102,7 +102,7 @@ describe('starting and finishing', () => {
     await tap(painter, stage, 'finish', 2).expect(200);
     api.setClock('2026-03-02T09:40:00.000Z');
     await tap(painter, stage, 'finish', 2).expect(200, { version: 3 });
-    await tap(painter, stage, 'start', 1).expect(200, { version: 3 });
+    await tap(painter, stage, 'start', 1).expect(200, { version: 3, air: null });
     expect((await job(made.id)).stages[0]).toMatchObject({
       startedAt: '2026-03-02T08:00:00.000Z',
       finishedAt: '2026-03-02T09:30:00.000Z',

@@ -1,9 +1,6 @@
 import type { AirFigures } from '#contracts/air.ts';
-import type { AirOfShop, ZoneAirFacts } from '#server/db/air.ts';
+import type { AirOfShop, PlanAir, ZoneAirFacts } from '#server/db/air.ts';
 import { airAt, expectedHours, figuresOf, hourOf, HOURS } from './expected-air.ts';
-
-/** The air that a plan was made with: what was expected, and what was read then, by zone. */
-export type PlanAir = { zones: Record<string, { hours: AirFigures[]; reading: AirFigures | null }> };
 
 /** A zone whose air is no longer what the plan was made with; the figures that differ most. */
 export type ChangedAir = { zoneId: string; name: string; then: AirFigures; now: AirFigures };
