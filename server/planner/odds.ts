@@ -1,10 +1,8 @@
-import { type Decoder, leaveOut, makeDecoder } from './engine/decode.ts';
-import { NEVER } from './engine/calendar.ts';
-import { placeChain } from './engine/chain.ts';
 import { compileShop } from './engine/compile.ts';
+import { type Decoder, makeDecoder } from './engine/decode.ts';
 import { takeOut } from './engine/placer.ts';
-import type { Block, Shop, Variant, Way } from './engine/shop.ts';
-import { compileWay, type Indexes, indexesOf } from './engine/ways.ts';
+import { ALONE } from './engine/shop.ts';
+import { type Member, plannedSteps, runStep, type Step } from './planned-steps.ts';
 import { makeRandom, type Random } from './random.ts';
 import type { Assignment, Minutes, Mode, Phase, Plan, Problem } from './types.ts';
 
@@ -36,10 +34,10 @@ export function odds(
   const shop = compileShop(problem);
   const d = makeDecoder(shop);
   const random = makeRandom(seed);
-  const track = plannedOrder(shop, plan);
+  const steps = plannedSteps(shop, plan);
   const ends = shop.jobs.map((): number[] => []);
   for (let n = 0; n < samples; n++) {
-    runOnce(d, track, spreads, random);
+    runOnce(d, steps, spreads, random);
     shop.jobs.forEach((job, j) => {
       if (!d.out[j] && d.state.at.way[job.last]) ends[j]!.push(d.state.at.end[job.last]!);
     });
@@ -65,20 +63,6 @@ function oddsOf(job: string, due: Minutes | null, ends: number[], samples: numbe
   };
 }
 
-type Step = { block: Block; planned: Assignment[] };
-type Track = { steps: Step[]; indexes: Indexes };
-
-/** Blocks whose stages the plan places, in the order of their starts. */
-function plannedOrder(shop: Shop, plan: Plan): Track {
-  const given = new Map(plan.assignments.map((a) => [a.stage, a]));
-  const steps = shop.blocks.flatMap((block): Step[] => {
-    const planned = shop.stageIds.slice(block.first, block.last + 1).flatMap((id) => given.get(id) ?? []);
-    return planned.length === block.last - block.first + 1 ? [{ block, planned }] : [];
-  });
-  steps.sort((x, y) => x.planned[0]!.start - y.planned[0]!.start || x.block.id - y.block.id);
-  return { steps, indexes: indexesOf(shop.problem) };
-}
-
 const triangular = ({ low, likely, high }: Spread, u: number): number => {
   if (high <= low) return low;
   const turn = (likely - low) / (high - low);
@@ -90,40 +74,52 @@ const triangular = ({ low, likely, high }: Spread, u: number): number => {
 const byHand = (p: Phase): boolean => p.kind === 'setup' || p.kind === 'work' || p.kind === 'spray';
 
 /** One sample: every block as planned, with the minutes drawn, no earlier than planned. */
-function runOnce(
+function runOnce(d: Decoder, steps: readonly Step[], spreads: Readonly<Record<string, Spread>>, random: Random): void {
+  for (const step of steps) {
+    const modes = step.members.map((member) => drawMember(d, member, spreads, random));
+    const late = step.members.find(({ block }) => d.out[block.job]);
+    const stuck = late ? late.block.first : runStep(d, step, modes);
+    // A load runs as a whole or is planned anew as a whole.
+    if (stuck >= 0) for (const { block } of step.members) if (!d.out[block.job]) giveUp(d, block.job);
+  }
+}
+
+/** The modes of a member's block as they turn out; place, person and earliest start as planned. */
+function drawMember(
   d: Decoder,
-  { steps, indexes }: Track,
+  { block, planned }: Member,
   spreads: Readonly<Record<string, Spread>>,
   random: Random,
-): void {
+): Mode[] {
   const { shop } = d;
-  for (const { block, planned } of steps) {
-    const ways = planned.map((a, k): Way => {
-      const s = block.first + k;
-      const job = shop.problem.jobs[block.job]!;
-      const stage = job.stages[s - shop.jobs[block.job]!.first]!;
-      const mode = stage.modes.find((m) => m.id === a.mode)!;
-      const spread = spreads[stage.kind];
-      const factor = spread ? triangular(spread, random()) : 1;
-      d.spotOf[s] = indexes.place.get(a.place)!;
-      d.handOf[s] = a.person === null ? -1 : indexes.person.get(a.person)!;
-      d.wishOf[s] = a.start;
-      return compileWay(-1, drawn(mode, a, factor), indexes);
-    });
-    if (d.out[block.job]) continue;
-    const stuck = placeChain(d, block, variantOf(ways), NEVER);
-    if (stuck >= 0) leaveOut(d, block.job, stuck);
-  }
+  const { indexes } = shop.joints;
+  return planned.map((a, k) => {
+    const s = block.first + k;
+    const stage = shop.problem.jobs[block.job]!.stages[s - shop.jobs[block.job]!.first]!;
+    const spread = spreads[stage.kind];
+    d.spotOf[s] = indexes.place.get(a.place)!;
+    d.handOf[s] = a.person === null ? -1 : indexes.person.get(a.person)!;
+    d.wishOf[s] = a.start;
+    return drawn(
+      stage.modes.find((m) => m.id === a.mode)!,
+      a,
+      spread ? triangular(spread, random()) : 1,
+    );
+  });
+}
+
+/** The job is planned anew; a run that it led goes on for the others. */
+function giveUp(d: Decoder, job: number): void {
+  const { first, last } = d.shop.jobs[job]!;
+  for (let s = first; s <= last; s++) if (d.shop.fixedAt[s]! < 0 && d.state.at.way[s]?.share === ALONE) takeOut(d, s);
+  d.out[job] = 1;
 }
 
 /** The mode as it turns out: hands-on minutes by the factor, only the lamps that are planned. */
 const drawn = (mode: Mode, a: Assignment, factor: number): Mode => ({
   ...mode,
   lamps: a.lamps,
-  phases: mode.phases.map((p) => (byHand(p) ? { ...p, minutes: Math.max(1, Math.round(p.minutes * factor)) } : p)),
+  phases: mode.phases.map((p) =>
+    byHand(p) && p.minutes > 0 ? { ...p, minutes: Math.max(1, Math.round(p.minutes * factor)) } : p,
+  ),
 });
-
-function variantOf(ways: Way[]): Variant {
-  const n = ways.length;
-  return { ways, pins: new Int32Array(n).fill(-1), rest: new Int32Array(n) };
-}

@@ -34,6 +34,13 @@ export function jointWay(shop: Shop, a: Way, b: Way): Way | null {
   return made;
 }
 
+/** The way of a load whose modes are drawn for once and asked for never again; null: they cannot run together. */
+export function onceJoint(shop: Shop, modes: readonly Mode[]): Way | null {
+  const [first, ...others] = modes;
+  const mode = others.reduce<Mode | null>((all, one) => all && jointMode(all, one), first ?? null);
+  return mode && { ...compileWay(-1, mode, shop.joints.indexes), share: LEADS };
+}
+
 function makeJoint(shop: Shop, a: Way, b: Way): Way | null {
   const mode = jointMode(a.mode, b.mode);
   if (!mode) return null;
@@ -48,7 +55,7 @@ function makeJoint(shop: Shop, a: Way, b: Way): Way | null {
 const ADD_UP: ReadonlySet<PhaseKind> = new Set(['setup', 'work', 'spray']);
 
 /** Two modes as one load (rule 5). Also families, attendance, pauses and lamps have to be the same: then one calendar serves all. */
-export function jointMode(a: Mode, b: Mode): Mode | null {
+function jointMode(a: Mode, b: Mode): Mode | null {
   if (!areAlike(a, b)) return null;
   const gap = a.stay ? jointGap(a.gap, b.gap) : a.gap; // before a load begins, each member has its own
   if (gap.max !== null && gap.min > gap.max) return null;
@@ -91,6 +98,7 @@ const jointGap = (a: Gap, b: Gap): Gap => ({
 /** A member's way beside the one that leads: the load's times, its own gap, and nothing held by it. */
 export function riderWay(shop: Shop, joint: Way, own: Way): Way {
   const { joints } = shop;
+  if (joint.id < 0) return besides(joint, own, -1); // made for once
   const key = keyOf(joint, own);
   const known = joints.riders.get(key);
   if (known) return known;
@@ -99,7 +107,7 @@ export function riderWay(shop: Shop, joint: Way, own: Way): Way {
   return made;
 }
 
-export const besides = (joint: Way, own: Way, id: number): Way => ({
+const besides = (joint: Way, own: Way, id: number): Way => ({
   ...joint,
   id,
   mode: own.mode,
