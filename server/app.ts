@@ -4,12 +4,14 @@ import type { Deps } from './deps.ts';
 import { notFound } from './errors.ts';
 import { airRoutes } from './http/air.ts';
 import { apiKeyRoutes } from './http/api-keys.ts';
+import { attachmentRoutes } from './http/attachments.ts';
 import { benchRoutes } from './http/bench.ts';
 import { coatingRoutes } from './http/coatings.ts';
 import { refuseOtherSites } from './http/csrf.ts';
 import { dayRoutes } from './http/day.ts';
 import { draftRoutes } from './http/drafts.ts';
 import { errorHandler } from './http/error-handler.ts';
+import { firstStepRoutes } from './http/first-steps.ts';
 import { healthRoutes } from './http/health.ts';
 import { hoursRoutes } from './http/hours.ts';
 import { jobRoutes } from './http/jobs.ts';
@@ -29,6 +31,7 @@ import { neverStore, securityHeaders } from './http/security.ts';
 import { sessionRoutes } from './http/session.ts';
 import { sessionStore, sessionTimeouts } from './http/session-store.ts';
 import { shopRoutes } from './http/shop-settings.ts';
+import { openShopRoutes } from './http/shops.ts';
 import { sheetRoutes } from './http/sheets.ts';
 import { upkeepRoutes } from './http/upkeep.ts';
 import { useRoutes } from './http/use.ts';
@@ -39,6 +42,7 @@ const nouns: ((routes: Routes, deps: Deps) => void)[] = [
   jobRoutes,
   sheetRoutes,
   coatingRoutes,
+  attachmentRoutes,
   dayRoutes,
   draftRoutes,
   benchRoutes,
@@ -47,6 +51,7 @@ const nouns: ((routes: Routes, deps: Deps) => void)[] = [
   airRoutes,
   apiKeyRoutes,
   peopleRoutes,
+  firstStepRoutes,
   placeRoutes,
   lampRoutes,
   hoursRoutes,
@@ -84,6 +89,7 @@ export function createApp(deps: Deps): App {
   sessionRoutes(routes, deps, passport, limits);
   linkRoutes(routes, deps, limits);
   memberRoutes(routes, deps, limits);
+  openShopRoutes(routes, deps, limits);
   liveRoutes(routes, deps, hub);
   for (const noun of nouns) noun(routes, deps);
   router.use('/api', () => {

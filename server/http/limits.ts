@@ -22,6 +22,8 @@ export type Limits = {
   links: { take(req: Request): Promise<void> };
   /** Letters that a shop sends to new people. */
   invitations: { take(shopId: string): Promise<void> };
+  /** Shops that an account opens. */
+  shops: { take(accountId: string): Promise<void> };
   /** Loggers: knocks at the door by address, good key or not, and requests by key. */
   keys: { knock(req: Request): Promise<void>; take(keyId: string): Promise<void> };
 };
@@ -43,6 +45,7 @@ export function makeLimits(pool: object): Limits {
   const lettersByPair = limiter('letters-pair', 5, 60);
   const lettersByAddress = limiter('letters-address', 30, 60);
   const linksByAddress = limiter('links-address', 60, 15);
+  const shopsByAccount = limiter('shops-account', 10, 60);
   const invitationsByShop = limiter('invitations-shop', 60, 60);
   const knocksByAddress = limiter('keys-address', 300, 1);
   const requestsByKey = limiter('keys-key', 60, 1);
@@ -65,6 +68,7 @@ export function makeLimits(pool: object): Limits {
     },
     links: { take: (req) => consume(linksByAddress, addressOf(req)) },
     invitations: { take: (shopId) => consume(invitationsByShop, shopId) },
+    shops: { take: (accountId) => consume(shopsByAccount, accountId) },
     keys: {
       knock: (req) => consume(knocksByAddress, addressOf(req)),
       take: (keyId) => consume(requestsByKey, keyId),

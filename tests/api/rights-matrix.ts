@@ -88,6 +88,9 @@ export const rights: Readonly<Record<string, Row>> = {
   'change-coating': sheetKeepers,
   'export-coatings': everyone,
   'import-coatings': sheetKeepers,
+  'upload-data-sheet': sheetKeepers,
+  'remove-data-sheet': sheetKeepers,
+  'download-attachment': everyone,
   'touched-by-coating': everyone,
   'retime-with-coating': sheetKeepers,
 
@@ -117,6 +120,14 @@ export const rights: Readonly<Record<string, Row>> = {
   'list-api-keys': owners,
   'create-api-key': owners,
   'revoke-api-key': owners,
+
+  'create-shop': signedIn,
+  'read-first-steps': owners,
+  'take-hours': owners,
+  'take-places': owners,
+  'take-people': owners,
+  'take-sheets': owners,
+  'take-job': owners,
 
   'list-people': planners,
   'create-person': owners,
@@ -184,6 +195,7 @@ export type ForeignIds = Record<
   | 'zoneId'
   | 'keyId'
   | 'coatingId'
+  | 'attachmentId'
   | 'lampId'
   | 'circuitId'
   | 'openingId'
@@ -263,6 +275,9 @@ export const withForeignIds: Readonly<Record<string, (ids: ForeignIds) => { body
   'move-stage': ({ placeId }) => ({ body: { version: 1, start: '2026-03-11T13:00:00Z', placeId } }),
   'read-coating': () => ({}),
   'change-coating': () => ({ body: { version: 1, name: 'Mine now' } }),
+  'upload-data-sheet': () => ({ body: {} }),
+  'remove-data-sheet': () => ({}),
+  'download-attachment': () => ({}),
   'touched-by-coating': () => ({}),
   'retime-with-coating': ({ sheetId, jobId }) => ({ body: { version: 1, sheetIds: [sheetId], jobIds: [jobId] } }),
   'read-plan-run': () => ({}),
