@@ -7,6 +7,7 @@ import { joinRings, makeRing, type Ring, resetRing } from '../engine/ring.ts';
 import type { Shop } from '../engine/shop.ts';
 import { copyStage, makePlacing, type Placing } from '../engine/state.ts';
 import { placeNext, reachBack } from './place-next.ts';
+import { publishedVariants } from '../engine/published-variants.ts';
 
 /** Everything that makes a schedule again: the order of blocks, and what is chosen for them. */
 export type Genes = {
@@ -36,6 +37,8 @@ export type Search = {
   heldOutStage: Int32Array;
   cost: number;
   evaluations: number;
+  /** Variant of each block in the published plan; -1: none. */
+  published: Int32Array;
   /** Per block: 1 while what comes before its load is being placed. */
   awaited: Uint8Array;
   /** Asked now and then while many blocks are placed: true gives the candidate up. */
@@ -64,6 +67,7 @@ export function makeSearch(shop: Shop, alone: Int32Array): Search {
     heldOutStage: new Int32Array(shop.jobs.length).fill(-1),
     cost: Infinity,
     evaluations: 0,
+    published: publishedVariants(shop),
     awaited: new Uint8Array(blocks),
     halt: () => false,
   };
@@ -227,33 +231,32 @@ export function settleHeld(s: Search): void {
   settleGenes(s, true);
 }
 
-/** Starts over from an order: everything is placed anew, with every choice free or as the published plan has it. */
-export function startFrom(s: Search, order: Int32Array, published = false): void {
-  const { shop } = s.d;
-  const loads = published ? [...shop.standing, ...shop.published] : shop.standing;
-  if (begin(s, order, published, loads) || loads.length === 0) return;
-  begin(s, order, published, []); // a load left somebody without room
+/** Starts over from an order: everything is placed anew, with every choice free. */
+export const startFrom = (s: Search, order: Int32Array): void =>
+  placeAll(s, order, () => freeGenes(s), s.d.shop.standing);
+
+/** Places everything in an order with the genes that `choose` sets, in the loads given unless one leaves somebody out. */
+export function placeAll(
+  s: Search,
+  order: Int32Array,
+  choose: () => void,
+  loads: readonly (readonly [number, number])[],
+): void {
+  const place = (together: typeof loads): boolean => {
+    s.order.set(order);
+    if (s.cost === Infinity) s.held.order.set(order);
+    choose();
+    for (const [a, b] of together) joinRings(s.d.ring, a, b);
+    return attempt(s, 0, Infinity);
+  };
+  if (!place(loads) && loads.length > 0) place([]);
 }
 
-function begin(s: Search, order: Int32Array, published: boolean, loads: readonly [number, number][]): boolean {
-  const { d } = s;
-  s.order.set(order);
-  if (s.cost === Infinity) s.held.order.set(order);
+/** Leaves way, place, person, time and load of every block to the decoder. */
+export function freeGenes({ d }: Search): void {
   d.choice.fill(-1);
   d.handOf.fill(-1);
   d.spotOf.fill(-1);
   d.wishOf.fill(0);
   resetRing(d.ring);
-  if (published) for (let k = 0; k < d.shop.stageCount; k++) wishPublished(s, k);
-  for (const [a, b] of loads) joinRings(d.ring, a, b);
-  return attempt(s, 0, Infinity);
-}
-
-/** Asks for a stage what the published plan has: its place, its person, and not to start before. */
-export function wishPublished(s: Search, stage: number): void {
-  const { shop, spotOf, handOf, wishOf } = s.d;
-  if (shop.basePlace[stage]! < 0) return;
-  spotOf[stage] = shop.basePlace[stage]!;
-  handOf[stage] = shop.basePerson[stage]!;
-  wishOf[stage] = shop.baseStart[stage]!;
 }

@@ -1,6 +1,9 @@
 import { leaveRing } from '../engine/ring.ts';
 import { below, type Random } from '../random.ts';
-import { type Search, wishPublished } from './candidate.ts';
+import type { Shop } from '../engine/shop.ts';
+import { moved } from '../engine/state.ts';
+import type { Search } from './candidate.ts';
+import { wishPublished } from './published.ts';
 import { type Cut, shareRuns } from './share-runs.ts';
 
 /** Changes `s.order` or the genes in the decoder. Returns the first changed position, or -1 where nothing changed. */
@@ -132,11 +135,40 @@ export const changePlace: Move = (s, random) => {
   return s.at[block]!;
 };
 
+const weighsMoves = (shop: Shop): boolean => shop.problem.objective.moves > 0 && shop.problem.baseline.length > 0;
+
+function hasMoved(s: Search, id: number): boolean {
+  const { first, last } = s.d.shop.blocks[id]!;
+  for (let k = first; k <= last; k++) if (s.d.shop.basePlace[k]! >= 0 && moved(s.d.state, k)) return true;
+  return false;
+}
+
+/** A job without room, and others that stand about when it was published or might begin. */
+function aroundLeftOut(s: Search, random: Random, count: number): number[] {
+  const { shop } = s.d;
+  const out = shop.jobs.flatMap((_, j) => (s.heldOut[j] ? [j] : []));
+  const job = out[below(random, out.length)]!;
+  const { first, last } = shop.jobs[job]!;
+  const stage = first + below(random, last - first + 1);
+  const at = shop.basePlace[stage]! >= 0 ? shop.baseStart[stage]! : shop.jobs[job]!.release;
+  let near = 0;
+  while (near < s.order.length && s.d.state.at.start[shop.blocks[s.order[near]!]!.first]! < at) near++;
+  return jobsAround(s, random, near, [job], count + 1);
+}
+
 /** Jobs that stand near each other in the order of starts: one at random, the others around it. */
 function neighbours(s: Search, random: Random, count: number): number[] {
   const { shop } = s.d;
-  const around = below(random, s.order.length);
-  const jobs = [shop.blocks[s.order[around]!]!.job];
+  let around = below(random, s.order.length);
+  // Where moving costs, mostly begin at something that has moved.
+  for (let tries = 0; tries < 8 && weighsMoves(shop) && !hasMoved(s, s.order[around]!); tries++)
+    around = below(random, s.order.length);
+  return jobsAround(s, random, around, [shop.blocks[s.order[around]!]!.job], count);
+}
+
+/** Adds jobs that stand near a position of the order, until there are so many. */
+function jobsAround(s: Search, random: Random, around: number, jobs: number[], count: number): number[] {
+  const { shop } = s.d;
   const reach = 6 * count;
   for (let tries = 0; tries < 4 * count && jobs.length < count; tries++) {
     const i = around - reach + below(random, 2 * reach + 1);
@@ -155,7 +187,9 @@ export function ruin(s: Search, random: Random): number[] {
   const { shop } = s.d;
   const count = 1 + below(random, 4);
   const whole = random() < 0.7;
-  const cuts = neighbours(s, random, count).map((job): Cut => {
+  const leftOut = s.heldOut.includes(1) && random() < 0.5;
+  const jobs = leftOut ? aroundLeftOut(s, random, count) : neighbours(s, random, count);
+  const cuts = jobs.map((job): Cut => {
     const { blocks } = shop.jobs[job]!;
     return { job, from: whole || s.heldOut[job] ? 0 : below(random, blocks.length) };
   });
@@ -166,7 +200,7 @@ export function ruin(s: Search, random: Random): number[] {
     [queues[i], queues[k]] = [queues[k]!, queues[i]!];
   }
   const ids = random() < 0.5 ? queues.flat() : interleaved(queues, random);
-  const published = shop.problem.objective.moves > 0 && random() < 0.5;
+  const published = weighsMoves(shop) && random() < HOME;
   for (const id of ids) choose(s, random, id, published);
   return ids;
 }
@@ -184,6 +218,9 @@ function interleaved(queues: readonly number[][], random: Random): number[] {
   return ids;
 }
 
+/** Share of ruins after which everything is asked to go back to where it was published, where moving costs. */
+const HOME = 0.3;
+
 /** Mostly leaves place, way and person of a block to the decoder, now and then asks for something else. */
 function choose(s: Search, random: Random, id: number, published: boolean): void {
   const { shop, choice, handOf, spotOf, wishOf } = s.d;
@@ -196,6 +233,6 @@ function choose(s: Search, random: Random, id: number, published: boolean): void
     handOf[k] = way && way.people.length > 1 && random() < 0.06 ? way.people[below(random, way.people.length)]! : -1;
     spotOf[k] = way && way.places.length > 1 && random() < 0.06 ? way.places[below(random, way.places.length)]! : -1;
     wishOf[k] = k === first && random() < waiting ? below(random, s.ledger.last + 1) : 0;
-    if (published) wishPublished(s, k);
   }
+  if (published) wishPublished(s, id);
 }

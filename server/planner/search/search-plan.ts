@@ -1,6 +1,6 @@
 import { lowerBounds } from '../bounds.ts';
 import type { Decoder } from '../engine/decode.ts';
-import { blocksInOrder, jobOrders, publishedOrder, runningFirst } from '../engine/orders.ts';
+import { blocksInOrder, jobOrders, runningFirst } from '../engine/orders.ts';
 import { OUT } from '../engine/run-cost.ts';
 import type { Shop } from '../engine/shop.ts';
 import { makeRandom, type Random } from '../random.ts';
@@ -11,12 +11,16 @@ import { planNoWait } from './no-wait.ts';
 import { planJobShop } from './plan-job-shop.ts';
 import { makeSearch, type Search, startFrom } from './candidate.ts';
 import { costShown, type Kept, keepHeld, makeKept, standOn } from './kept.ts';
+import { placePublished, undisturbed } from './published.ts';
 
 export type Found = { d: Decoder; bound: number; stats: Stats };
 
 /** Looks at the clock only every so many evaluations; large shops, whose evaluations take long, after each. */
 const LOOK = 16;
 const LARGE = 100;
+/** Most evaluations of a repair, and most of the whole budget. */
+const REPAIR = 2000;
+const REPAIR_SHARE = 0.4;
 /** Evaluations of the first round where nobody says when the end comes; each next one is twice as long. */
 const FIRST_ROUND = 4000;
 /** Evaluations that a round of a small shop should have. */
@@ -93,8 +97,9 @@ function firstPlans(run: Run): void {
   const { s } = run;
   const { shop } = s.d;
   if (shop.problem.baseline.length > 0) {
-    startFrom(s, publishedOrder(shop), true);
-    keep(run);
+    repair(run);
+    // A plan made from nothing moves everything.
+    if (run.best.cost < OUT && shop.problem.objective.moves > 0) return;
   }
   for (const jobs of jobOrders(shop)) {
     if (run.best.cost < Infinity && isOver(run)) return;
@@ -107,6 +112,30 @@ function firstPlans(run: Run): void {
       order = [...out, ...order.filter((j) => !s.heldOut[j])]; // who found no room goes first
     }
   }
+}
+
+/**
+ * Stands on the published plan, as far as it still can, and where moving costs mends it before anything is made anew:
+ * jobs without room first, then by small steps back to where things stood.
+ */
+function repair(run: Run): void {
+  const { s } = run;
+  const stands = undisturbed(s);
+  for (const disturbedFirst of [true, false]) {
+    placePublished(s, stands, disturbedFirst);
+    keep(run);
+  }
+  const { moves } = s.d.shop.problem.objective;
+  if (moves === 0 || isOver(run)) return;
+  standOn(s, run.best);
+  const begun = s.evaluations;
+  const share = (): number => Math.max((s.evaluations - begun) / REPAIR, (shareGone(run) ?? 0) / REPAIR_SHARE);
+  anneal(s, run.random, {
+    share: () => (isOver(run) ? 1 : share()),
+    hot: 2 * moves,
+    cold: moves / 20,
+    onBetter: () => keep(run),
+  });
 }
 
 /** Share of the whole budget that is gone; null where nobody knows the end. */
@@ -122,6 +151,8 @@ function shareGone(run: Run): number | null {
  */
 function heatOf({ s, best }: Run): number {
   const w = s.d.shop.problem.objective;
+  // Where moving costs, hotter would move everything.
+  if (w.moves > 0 && s.d.shop.problem.baseline.length > 0) return Math.min(5 * w.moves, 200 * w.tardiness || Infinity);
   return w.tardiness > 0 ? 200 * w.tardiness : Math.max(1e-3, 0.02 * Math.abs(costShown(best)));
 }
 

@@ -1,0 +1,3 @@
+import type { Problem } from '#planner/index.ts';
+
+export function makeShop(args: Record<string, number | boolean>): Problem;
