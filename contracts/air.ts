@@ -136,13 +136,12 @@ export const importReadings = endpoint({
   body: csvImport,
   reply: csvReport,
 });
-/** A span of at most 31 days, oldest first, as the import takes it back. */
+/** The last 31 days, oldest first, as the import takes them back; of more than it takes at once the newest. */
 export const exportReadings = endpoint({
   name: 'export-readings',
   method: 'GET',
   path: '/api/shops/:shopId/air/readings/export',
   params: inShop,
-  query: z.strictObject({ from: instant, to: instant }),
   reply: csvExport,
 });
 

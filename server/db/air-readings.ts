@@ -81,18 +81,20 @@ export async function readingsOfZone(
 
 export type NamedReading = ReadingOfZone & { zone: string };
 
-/** All of a span with their zones' names, oldest first, at most `most`. */
-export const readingsOfSpan = (
+/** The newest since a moment with their zones' names, oldest first. */
+export async function newestReadings(
   trx: Trx,
   shopId: string,
-  { from, to, most }: { from: Date; to: Date; most: number },
-): Promise<NamedReading[]> =>
-  trx('air_reading')
+  { from, most }: { from: Date; most: number },
+): Promise<NamedReading[]> {
+  const newest = await trx('air_reading')
     .join('zone', (on) => on.on('zone.shop_id', 'air_reading.shop_id').andOn('zone.id', 'air_reading.zone_id'))
     .where({ 'air_reading.shop_id': shopId })
     .andWhere('at', '>=', from)
-    .andWhere('at', '<', to)
-    .orderBy(['at', 'air_reading.id'])
+    .orderBy([
+      { column: 'at', order: 'desc' },
+      { column: 'air_reading.id', order: 'desc' },
+    ])
     .limit(most)
     .select<NamedReading[]>({
       id: 'air_reading.id',
@@ -103,3 +105,5 @@ export const readingsOfSpan = (
       surfaceCelsius: 'surface_celsius',
       source: 'source',
     });
+  return newest.reverse();
+}

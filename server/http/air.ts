@@ -19,7 +19,7 @@ import type { Routes } from './route.ts';
 
 export function airRoutes(routes: Routes, deps: Deps): void {
   routes.shop(readAir, may.seeShop, ({ actor }) => read.readAir(deps, actor));
-  routes.shop(exportReadings, may.seeShop, ({ actor, query }) => exported.exportReadings(deps, actor, query));
+  routes.shop(exportReadings, may.seeShop, ({ actor }) => exported.exportReadings(deps, actor));
   routes.shop(importReadings, may.plan, ({ actor, body }) => imported.importReadings(deps, actor, body));
   routes.shop(listReadings, may.seeShop, ({ actor, params, query }) =>
     list.listReadings(deps, actor, params.zoneId, query),

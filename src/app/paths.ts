@@ -15,6 +15,8 @@ export const paths = {
   use: (search?: Search) => withSearch('/use', search),
   cure: (search?: Search) => withSearch('/cure', search),
   account: () => '/account',
+  firstSteps: () => '/shop',
+  newShop: () => '/shop/new',
   people: () => '/shop/people',
   places: () => '/shop/places',
   lamps: () => '/shop/lamps',
@@ -26,6 +28,8 @@ export const paths = {
   newSheet: (copyOf?: string) => withSearch('/shop/sheets/new', copyOf === undefined ? undefined : { copy: copyOf }),
   sheet: (sheetId: string, stage?: string) =>
     withSearch(`/shop/sheets/${sheetId}`, stage === undefined ? undefined : { stage }),
+  air: () => '/shop/air',
+  keys: () => '/shop/keys',
   members: () => '/shop/members',
   letters: () => '/shop/letters',
   mailbox: (letterId?: string) => withSearch('/mailbox', letterId === undefined ? undefined : { letter: letterId }),

@@ -13,9 +13,11 @@ const atDesk: RouteObject[] = [
   { path: '/cure', lazy: () => import('#src/features/cure/cure-page.tsx') },
   { path: '/use', lazy: () => import('#src/features/use/use-page.tsx') },
   { path: '/account', lazy: () => import('#src/features/account/account-page.tsx') },
+  { path: '/shop/new', lazy: () => import('#src/features/shop/new-shop/new-shop-page.tsx') },
   {
     lazy: () => import('#src/features/shop/shop-layout.tsx'),
     children: [
+      { path: '/shop', lazy: () => import('#src/features/shop/first-steps/first-steps-page.tsx') },
       { path: '/shop/places', lazy: () => import('#src/features/shop/places/places-page.tsx') },
       { path: '/shop/lamps', lazy: () => import('#src/features/shop/lamps/lamps-page.tsx') },
       { path: '/shop/hours', lazy: () => import('#src/features/shop/hours/hours-page.tsx') },
@@ -25,6 +27,8 @@ const atDesk: RouteObject[] = [
       { path: '/shop/sheets', lazy: () => import('#src/features/shop/sheets/sheets-page.tsx') },
       { path: '/shop/sheets/new', lazy: () => import('#src/features/shop/sheets/new-sheet-page.tsx') },
       { path: '/shop/sheets/:sheetId', lazy: () => import('#src/features/shop/sheets/sheet-page.tsx') },
+      { path: '/shop/air', lazy: () => import('#src/features/shop/air/air-page.tsx') },
+      { path: '/shop/keys', lazy: () => import('#src/features/shop/keys/keys-page.tsx') },
       { path: '/shop/members', lazy: () => import('#src/features/account/members-page.tsx') },
       { path: '/shop/letters', lazy: () => import('#src/features/account/letters-page.tsx') },
     ],

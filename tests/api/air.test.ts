@@ -196,9 +196,7 @@ describe('a file of readings', () => {
   });
 
   test('goes out as it comes in', async () => {
-    const { body } = await office
-      .get(`${air()}/readings/export?from=2026-03-02T00:00:00Z&to=2026-03-03T00:00:00Z`)
-      .expect(200);
+    const { body } = await office.get(`${air()}/readings/export`).expect(200);
     const { csv } = body as { csv: string };
     expect(csv.split('\r\n')[0]).toBe('zone,at,celsius,humidity,surface celsius,id');
     expect(csv).toContain('Hall,2026-03-02T07:00:00.000Z,16.5,71,13,');

@@ -9,10 +9,12 @@ export const groups: Group[] = [
   {
     title: 'The shop',
     sections: [
+      { to: '/shop', label: 'First steps', seen: may.setUp },
       { to: '/shop/settings', label: 'Shop', seen: may.plan },
       { to: '/shop/places', label: 'Booths and stations', seen: () => true },
       { to: '/shop/lamps', label: 'Lamps and circuits', seen: () => true },
       { to: '/shop/hours', label: 'Hours and closures', seen: () => true },
+      { to: '/shop/air', label: 'Air', seen: () => true },
       { to: '/shop/upkeep', label: 'Upkeep', seen: () => true },
     ],
   },
@@ -29,6 +31,7 @@ export const groups: Group[] = [
     sections: [
       { to: '/shop/members', label: 'Members', seen: may.setUp },
       { to: '/shop/letters', label: 'Letters sent', seen: may.setUp },
+      { to: '/shop/keys', label: 'API keys', seen: may.setUp },
     ],
   },
 ];
