@@ -31,6 +31,7 @@ export const errorCode = z.enum([
   'key-reused', // 409: this idempotency key came with another request
   'gone', // 410: link used or too old
   'too-large', // 413
+  'wrong-kind', // 415: a file that is none of the kinds named in fields
   'refused', // 422: a rule is broken, with reasons
   'too-many', // 429, with Retry-After
   'internal', // 500

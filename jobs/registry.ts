@@ -9,6 +9,7 @@ import { planWith } from './tasks/run-plan.ts';
 import { sendInvitation } from './tasks/send-invitation.ts';
 import { sendLetter } from './tasks/send-letter.ts';
 import { sendReset } from './tasks/send-reset.ts';
+import { sweepFiles } from './tasks/sweep-files.ts';
 
 /** What the worker knows to do, by kind. Ten attempts with growing delays are about three hours. */
 export const registry: Partial<Record<TaskKind, TaskDefinition>> = {
@@ -18,6 +19,7 @@ export const registry: Partial<Record<TaskKind, TaskDefinition>> = {
   'send-reset': { run: sendReset, attempts: 7 },
   'run-plan': planWith(twoSeeds(openPlannerThreads(availableParallelism()))),
   prune: { run: prune, attempts: 5 },
+  'sweep-files': { run: sweepFiles, attempts: 5 },
 };
 
 export type Lane = { kinds: readonly TaskKind[]; runners: number };
@@ -26,5 +28,5 @@ export type Lane = { kinds: readonly TaskKind[]; runners: number };
 export const lanes: readonly Lane[] = [
   { kinds: ['send-letter', 'send-invitation', 'send-reset'], runners: 4 },
   { kinds: ['run-plan'], runners: 1 },
-  { kinds: ['prune'], runners: 1 },
+  { kinds: ['prune', 'sweep-files'], runners: 1 },
 ];

@@ -5,7 +5,10 @@ import type { Deps } from '#server/deps.ts';
 /** The day is the task's key: however many workers there are and however often they start, it is done once a day. */
 export async function askForPruning(deps: Deps): Promise<void> {
   const day = deps.now().toISOString().slice(0, 10);
-  await deps.db.transaction((trx) => enqueue(trx, { kind: 'prune', key: day, shopId: null, payload: {} }));
+  await deps.db.transaction(async (trx) => {
+    for (const kind of ['prune', 'sweep-files'] as const)
+      await enqueue(trx, { kind, key: day, shopId: null, payload: {} });
+  });
 }
 
 /** @returns a function that ends the schedule. What a machine that is off at night misses is asked for at its start. */

@@ -13,6 +13,7 @@ export const statusOf: Record<ErrorCode, number> = {
   'key-reused': 409,
   gone: 410,
   'too-large': 413,
+  'wrong-kind': 415,
   refused: 422,
   'too-many': 429,
   internal: 500,

@@ -3,7 +3,7 @@ import { v7 as uuid } from 'uuid';
 
 export const TASK_CHANNEL = 'ovenbird_task';
 
-export type TaskKind = 'send-letter' | 'send-reset' | 'send-invitation' | 'run-plan' | 'prune';
+export type TaskKind = 'send-letter' | 'send-reset' | 'send-invitation' | 'run-plan' | 'prune' | 'sweep-files';
 
 /**
  * Queues background work in the caller's transaction: it exists if and only if that commits. The same kind and key is

@@ -1,13 +1,17 @@
 import { createHash } from 'node:crypto';
 import type { NextFunction, Request, Response, Router } from 'express';
-import type * as z from 'zod';
+import * as z from 'zod';
+import type { Upload } from '#contracts/attachments.ts';
 import type { Endpoint } from '#contracts/endpoint.ts';
 import { nothing } from '#contracts/endpoint.ts';
 import type { Deps } from '../deps.ts';
 import { Refusal } from '../errors.ts';
 import type { Actor } from '../policies.ts';
+import { dropStray, type ReceivedFile } from '../services/keep-file.ts';
 import { once } from '../services/once.ts';
 import { actorOf } from './actor.ts';
+import { receiveFile } from './receive-file.ts';
+import { sendFile, type SentFile } from './send-file.ts';
 import { mustBeSignedIn } from './signed-in.ts';
 
 /** `public`: anybody. `account`: signed in, no shop. A predicate: a member of the shop in the address who may. */
@@ -76,6 +80,51 @@ export class Routes {
     });
   }
 
+  /**
+   * A file sent as a form, taken once for the key it must carry: a header of our own is what no other site's form can send.
+   * The bytes count for what makes two requests the same. Where it fails, what was stored is taken out again.
+   */
+  upload<U extends Upload>(
+    upload: U,
+    access: (actor: Actor) => boolean,
+    kinds: readonly string[],
+    handle: (call: { actor: Actor; params: z.output<U['params']>; file: ReceivedFile }) => Promise<z.input<U['reply']>>,
+  ): void {
+    const endpoint = { ...upload, query: nothing, body: nothing };
+    this.#add(endpoint, access, async (req, res) => {
+      const actor = await actorOf(this.#deps, req);
+      if (!access(actor)) throw new Refusal('forbidden');
+      const call = parse({ ...endpoint, body: z.unknown() }, req, res);
+      return receiveFile(req, res, kinds, async (file) => {
+        const key = keyOf(req);
+        if (key === undefined) throw keyMissing();
+        const body = [file.name, file.sha256.toString('hex')];
+        const answer = async () => endpoint.reply.parse(await handle({ actor, params: call.params, file }));
+        try {
+          return await once(this.#deps, actor, keyed(key, endpoint, { ...call, body }), answer);
+        } catch (error) {
+          await dropStray(this.#deps, actor, file.id);
+          throw error;
+        }
+      });
+    });
+  }
+
+  /** A file of a shop, to be saved or, with `?open=1`, to be shown by the browser itself. */
+  download<D extends Pick<Endpoint, 'name' | 'path' | 'params'> & { method: 'GET' }>(
+    download: D,
+    access: (actor: Actor) => boolean,
+    handle: (call: { actor: Actor; params: z.output<D['params']> }) => Promise<SentFile>,
+  ): void {
+    const endpoint = { ...download, query: z.strictObject({ open: z.literal('1').optional() }), body: nothing };
+    this.#add({ ...endpoint, reply: nothing }, access, async (req, res) => {
+      const actor = await actorOf(this.#deps, req);
+      if (!access(actor)) throw new Refusal('forbidden');
+      const { params, query } = parse({ ...endpoint, reply: nothing }, req, res);
+      await sendFile(res, await handle({ actor, params }), query.open === '1');
+    });
+  }
+
   #add(
     endpoint: Pick<Endpoint, 'name' | 'method' | 'reply'> & { path: string },
     access: Access,
@@ -95,6 +144,9 @@ export class Routes {
     });
   }
 }
+
+const keyMissing = () =>
+  new Refusal('bad-request', { fields: [{ path: 'headers.idempotency-key', message: 'must be there' }] });
 
 function keyOf(req: Request): string | undefined {
   const key = req.get('idempotency-key');

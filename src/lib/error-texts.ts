@@ -33,6 +33,10 @@ const texts: Record<ApiErrorCode, ErrorText> = {
   'key-reused': { what: 'This was sent before with other contents.', next: 'Reload the page and enter it again.' },
   gone: { what: 'This link was used already or is too old.', next: 'Ask for a new one.' },
   'too-large': { what: 'It is too large to send.', next: 'Make it smaller and try again.' },
+  'wrong-kind': {
+    what: 'This kind of file is not taken here.',
+    next: 'What counts is what the file holds, not how it is called. Choose another one.',
+  },
   refused: { what: 'This breaks a rule, so nothing was changed.', next: '' },
   'too-many': { what: 'Too many tries.', next: 'Wait a moment before the next one.' },
   internal: { what: 'Something went wrong on the server.', next: 'It was noted there. Try again in a moment.' },

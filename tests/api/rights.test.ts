@@ -4,7 +4,7 @@ import type { Route } from '#server/http/route.ts';
 import { createApp } from '#server/app.ts';
 import { stranger, testApp, testDeps, type TestApp } from '../helpers/app.ts';
 import { freshDatabase, type TestDatabase } from '../helpers/database.ts';
-import { aCoating, aDraft, aJob, aSheet, aShop } from '../helpers/factories-jobs.ts';
+import { aCoating, aDraft, anAttachment, aJob, aSheet, aShop } from '../helpers/factories-jobs.ts';
 import { makeMember, makePerson, makeShop, type MadeMember } from '../helpers/factories.ts';
 import { rights, who, withForeignIds, type ForeignIds, type Who } from './rights-matrix.ts';
 
@@ -64,6 +64,7 @@ async function rowsOf(shop: { id: string; booth: string; lamp: string }, memberI
     zoneId,
     keyId,
     coatingId: await aCoating(app.deps.db, shop),
+    attachmentId: await anAttachment(app.deps.db, shop),
     ...(await setUpOf(shop)),
   };
 }

@@ -145,6 +145,24 @@ export async function aCoating(db: Knex, shop: { id: string }, given: Partial<Co
   return id;
 }
 
+/** The row of a file without its bytes. */
+export async function anAttachment(db: Knex, shop: { id: string }): Promise<string> {
+  const id = randomUUID();
+  await inShop(db, { shopId: shop.id, accountId: null }, (trx) =>
+    trx('attachment').insert({
+      shop_id: shop.id,
+      id,
+      kind: 'photo',
+      subject_id: randomUUID(),
+      name: 'photo.png',
+      bytes: 1,
+      mime: 'image/png',
+      sha256: Buffer.alloc(32),
+    }),
+  );
+  return id;
+}
+
 export type TestJob = { id: string; number: number; stages: string[] };
 export type TestJobInput = {
   title?: string;

@@ -230,7 +230,10 @@ describe('a task', () => {
 describe('pruning', () => {
   test('is asked for once a day, however many workers ask', async () => {
     await Promise.all(Array.from({ length: 5 }, () => askForPruning(app.deps)));
-    expect(await app.owner('task').select('kind', 'key')).toEqual([{ kind: 'prune', key: '2026-03-10' }]);
+    expect(await app.owner('task').orderBy('kind').select('kind', 'key')).toEqual([
+      { kind: 'prune', key: '2026-03-10' },
+      { kind: 'sweep-files', key: '2026-03-10' },
+    ]);
   });
 
   test('forgets what ran out and keeps what has not', async () => {

@@ -14,6 +14,7 @@ import { buildWeb } from '../../../scripts/lib/build.mjs';
 import { freePort } from '../../../scripts/lib/ports.mjs';
 import { seedDemo } from '../../../seeds/index.ts';
 import type { TestDatabase } from '../../helpers/database.ts';
+import { tempStorage } from '../../helpers/storage.ts';
 import { startTestWorker } from '../../helpers/worker.ts';
 
 /** A Tuesday, 10:20 in the demo shop's zone (Europe/Amsterdam): both shifts are in, the morning's work has begun. */
@@ -51,7 +52,8 @@ export async function startProgram(database: TestDatabase): Promise<Program> {
     SMTP_URL: smtpUrl,
     DEV_MAILBOX_DIR: mailFolder,
   });
-  const deps: Deps = { config, db: connect(database.url, config.DATABASE_POOL), log: pino({ level: 'silent' }), now };
+  const db = connect(database.url, config.DATABASE_POOL);
+  const deps: Deps = { config, db, log: pino({ level: 'silent' }), now, storage: tempStorage() };
   const program = createApp(deps);
   await prepareDummyHash(deps);
   program.start();
