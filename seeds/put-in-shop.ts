@@ -32,6 +32,7 @@ export async function putInShop(trx: Trx, shopId: string, calendar: DemoCalendar
       id: demoId('sheet', sheet.key),
       versionId: demoId('sheet', `${sheet.key}/1`),
       name: sheet.name,
+      at: calendar.at(-30, '10:00'),
       body: storedBody(sheet),
     });
 }

@@ -68,7 +68,7 @@ function Link({ link, at, body, chosen }: { link: ChainLink; at: number; body: S
         onClick={() => open(key)}
         aria-current={chosen ? 'true' : undefined}
         aria-label={`${number} ${title}: ${phasesInWords(phases, duration)}`}
-        style={{ width: Math.max(104, widthOf(minutes)) }}
+        style={{ width: Math.max(128, widthOf(minutes)) }}
         className={cx(
           'flex flex-col gap-1 rounded px-1.5 py-1.5 text-left hover:bg-paper',
           chosen && 'bg-petrol-soft shadow-[inset_0_-3px_0_var(--petrol)]',

@@ -6,6 +6,8 @@ import type { Fault } from '../model/faults.ts';
 
 /** What every part of the editor works with. */
 export type EditorParts = {
+  name: string;
+  rename: (to: string) => void;
   body: SheetBody;
   /** `tag` names the field, so that typing in it is one step of undo. */
   edit: (edit: Edit, tag?: string) => void;

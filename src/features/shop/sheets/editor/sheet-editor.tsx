@@ -3,13 +3,11 @@ import type { Coating } from '#contracts/coatings.ts';
 import type { SheetBody, SheetDetail, SheetGround } from '#contracts/sheets.ts';
 import { useFormats } from '#src/lib/session.ts';
 import { Caution } from '#src/ui/caution.tsx';
-import { TextField } from '#src/ui/text-field.tsx';
 import { changesBetween, type Change } from '../model/changes.ts';
 import { draftOf, type SheetDraft } from '../model/draft.ts';
 import { faultsOf } from '../model/faults.ts';
 import { ChainDrawing } from './chain-drawing.tsx';
 import { EditorContext, type EditorParts } from './editor-context.ts';
-import { FaultPlace } from './fault-place.tsx';
 import { FaultsPanel } from './faults-panel.tsx';
 import { NewerVersion } from './newer-version.tsx';
 import { Kept, SaveBar } from './save-bar.tsx';
@@ -63,6 +61,8 @@ export function SheetEditor({ draftName, initial, sheet, coatings, ground, readO
   }, [follow]);
   const parts: EditorParts = {
     body,
+    name: present.name,
+    rename: draft.rename,
     edit: draft.edit,
     undo: draft.undo,
     coatings,
@@ -96,21 +96,17 @@ export function SheetEditor({ draftName, initial, sheet, coatings, ground, readO
           />
         )}
         {draft.wasKept && <Kept onDrop={() => draft.begin(sheet ? draftOf(sheet) : initial)} />}
-        <fieldset disabled={readOnly} className="contents">
-          <FaultPlace stage={null} field="name" className="max-w-xl">
-            <TextField
-              label="Name of the sheet"
-              value={present.name}
-              maxLength={120}
-              autoComplete="off"
-              onChange={({ target }) => draft.rename(target.value)}
-            />
-          </FaultPlace>
-        </fieldset>
         <ChainDrawing chosen={stage?.key ?? null} />
-        <div className="grid items-start gap-4 lg:grid-cols-[18rem_minmax(0,1fr)]">
-          <div className="flex min-w-0 flex-col gap-4">
-            <StageList chosen={stage?.key ?? null} />
+        <div className="grid items-start gap-4 lg:grid-cols-[18rem_minmax(0,1fr)] lg:grid-rows-[auto_1fr]">
+          <StageList chosen={stage?.key ?? null} />
+          <fieldset
+            id="sheet-form"
+            disabled={readOnly}
+            className="min-w-0 scroll-mt-16 lg:col-start-2 lg:row-span-2 lg:row-start-1"
+          >
+            {stage ? <StageForm key={stage.key} stage={stage} /> : <SheetForm />}
+          </fieldset>
+          <div className="flex min-w-0 flex-col gap-4 lg:col-start-1">
             <FaultsPanel onJump={goTo} />
             {sheet && (
               <VersionsList
@@ -120,9 +116,6 @@ export function SheetEditor({ draftName, initial, sheet, coatings, ground, readO
               />
             )}
           </div>
-          <fieldset disabled={readOnly} className="min-w-0">
-            {stage ? <StageForm key={stage.key} stage={stage} /> : <SheetForm />}
-          </fieldset>
         </div>
         <Caution quiet>
           Minutes that are not from a data sheet are common practice, to be checked against the maker’s sheet, which

@@ -17,10 +17,19 @@ import { FaultPlace } from './fault-place.tsx';
 
 /** What belongs to the sheet as a whole: what it is for, the parts a job gets, and what a job can choose. */
 export function SheetForm() {
-  const { body, edit } = useEditor();
+  const { body, edit, name, rename } = useEditor();
   return (
     <section aria-label="Parts and options" className="flex min-w-0 flex-col gap-4">
-      <div className="card p-4">
+      <div className="card flex flex-col gap-3 p-4">
+        <FaultPlace stage={null} field="name">
+          <TextField
+            label="Name of the sheet"
+            value={name}
+            maxLength={120}
+            autoComplete="off"
+            onChange={({ target }) => rename(target.value)}
+          />
+        </FaultPlace>
         <FaultPlace stage={null} field="summary" also={['stage']}>
           <TextArea
             label="What it is for"
@@ -218,7 +227,7 @@ function OptionRow({ option }: { option: SheetOption }) {
       </Select>
       <Checkbox
         label="Usually on"
-        className="max-sm:order-3"
+        className="self-center max-sm:order-3"
         checked={on}
         onChange={({ target }) => set({ on: target.checked }, 'on')}
       />

@@ -6,7 +6,7 @@ import { Select } from '#src/ui/select.tsx';
 import { TextField } from '#src/ui/text-field.tsx';
 import { addWay, setStage, setStageCondition } from '../model/body-edits.ts';
 import { retimedStage } from '../model/retime.ts';
-import { belowAt } from '../model/stage-templates.ts';
+import { belowAt, belowWay } from '../model/stage-templates.ts';
 import { airDry, boothBake, byHand, lampCure, sprayWay } from '../model/way-templates.ts';
 import { ConditionSelect } from './condition-select.tsx';
 import { useEditor } from './editor-context.ts';
@@ -82,7 +82,7 @@ export function StageForm({ stage }: { stage: SheetStage }) {
       </div>
       <FaultPlace stage={stage.key} field="ways" className="!gap-3">
         {stage.ways.map((way) => (
-          <WayForm key={way.id} stage={stage} way={way} below={below} />
+          <WayForm key={way.id} stage={stage} way={way} below={belowWay(body, stage, way, coatings)} />
         ))}
         <AddWay stage={stage} add={(way) => edit(addWay(stage.key, way))} />
       </FaultPlace>

@@ -1,6 +1,7 @@
 import { useEffect, useRef } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import type { SheetBody, SheetStage } from '#contracts/sheets.ts';
+import { useMedia } from '#src/lib/use-media.ts';
 import type { Fault } from '../model/faults.ts';
 import { placeId } from './editor-context.ts';
 
@@ -10,11 +11,17 @@ export function useStageLink(body: SheetBody) {
   const wanted = search.get('stage');
   const stage: SheetStage | null = body.stages.find(({ key }) => key === wanted) ?? null;
   const jump = useRef<Fault | null>(null);
+  const toForm = useRef(false);
+  const isNarrow = useMedia('(max-width: 63.99rem)');
   useEffect(() => {
     if (jump.current) focusOn(jump.current);
+    else if (toForm.current) document.getElementById('sheet-form')?.scrollIntoView({ block: 'start' });
     jump.current = null;
+    toForm.current = false;
   }, [wanted]);
-  const open = (key: string | null): void =>
+  const open = (key: string | null): void => {
+    // On a phone the form stands below the list.
+    if (isNarrow && key !== wanted) toForm.current = true;
     setSearch(
       (now) => {
         if (key === null) now.delete('stage');
@@ -23,6 +30,7 @@ export function useStageLink(body: SheetBody) {
       },
       { replace: true },
     );
+  };
   const goTo = (fault: Fault): void => {
     if ((stage?.key ?? null) === fault.stage) return focusOn(fault);
     jump.current = fault;
@@ -34,6 +42,7 @@ export function useStageLink(body: SheetBody) {
 /** Puts the focus on the first control of the place that a fault is about. */
 function focusOn({ stage, way, field }: Fault): void {
   const place = document.getElementById(placeId(stage, way, field))?.parentElement;
+  for (let fold = place?.closest('details'); fold; fold = fold.parentElement?.closest('details')) fold.open = true;
   const target = place?.querySelector<HTMLElement>('input, select, textarea, button');
   target?.focus();
   place?.scrollIntoView({ block: 'center' });

@@ -149,10 +149,21 @@ function WhoAndWhere({
 /** What most ways leave as it is. */
 function More({ stage, way, set }: Omit<WayFormProps, 'below'> & { set: (part: Partial<Way>, field: string) => void }) {
   const { body } = useEditor();
-  const used = way.split || way.load !== null || way.family !== null;
+  const condition = way.option ?? way.unlessOption;
+  const said = [
+    way.split ? 'hand work may pause' : '',
+    way.load === null ? '' : `shares runs as ${way.load}`,
+    way.family === null ? '' : `clean-up as ${way.family}`,
+    condition === undefined
+      ? ''
+      : `${way.option === undefined ? 'without' : 'with'} “${body.options.find(({ key }) => key === condition)?.label ?? condition}”`,
+  ].filter(Boolean);
   return (
-    <details className="min-w-0 sm:col-span-2" open={used || undefined}>
-      <summary className="min-h-control-small font-semibold text-muted">Pauses, shared booth runs, clean-up</summary>
+    <details className="min-w-0 sm:col-span-2">
+      <summary className="min-h-control-small">
+        <span className="font-semibold">More</span>
+        <span className="text-muted"> {said.join(', ') || 'pauses, shared booth runs, clean-up, option'}</span>
+      </summary>
       <div className="mt-2 grid gap-x-4 gap-y-3 sm:grid-cols-2">
         <Checkbox
           label="Hand work may pause"

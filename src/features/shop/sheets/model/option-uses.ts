@@ -2,7 +2,7 @@ import type { SheetBody } from '#contracts/sheets.ts';
 
 /** What an option does in a sheet, in a few words each; empty: nothing names it yet. */
 export function usesOf({ stages }: Pick<SheetBody, 'stages'>, key: string): string[] {
-  return stages.flatMap((stage) => [
+  const uses = stages.flatMap((stage) => [
     ...(stage.option === key ? [`adds ${stage.title}`] : []),
     ...(stage.unlessOption === key ? [`leaves out ${stage.title}`] : []),
     ...stage.ways.flatMap((way) => [
@@ -11,4 +11,5 @@ export function usesOf({ stages }: Pick<SheetBody, 'stages'>, key: string): stri
       ...(way.phases.some(({ perExtraCoat }) => perExtraCoat === key) ? [`coats of ${stage.title}`] : []),
     ]),
   ]);
+  return [...new Set(uses)];
 }

@@ -42,3 +42,7 @@ export const plainWay: Way = {
   bakeCelsius: null,
   phases: [{ kind: 'work', minutes: 30, attendance: 'hands' }],
 };
+
+export function withoutSource({ source: _, ...phase }: Phase): Phase {
+  return phase;
+}

@@ -1,3 +1,5 @@
+import { expandSheet } from '#server/sheets/expand-sheet.ts';
+import { optionsOn } from '#server/sheets/options.ts';
 import { sprays } from '#server/sheets/way-times.ts';
 import type { Coating, CoatingKind } from '#contracts/coatings.ts';
 import type { SheetBody, SheetStage, Way } from '#contracts/sheets.ts';
@@ -65,13 +67,30 @@ export const stageTemplates: readonly Template[] = [
 ];
 export type StageTemplate = (typeof stageTemplates)[number];
 
-/** What is under a stage at this position: the coating sprayed last before it, wet where nothing came between. */
-export function belowAt(body: Pick<SheetBody, 'stages'>, at: number, coatings: readonly Coating[]): Below {
-  const before = body.stages.slice(0, at);
+/** What is under a stage put at this position, with the usual options. */
+export function belowAt(body: Pick<SheetBody, 'stages' | 'options'>, at: number, coatings: readonly Coating[]): Below {
+  return topOf({ stages: body.stages.slice(0, at) }, optionsOn(body), coatings);
+}
+
+/** What is under a way of a stage, where its own options and those of the stage are as it needs them. */
+export function belowWay(
+  body: Pick<SheetBody, 'stages' | 'options'>,
+  stage: SheetStage,
+  way: Way,
+  coatings: readonly Coating[],
+): Below {
+  const needed = [stage.option, way.option].filter((key) => key != null);
+  const without = [stage.unlessOption, way.unlessOption];
+  const chosen = [...optionsOn(body).filter((key) => !without.includes(key)), ...needed];
+  return topOf({ stages: body.stages.slice(0, body.stages.indexOf(stage)) }, chosen, coatings);
+}
+
+/** The coating sprayed last of these stages, wet where it was the last of them. */
+function topOf(body: Pick<SheetBody, 'stages'>, chosen: readonly string[], coatings: readonly Coating[]): Below {
+  const before = expandSheet(body, chosen);
   const sprayed = before.findLastIndex(({ ways }) => ways.some(sprays));
   const id = before[sprayed]?.coatingId;
-  const coating = coatings.find((one) => one.id === id) ?? null;
-  return { coating, wet: sprayed >= 0 && sprayed === at - 1 };
+  return { coating: coatings.find((one) => one.id === id) ?? null, wet: sprayed >= 0 && sprayed === before.length - 1 };
 }
 
 /** The coating that a sheet would most likely use: the one it uses already, else the first of that kind. */
@@ -92,7 +111,7 @@ export function likelyCoating(
 /** A new stage for that position, filled from the data sheets. */
 export function stageFrom(
   template: StageTemplate,
-  body: Pick<SheetBody, 'stages'>,
+  body: Pick<SheetBody, 'stages' | 'options'>,
   at: number,
   coatings: readonly Coating[],
 ): SheetStage {
