@@ -10,6 +10,7 @@ import signIns from '../seeds/demo-sign-ins.json' with { type: 'json' };
 import { demoShopId, seedDemo } from '../seeds/index.ts';
 import { throwawayCluster } from '../tests/helpers/postgres.ts';
 import { measureDayView } from './bench/day-view.ts';
+import { absorbDisturbances } from './bench/disturbances.ts';
 import { timeFirstPlan } from './bench/first-plans.ts';
 import { growProblem } from './bench/grow-problem.ts';
 import { growthExponent } from './bench/growth-exponent.ts';
@@ -44,6 +45,15 @@ function sayFirstPlans(demo: Problem): void {
   );
 }
 
+function sayDisturbances(demo: Problem): void {
+  say('\nThe demo shop after a disturbance (middle of 5)   ms   moved of   unplaced  rules broken');
+  for (const d of absorbDisturbances(demo))
+    say(
+      `  ${d.name.padEnd(44)}${d.milliseconds.toFixed(0).padStart(6)}${String(d.moved).padStart(6)} of ${d.movable}` +
+        `${String(d.unplaced).padStart(8)}${String(d.violations).padStart(10)}`,
+    );
+}
+
 async function sayDayView(url: string): Promise<void> {
   const lead = signIns.find(({ role }) => role === 'lead');
   if (!lead) throw new Error('The demo has no lead to sign in as.');
@@ -71,7 +81,9 @@ try {
   const url = cluster.url('template_ovenbird');
   await migrateLatest(url);
   await seedDemo(url, new Date());
-  sayFirstPlans(await demoProblem(url));
+  const demo = await demoProblem(url);
+  sayFirstPlans(demo);
+  sayDisturbances(demo);
   await sayDayView(url);
 } finally {
   await cluster.stop();

@@ -121,7 +121,7 @@ function firstPlans(run: Run): void {
 function repair(run: Run): void {
   const { s } = run;
   const stands = undisturbed(s);
-  for (const disturbedFirst of [true, false]) {
+  for (const disturbedFirst of [false, true]) {
     placePublished(s, stands, disturbedFirst);
     keep(run);
   }
