@@ -1,10 +1,11 @@
-import { ChevronDown, Inbox, LogOut, Mails, ScrollText, UserRound, UsersRound } from 'lucide-react';
+import { ChevronDown, Inbox, LogOut, Mails, ScrollText, Settings2, UserRound, UsersRound } from 'lucide-react';
 import { Link } from 'react-router-dom';
 import { may, useMe, useShop } from '#src/lib/session.ts';
 import { chooseTheme, useTheme, type Theme } from '#src/lib/theme.ts';
 import { Menu, MenuChoice, MenuItem, MenuLine } from '#src/ui/menu.tsx';
 import { paths } from './paths.ts';
 import { roleWord } from '#src/lib/role-words.ts';
+import { useSetUpPath } from './use-set-up-path.ts';
 import { useSignOut } from './use-sign-out.ts';
 
 const themes: { value: Theme; label: string }[] = [
@@ -20,6 +21,7 @@ export function AccountMenu() {
   const signOut = useSignOut();
   const links = [
     { to: paths.account(), label: 'Your account', Icon: UserRound, seen: true },
+    { to: useSetUpPath(), label: 'Set-up', Icon: Settings2, seen: true },
     { to: paths.members(), label: 'Members', Icon: UsersRound, seen: may.setUp(shop.role) },
     { to: paths.letters(), label: 'Letters sent', Icon: Mails, seen: may.setUp(shop.role) },
     { to: paths.mailbox(), label: 'Local mailbox', Icon: Inbox, seen: localMailbox },

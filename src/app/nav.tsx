@@ -1,8 +1,9 @@
 import { BarChart3, CalendarClock, ClipboardList, SprayCan, Thermometer } from 'lucide-react';
-import { NavLink } from 'react-router-dom';
+import { NavLink, useLocation } from 'react-router-dom';
 import { cx } from '#src/lib/cx.ts';
 import { may, useShop } from '#src/lib/session.ts';
 import { paths } from './paths.ts';
+import { useSetUpPath } from './use-set-up-path.ts';
 
 function usePlaces() {
   const { role } = useShop();
@@ -32,7 +33,28 @@ export function TopNav() {
           {label}
         </NavLink>
       ))}
+      <SetUpLink />
     </nav>
+  );
+}
+
+/** All pages below /shop belong to it. On a phone it is in the account menu: the bar has room for daily things only. */
+function SetUpLink() {
+  const to = useSetUpPath();
+  const { role } = useShop();
+  const isActive = useLocation().pathname.startsWith(paths.firstSteps());
+  if (!may.plan(role)) return null;
+  return (
+    <NavLink
+      to={to}
+      aria-current={isActive ? 'page' : undefined}
+      className={cx(
+        'flex items-center border-b-2 pt-0.5 text-[0.8125rem] font-semibold whitespace-nowrap',
+        isActive ? 'border-ember text-ink' : 'border-transparent text-muted hover:text-ink',
+      )}
+    >
+      Set-up
+    </NavLink>
   );
 }
 
