@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { useMemo, useState } from 'react';
-import { Navigate, Outlet, useLocation } from 'react-router-dom';
+import { Navigate, Outlet, useLocation, useNavigate } from 'react-router-dom';
 import type { Me } from '#contracts/session.ts';
 import { formatsFor } from '#src/lib/formats.ts';
 import { useLive } from '#src/lib/live.ts';
@@ -14,6 +14,7 @@ import { PageSkeleton } from './page-skeleton.tsx';
 export function Component() {
   const { data: me } = useQuery(meQuery);
   const { pathname, search, hash } = useLocation();
+  const navigate = useNavigate();
   if (me === undefined) return <PageSkeleton />;
   if (me === null)
     return (
@@ -22,7 +23,7 @@ export function Component() {
         <PageSkeleton />
       </>
     );
-  if (me.shops.length === 0) return <NoShop me={me} />;
+  if (me.shops.length === 0) return <NoShop me={me} onOpened={() => void navigate(paths.firstSteps())} />;
   return <InShop me={me} />;
 }
 

@@ -22,6 +22,8 @@ export function Component() {
               <NavLink
                 key={to}
                 to={to}
+                // The first page's address begins all the others.
+                end={to === '/shop'}
                 className={({ isActive }) =>
                   cx(
                     'flex min-h-11 items-center border-b-2 px-2 text-[0.8125rem] font-semibold whitespace-nowrap lg:min-h-control lg:rounded lg:border-0',
