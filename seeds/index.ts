@@ -10,6 +10,7 @@ import { liveWeek, takeResources } from './live-week.ts';
 import { people } from './people.ts';
 import { postWeek } from './post-week.ts';
 import { accountOf, putInAccounts } from './put-in-accounts.ts';
+import { putInAir } from './put-in-air.ts';
 import { putInHistory, type Line } from './put-in-history.ts';
 import { enteredAt, jobIdOf, putInJob } from './put-in-jobs.ts';
 import { putInShop } from './put-in-shop.ts';
@@ -67,6 +68,7 @@ async function putInDemo(trx: Trx, calendar: DemoCalendar): Promise<void> {
   await enter(['new']);
   history.push(...(await withdraw(trx, calendar)), ...(await happen(trx, calendar.now)));
   await takeResources(trx, demoShopId, calendar.now);
+  await putInAir(trx, demoShopId, calendar);
   await putInHistory(trx, demoShopId, history);
 }
 

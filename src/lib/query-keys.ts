@@ -46,5 +46,5 @@ export const topicsOf: Record<ChangeKind, readonly Topic[]> = {
   'shop-changed': [...drafted, 'setup', 'use'],
   'people-changed': [...drafted, 'people', 'bench'],
   'sheets-changed': ['sheets', 'job'],
-  'air-read': ['air', 'day'],
+  'air-read': ['air', 'day', 'bench'],
 };

@@ -2,18 +2,18 @@ import type { BenchView as View } from '#contracts/bench.ts';
 import { useFormats } from '#src/lib/session.ts';
 import { Caution } from '#src/ui/caution.tsx';
 import { EmptyState } from '#src/ui/empty-state.tsx';
-import { ErrorNote } from '#src/ui/error-note.tsx';
 import { useServerNow } from './data/use-server-now.ts';
 import { useTaps } from './data/use-taps.ts';
 import { benchList, tapped } from './model/bench-list.ts';
 import { DoneList, LaterList } from './other-stages.tsx';
 import { NextStage } from './next-stage.tsx';
+import { RefusedTap } from './refused-tap.tsx';
 import { RunningStage } from './running-stage.tsx';
 
 /** `arrivedAt`: the browser's clock when the answer came; with the server's time in it, that gives the difference. */
 export function BenchView({ data, arrivedAt }: { data: View; arrivedAt: number }) {
   const now = useServerNow(Date.parse(data.serverTime) - arrivedAt);
-  const { taps, refused, isStuck, tap, forgive } = useTaps();
+  const { taps, refused, isStuck, tap, overrule, forgive } = useTaps();
   const { dayOf } = useFormats();
   const isToday = dayOf(now) === data.day;
   const list = benchList(taps.reduce((stages, each) => tapped(stages, each.stageId, each.deed, each.at), data.stages));
@@ -22,16 +22,7 @@ export function BenchView({ data, arrivedAt }: { data: View; arrivedAt: number }
   const onTap = isToday ? tap : null;
   return (
     <div className="flex flex-col gap-5">
-      {refused && (
-        <ErrorNote
-          error={refused.error}
-          what={`${refused.tap.deed === 'start' ? 'Start' : 'Done'} of ${refused.tap.words} was not taken.`}
-        >
-          <button type="button" className="link self-start py-2" onClick={forgive}>
-            I have seen it
-          </button>
-        </ErrorNote>
-      )}
+      {refused && <RefusedTap refused={refused} onOverrule={(reason) => overrule(refused, reason)} onSeen={forgive} />}
       {isStuck && (
         <p role="status" className="rounded border border-amber bg-amber-soft px-4 py-3 text-base font-semibold">
           No answer from the server. {taps.length > 1 ? `Your ${taps.length} taps are` : 'Your tap is'} kept and sent by

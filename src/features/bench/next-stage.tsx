@@ -1,4 +1,5 @@
 import type { BenchStage } from '#contracts/bench.ts';
+import { AirNote } from './air-note.tsx';
 import { cx } from '#src/lib/cx.ts';
 import { phasesInWords } from '#src/lib/phase-words.ts';
 import { useFormats } from '#src/lib/session.ts';
@@ -30,6 +31,7 @@ export function NextStage({ stage, now, waiting, onTap, isOnly }: NextStageProps
       </p>
       <StageDrawing stage={stage} now={now} />
       <StageFacts stage={stage} />
+      <AirNote air={stage.air} />
       {!stage.ready && <p className="text-base font-semibold text-amber">The stage before it is not done yet.</p>}
       <TapButton stage={stage} deed="start" now={now} waiting={waiting} onTap={onTap} main={isOnly && stage.ready} />
     </section>

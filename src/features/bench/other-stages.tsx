@@ -1,3 +1,4 @@
+import { AirNote } from './air-note.tsx';
 import { Check, ChevronDown } from 'lucide-react';
 import type { BenchStage } from '#contracts/bench.ts';
 import { useFormats } from '#src/lib/session.ts';
@@ -41,6 +42,7 @@ export function LaterList({ stages, now, waitFor, onTap }: LaterListProps) {
               <div className="flex flex-col gap-4 border-t border-line p-4">
                 <StageDrawing stage={stage} now={now} />
                 <StageFacts stage={stage} />
+                <AirNote air={stage.air} />
                 {!stage.ready && (
                   <p className="text-base font-semibold text-amber">The stage before it is not done yet.</p>
                 )}

@@ -4,6 +4,8 @@ import { formatDay } from '#src/lib/formats.ts';
 import { useIsNarrow, useMedia } from '#src/lib/use-media.ts';
 import { ErrorNote } from '#src/ui/error-note.tsx';
 import { Page } from '#src/ui/page.tsx';
+import { AirStrip } from './air/air-strip.tsx';
+import { ChangedAir } from './air/changed-air.tsx';
 import { DayBody } from './day-body.tsx';
 import { BoardSkeleton } from './day-states.tsx';
 import { DayToolbar } from './day-toolbar.tsx';
@@ -55,6 +57,10 @@ export function Component() {
       }
     >
       <DayToolbar {...{ link, today, narrow, view, canPlan, moves, zoom }} onZoom={setZoom} onLink={setLink} />
+      {view && <AirStrip view={view} formats={formats} />}
+      {view && view.posted.changedAir.length > 0 && (
+        <ChangedAir view={view} formats={formats} replan={canPlan ? () => planning.start('all') : null} />
+      )}
       <RunStrip planning={planning} skew={booth.skew} />
       {refused && refused.move.stageId !== link.stage && (
         <RefusedNote refused={refused} bars={view?.bars ?? []} onClose={moves.forgive} />

@@ -7,7 +7,7 @@ import { isApiError } from '#src/lib/api-error.ts';
 import { call } from '#src/lib/api.ts';
 import { onConnection } from '#src/lib/connection.ts';
 import { useMe, useShop } from '#src/lib/session.ts';
-import { tapQueue, type Tap, type TapQueue } from '../model/tap-queue.ts';
+import { tapQueue, type Refused, type Tap, type TapQueue } from '../model/tap-queue.ts';
 import { benchKey } from './bench-queries.ts';
 
 const kept = z.array(
@@ -18,6 +18,7 @@ const kept = z.array(
     version: z.number(),
     at: z.string(),
     words: z.string(),
+    overrule: z.string().optional(),
   }),
 );
 
@@ -31,8 +32,10 @@ function queueOf(client: QueryClient, accountId: string, shopId: string): TapQue
   const made = tapQueue({
     load: () => loadTaps(store),
     save: (taps) => saveTaps(store, taps),
-    send: ({ stageId, deed, version, key }) =>
-      call(deed === 'start' ? startStage : finishStage, { params: { shopId, stageId }, body: { version }, key }),
+    send: ({ stageId, deed, version, key, overrule }) =>
+      deed === 'start'
+        ? call(startStage, { params: { shopId, stageId }, body: { version, overrule }, key })
+        : call(finishStage, { params: { shopId, stageId }, body: { version }, key }),
     judge,
     rest: (tries) => backOnline(Math.min(15_000, 1_000 * 2 ** tries)),
     settle: () => client.invalidateQueries({ queryKey: benchKey(shopId) }),
@@ -61,7 +64,10 @@ export function useTaps() {
       at: new Date(at).toISOString(),
       words: `${stage.jobNumber} ${stage.title}`,
     });
-  return { ...state, tap, forgive: queue.forgive };
+  /** The tap that was refused, again, with the reason for which a gate is passed over. */
+  const overrule = ({ tap: refused }: Refused, reason: string) =>
+    void queue.add({ ...refused, key: v7(), at: new Date().toISOString(), overrule: reason });
+  return { ...state, tap, overrule, forgive: queue.forgive };
 }
 
 function loadTaps(store: string): Tap[] {

@@ -10,6 +10,8 @@ export type Tap = {
   at: string;
   /** `2418 Prime`, for what is said about it. */
   words: string;
+  /** Why it is sprayed although the dew-point gate is shut. */
+  overrule?: string | undefined;
 };
 
 export type Refused = { tap: Tap; error: unknown };
