@@ -2,6 +2,7 @@ import { screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { beforeEach, describe, expect, it } from 'vitest';
 import { newJob } from '#contracts/jobs.ts';
+import type { SheetBody } from '#contracts/sheets.ts';
 import { expectAccessible } from '#src/testing/axe.ts';
 import { apiError, fakeApi, type Sent } from '#src/testing/fake-api.ts';
 import { stubWidth } from '#src/testing/media.ts';
@@ -14,6 +15,24 @@ const sheets = { [`GET /api/shops/${shopId}/process-sheets`]: { body: { sheets: 
 const create = `POST /api/shops/${shopId}/jobs`;
 const others = [{ path: '/jobs/:jobId', element: <p>The job&rsquo;s page</p> }];
 const show = () => renderPage(<NewJobPage />, { at: '/jobs/new', me: meAs('office'), others });
+const withExtraCoats = (body: SheetBody): SheetBody => ({
+  ...body,
+  options: [...body.options, { key: 'coats', label: 'Extra coats', on: false, most: 3 }],
+  stages: body.stages.map((stage) =>
+    stage.key === 'colour'
+      ? {
+          ...stage,
+          ways: stage.ways.map((way) => ({
+            ...way,
+            phases: [
+              ...way.phases,
+              { kind: 'spray' as const, minutes: 10, attendance: 'hands' as const, perExtraCoat: 'coats' },
+            ],
+          })),
+        }
+      : stage,
+  ),
+});
 const made = (sent: Sent[]) => sent.filter((one) => one.method === 'POST').map((one) => newJob.parse(one.body));
 
 beforeEach(() => stubWidth(1440));
@@ -46,6 +65,23 @@ describe('a new job', () => {
     await userEvent.click(screen.getByRole('checkbox', { name: 'Filler to shape first' }));
     expect(within(stages).getByText('Fill and shape')).toBeVisible();
     expect(within(stages).getByText(/8 stages, at least/)).toBeVisible();
+  });
+
+  it('counts what can be chosen several times, and shows it in the stages', async () => {
+    const counted = { ...tailgateSheet, body: withExtraCoats(tailgateSheet.body) };
+    const { sent } = fakeApi({
+      [`GET /api/shops/${shopId}/process-sheets`]: { body: { sheets: [counted] } },
+      [create]: { body: sampleJob() },
+    });
+    show();
+    await userEvent.click(await screen.findByRole('radio', { name: /Tailgate, repaired/ }));
+    const stages = screen.getByRole('region', { name: 'Stages' });
+    const before = within(stages).getByRole('status').textContent;
+    await userEvent.selectOptions(screen.getByRole('combobox', { name: 'Extra coats' }), '2');
+    expect(within(stages).getByRole('status').textContent).not.toBe(before);
+    await userEvent.type(screen.getByRole('textbox', { name: 'Title' }), 'Tailgate');
+    await userEvent.click(screen.getByRole('button', { name: 'Make the job' }));
+    await waitFor(() => expect(made(sent)).toMatchObject([{ options: ['polish', 'coats', 'coats'] }]));
   });
 
   it('marks what is missing at its field and sends nothing', async () => {

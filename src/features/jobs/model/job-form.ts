@@ -2,9 +2,9 @@ import * as z from 'zod';
 import { substrate } from '#contracts/common.ts';
 import { newJob, type NewJob } from '#contracts/jobs.ts';
 import type { Sheet } from '#contracts/sheets.ts';
+import { optionsOn } from '#server/sheets/options.ts';
 import type { Reader } from '#src/lib/formats.ts';
 import { jobFacts, readFacts, type Fault } from './job-facts.ts';
-import { optionsOn } from './sheet-stages.ts';
 import { typeDateTime } from './typed.ts';
 
 /** What stands in the form for a new job: everything as typed, so that nothing is lost or turned while one types. */

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { SheetBody, Way } from '#contracts/sheets.ts';
-import { leastMinutes, optionsOn, stagesLeft } from './sheet-stages.ts';
+import { optionsOn } from '#server/sheets/options.ts';
+import { leastMinutes, stagesLeft } from './sheet-stages.ts';
 
 const way = (given: Partial<Way>): Way => ({
   id: 'hand',

@@ -1,5 +1,6 @@
 import type { PhaseKind } from '#contracts/common.ts';
 import type { SheetBody, Way } from '#contracts/sheets.ts';
+import { expandSheet } from '#server/sheets/expand-sheet.ts';
 
 export type StagePreview = {
   key: string;
@@ -14,22 +15,20 @@ export type StagePreview = {
   ways: string[];
 };
 
-/** The chosen options' stages, in the sheet's order: what a job made from it would have to go through. */
+/** The stages that the chosen options leave, in the sheet's order: what a job made from it would have to go through. */
 export function stagesLeft(body: SheetBody, options: readonly string[]): StagePreview[] {
-  return body.stages
-    .filter((stage) => stage.option === null || options.includes(stage.option))
-    .map((stage, i) => {
-      const shortest = stage.ways.reduce((best, way) => (minutesOf(way) < minutesOf(best) ? way : best));
-      return {
-        key: stage.key,
-        title: stage.title,
-        phases: shortest.phases.map(({ kind, minutes }) => ({ kind, minutes })),
-        least: minutesOf(shortest),
-        most: Math.max(...stage.ways.map(minutesOf)),
-        wait: i === 0 ? 0 : Math.min(...stage.ways.map((way) => way.gap.min)),
-        ways: stage.ways.map((way) => way.label),
-      };
-    });
+  return expandSheet(body, options).map(({ key, title, ways }, i) => {
+    const shortest = ways.reduce((best, way) => (minutesOf(way) < minutesOf(best) ? way : best));
+    return {
+      key,
+      title,
+      phases: shortest.phases.map(({ kind, minutes }) => ({ kind, minutes })),
+      least: minutesOf(shortest),
+      most: Math.max(...ways.map(minutesOf)),
+      wait: i === 0 ? 0 : Math.min(...ways.map((way) => way.gap.min)),
+      ways: ways.map((way) => way.label),
+    };
+  });
 }
 
 /** Minutes a way takes when nothing pauses it. */
@@ -38,5 +37,3 @@ export const minutesOf = (way: Pick<Way, 'phases'>): number => way.phases.reduce
 /** Least minutes from the first start to the last end, if one stage followed another at once and the shop never closed. */
 export const leastMinutes = (stages: readonly StagePreview[]): number =>
   stages.reduce((sum, stage) => sum + stage.wait + stage.least, 0);
-
-export const optionsOn = (body: SheetBody): string[] => body.options.filter((o) => o.on).map((o) => o.key);

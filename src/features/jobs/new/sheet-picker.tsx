@@ -1,11 +1,12 @@
 import { Check } from 'lucide-react';
 import { useState } from 'react';
 import type { Sheet } from '#contracts/sheets.ts';
+import { optionsOn } from '#server/sheets/options.ts';
 import { cx } from '#src/lib/cx.ts';
 import { useFormats } from '#src/lib/session.ts';
 import { useIsNarrow } from '#src/lib/use-media.ts';
 import { Button } from '#src/ui/button.tsx';
-import { leastMinutes, optionsOn, stagesLeft } from '../model/sheet-stages.ts';
+import { leastMinutes, stagesLeft } from '../model/sheet-stages.ts';
 import { StageChain } from './stage-chain.tsx';
 
 type SheetPickerProps = {

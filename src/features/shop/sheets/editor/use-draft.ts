@@ -20,7 +20,7 @@ export function useDraft(name: string, initial: SheetDraft, newest: SheetDetail 
   const stale = newest !== null && newest.version !== draft.base.version;
   // What was just saved comes back as the newest version: it is no stranger's.
   const differs = dirty && newest !== null && !same(newest.body, draft.body);
-  const renamed = newest !== null && !dirty && newest.name !== draft.name;
+  const renamed = newest !== null && !dirty && newest.name !== draft.base.name;
 
   const apply = (next: History<SheetDraft>): void => {
     latest.current = next;
