@@ -26,7 +26,8 @@ type Verdict = { state: 'good' | 'soon' | 'due'; because: FilterStanding['becaus
 export function filterStanding(limits: Limits, facts: FilterFacts, now: Date, zone: string): FilterStanding {
   const sprayHours = facts.minutesSinceChange / 60;
   const hoursPerDay = facts.minutesInPace / 60 / PACE_DAYS;
-  const byHours = dueByHours(limits, sprayHours, hoursPerDay, now);
+  // Without a change on record nobody knows what it has been through.
+  const byHours = facts.changedAt === null ? null : dueByHours(limits, sprayHours, hoursPerDay, now);
   const byDays =
     limits.changeAfterDays === null || facts.changedAt === null
       ? null

@@ -34,8 +34,7 @@ async function filtersInShop(trx: Trx, shopId: string, now: Date): Promise<Filte
     const reading = own.find(({ pascals, at }) => pascals !== null && (changedAt === null || at >= changedAt));
     const facts = {
       changedAt,
-      // Without a change on record everything that was sprayed there went through it.
-      minutesSinceChange: changedAt === null ? 0 : (sprayed.get(filter.id)?.sinceChange ?? 0),
+      minutesSinceChange: sprayed.get(filter.id)?.sinceChange ?? 0,
       minutesInPace: sprayed.get(filter.id)?.sincePace ?? 0,
       reading: reading && reading.pascals !== null ? { pascals: reading.pascals, at: reading.at } : null,
     };

@@ -27,7 +27,8 @@ const row = z.object({
   bakes: csvYesNo.default(false),
   bakeLimitCelsius: number(bakeLimitCelsius.unwrap()).optional(),
   volumeM3: number(volumeM3.unwrap()).optional(),
-  airFlowM3PerHour: number(airFlowM3PerHour.unwrap()).optional(),
+  /** Cubic metres an hour. */
+  airFlow: number(airFlowM3PerHour.unwrap()).optional(),
   clearanceMinutes: number(clearanceMinutes).default(0),
 });
 type Row = z.output<typeof row>;
@@ -42,6 +43,7 @@ export function exportPlaces(deps: Deps, actor: Actor): Promise<{ fileName: stri
     const rows = places.map((place) => ({
       ...place,
       zone: place.zoneId === null ? null : (zones.get(place.zoneId) ?? null),
+      airFlow: place.airFlowM3PerHour,
     }));
     return { fileName: `places-${localDayOf(deps.now(), timeZone)}.csv`, csv: writeRows(keys, rows) };
   });
@@ -83,13 +85,13 @@ async function take(
   { value, before, zones }: Line,
   ids: { added: string[]; changed: string[] },
 ): Promise<void> {
-  const { zone, bakeLimitCelsius, volumeM3, airFlowM3PerHour, ...rest } = value;
+  const { zone, bakeLimitCelsius, volumeM3, airFlow, ...rest } = value;
   const fields: PlaceFields = {
     ...rest,
     zoneId: zone === undefined ? null : await zoneIdOf(trx, shopId, zone, zones),
     bakeLimitCelsius: bakeLimitCelsius ?? null,
     volumeM3: volumeM3 ?? null,
-    airFlowM3PerHour: airFlowM3PerHour ?? null,
+    airFlowM3PerHour: airFlow ?? null,
   };
   const id = before?.id ?? uuid();
   if (!before) {

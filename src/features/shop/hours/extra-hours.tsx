@@ -38,7 +38,7 @@ export function ExtraHours({ extra, mayWrite, onSaved }: ExtraHoursProps) {
   return (
     <section className="flex flex-col gap-2">
       <div className="flex flex-wrap items-center justify-between gap-2">
-        <h3>Hours beside the week</h3>
+        <h3 className="font-semibold">Hours beside the week</h3>
         {mayWrite && (
           <Button size="small" onClick={() => setAdding(true)}>
             Add hours

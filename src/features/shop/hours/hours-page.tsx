@@ -158,7 +158,11 @@ function Closures({ closures, data, edit }: ClosuresProps) {
         </details>
       )}
       <p className="text-muted">
-        Maintenance that comes again stands under <Link to={paths.upkeep()}>Upkeep</Link>.
+        Maintenance that comes again stands under{' '}
+        <Link to={paths.upkeep()} className="link">
+          Upkeep
+        </Link>
+        .
       </p>
     </section>
   );

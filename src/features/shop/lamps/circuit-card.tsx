@@ -71,7 +71,7 @@ export function CircuitCard({ circuit, lamps, act }: CircuitCardProps) {
               </span>
             </p>
             {act && (
-              <span className="whitespace-nowrap">
+              <span className="inline-flex items-center whitespace-nowrap">
                 <MoveButtons
                   name={lamp.name}
                   isFirst={lamps[0]?.id === lamp.id}

@@ -15,6 +15,8 @@ type ClosuresTableProps = {
   label: string;
   closures: readonly Closure[];
   things: Things;
+  /** Where all are of one kind, which the heading says. */
+  hideKind?: boolean;
   /** Absent: looked at only. */
   edit?: ((id: string) => void) | undefined;
 };
@@ -27,7 +29,7 @@ const tones: Record<Closure['kind'], Tone> = {
 };
 
 /** Closures with what they are of, their rule in words and the next time. Removing can be taken back. */
-export function ClosuresTable({ label, closures, things, edit }: ClosuresTableProps) {
+export function ClosuresTable({ label, closures, things, hideKind = false, edit }: ClosuresTableProps) {
   const shop = useShop();
   const putBack = useSetUpWrite(createClosure, () => showToast('It is back', { tone: 'good' }));
   const remove = useSetUpWrite(removeClosure);
@@ -64,7 +66,7 @@ export function ClosuresTable({ label, closures, things, edit }: ClosuresTablePr
           {closures.map((closure) => (
             <tr key={closure.id}>
               <Td>
-                <Badge tone={tones[closure.kind]}>{closureWords[closure.kind]}</Badge>
+                {!(hideKind && closure.label) && <Badge tone={tones[closure.kind]}>{closureWords[closure.kind]}</Badge>}
                 {closure.label && <span className="block font-semibold">{closure.label}</span>}
               </Td>
               <Td>{nameOfThing(things, closure)}</Td>

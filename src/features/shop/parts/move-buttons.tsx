@@ -6,7 +6,7 @@ type MoveButtonsProps = { name: string; isFirst: boolean; isLast: boolean; onMov
 /** Moves a row of a list; what stands there is the order of the rows on the booth day. */
 export function MoveButtons({ name, isFirst, isLast, onMove }: MoveButtonsProps) {
   return (
-    <span className="inline-flex">
+    <span className="inline-flex align-middle">
       <IconButton
         size="small"
         label={`Move ${name} up`}

@@ -45,7 +45,9 @@ export function RetireDialog({ name, busy, error, onRetire, onClose }: RetireDia
           {first !== undefined && (
             <p>
               Plan that work elsewhere and post, then retire {name}.{' '}
-              <Link to={paths.day({ date: dayOf(first) })}>Open the day of the first</Link>
+              <Link to={paths.day({ date: dayOf(first) })} className="link">
+                Open the day of the first
+              </Link>
             </p>
           )}
         </ErrorNote>

@@ -31,14 +31,14 @@ export function ToldClashes({ what, clashes, onClose }: ToldClashesProps) {
         {clashes.map((clash) => (
           <li key={clash.stageId} className="flex flex-wrap items-baseline gap-x-4 gap-y-1">
             <span className="min-w-0">
-              <Link to={paths.job(clash.jobId)} className="font-semibold">
+              <Link to={paths.job(clash.jobId)} className="link">
                 {clash.jobNumber} {clash.jobTitle}
               </Link>
               , {clash.stageTitle}. {reasonText(clash.reason, formats)}
             </span>
             <Link
               to={paths.day({ date: formats.dayOf(clash.from), stage: clash.stageId })}
-              className="inline-flex items-center gap-1.5 whitespace-nowrap"
+              className="link inline-flex items-center gap-1.5 whitespace-nowrap"
             >
               <CalendarClock size={14} aria-hidden="true" />
               {formats.dateSpan(clash.from, clash.to)}

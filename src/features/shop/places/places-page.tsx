@@ -31,7 +31,7 @@ import { PlacesTable } from './places-table.tsx';
 import { Zones } from './zones.tsx';
 
 const columns =
-  'One line a place: name, kind (booth, prep or rack), units, and for booths and stations zone, bakes (yes or no), bake limit celsius, volume m3, air flow m3 per hour and clearance minutes. Places are found by their name; zones that are not there yet are made. An export shows how it looks.';
+  'One line a place: name, kind (booth, prep or rack), units, and for booths and stations zone, bakes (yes or no), bake limit celsius, volume m3, air flow (m³ an hour) and clearance minutes. Places are found by their name; zones that are not there yet are made. An export shows how it looks.';
 
 export function Component() {
   const shop = useShop();

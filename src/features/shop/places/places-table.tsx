@@ -73,15 +73,17 @@ export function PlacesTable({ title, kind, places, zones, edit, retire, onMove }
               )}
               {edit && (
                 <Td className="text-right whitespace-nowrap">
-                  <MoveButtons
-                    name={place.name}
-                    isFirst={i === 0}
-                    isLast={i === places.length - 1}
-                    onMove={(by) => onMove(place, by)}
-                  />
-                  <Button size="small" look="quiet" onClick={() => retire(place)}>
-                    Retire<span className="sr-only"> {place.name}</span>
-                  </Button>
+                  <span className="inline-flex items-center">
+                    <MoveButtons
+                      name={place.name}
+                      isFirst={i === 0}
+                      isLast={i === places.length - 1}
+                      onMove={(by) => onMove(place, by)}
+                    />
+                    <Button size="small" look="quiet" onClick={() => retire(place)}>
+                      Retire<span className="sr-only"> {place.name}</span>
+                    </Button>
+                  </span>
                 </Td>
               )}
             </tr>

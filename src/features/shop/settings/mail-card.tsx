@@ -36,7 +36,11 @@ export function MailCard({ mail }: { mail: NonNullable<ShopSettings['mail']> }) 
         </Button>
         {test.data && (
           <p role="status">
-            On its way to {test.data.to}. <Link to={paths.letters()}>Letters sent</Link> says what became of it.
+            On its way to {test.data.to}.{' '}
+            <Link to={paths.letters()} className="link">
+              Letters sent
+            </Link>{' '}
+            says what became of it.
           </p>
         )}
       </div>

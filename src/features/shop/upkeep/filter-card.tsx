@@ -29,7 +29,7 @@ export function FilterCard({ filter, placeName, log, edit }: FilterCardProps) {
     <section aria-label={`${filter.name}, ${placeName}`} className="card flex flex-col gap-3 p-4">
       <header className="flex flex-wrap items-center justify-between gap-x-4 gap-y-1">
         <div className="min-w-0">
-          <h3>{filter.name}</h3>
+          <h3 className="font-bold">{filter.name}</h3>
           <p className="text-muted">{placeName}</p>
         </div>
         <Badge tone={tones[standing.state]} solid={standing.state === 'due'}>
@@ -77,9 +77,7 @@ function Facts({ filter }: { filter: Filter }) {
     ['Last changed', standing.changedAt === null ? 'not on record' : date(standing.changedAt)],
     [
       'Sprayed since',
-      standing.changedAt === null
-        ? 'counted from the first change on'
-        : `${standing.sprayHours} h${limit(changeAfterHours, 'h')}`,
+      standing.changedAt === null ? 'not counted yet' : `${standing.sprayHours} h${limit(changeAfterHours, 'h')}`,
     ],
     ...(changeAfterDays === null ? [] : [['Changed every', `${changeAfterDays} days`] satisfies [string, string]]),
     [
@@ -91,7 +89,9 @@ function Facts({ filter }: { filter: Filter }) {
     [
       'Due',
       standing.dueOn === null
-        ? 'no day can be told'
+        ? standing.changedAt === null
+          ? 'told from the first change on'
+          : 'no day can be told'
         : `${formatDay(standing.dueOn, 'short', today())}${changeAfterHours === null ? '' : `, at ${standing.hoursPerDay} h a day`}`,
     ],
     ...(efficiencyPercent === null ? [] : [['Efficiency', `${efficiencyPercent} %`] satisfies [string, string]]),

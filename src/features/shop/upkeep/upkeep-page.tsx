@@ -72,7 +72,7 @@ function Maintenance({ data }: { data: ReplyOf<typeof readHours> }) {
           year.
         </p>
       ) : (
-        <ClosuresTable label="Maintenance" closures={rules} things={data} edit={mayWrite ? edit : undefined} />
+        <ClosuresTable label="Maintenance" hideKind closures={rules} things={data} edit={mayWrite ? edit : undefined} />
       )}
       {mayWrite && closure && (
         <ClosureDialog
