@@ -28,6 +28,11 @@ export const paths = {
   newSheet: (copyOf?: string) => withSearch('/shop/sheets/new', copyOf === undefined ? undefined : { copy: copyOf }),
   sheet: (sheetId: string, stage?: string) =>
     withSearch(`/shop/sheets/${sheetId}`, stage === undefined ? undefined : { stage }),
+  coatings: (search?: Search) => withSearch('/shop/coatings', search),
+  /** `copyOf`: the data sheet it begins like. */
+  newCoating: (copyOf?: string) =>
+    withSearch('/shop/coatings/new', copyOf === undefined ? undefined : { copy: copyOf }),
+  coating: (coatingId: string) => `/shop/coatings/${coatingId}`,
   air: () => '/shop/air',
   keys: () => '/shop/keys',
   members: () => '/shop/members',

@@ -1,5 +1,6 @@
 import { v7 } from 'uuid';
 import type * as z from 'zod';
+import type { Upload } from '#contracts/attachments.ts';
 import type { Endpoint, ReplyOf } from '#contracts/endpoint.ts';
 import { nothing } from '#contracts/endpoint.ts';
 import { errorReply } from '#contracts/reasons.ts';
@@ -39,6 +40,24 @@ export async function call<E extends Endpoint>(endpoint: E, input: CallInput<E>)
   return (await replyOf(endpoint, response)) as ReplyOf<E>;
 }
 
+/** Sends a file as a form, once for its key. @throws {ApiError} and the signal's reason, as `call` */
+export async function sendFile<U extends Upload>(
+  upload: U,
+  input: { params: z.input<U['params']> & object; file: File; key: string; signal?: AbortSignal },
+): Promise<z.output<U['reply']>> {
+  const body = new FormData();
+  body.append('file', input.file);
+  const response = await send(addressOf(upload.path, input.params), {
+    method: upload.method,
+    headers: { accept: 'application/json', 'idempotency-key': input.key },
+    credentials: 'same-origin',
+    body,
+    ...(input.signal ? { signal: input.signal } : {}),
+  });
+  if (!response.ok) throw await errorOf(response);
+  return (await replyOf({ reply: upload.reply }, response)) as z.output<U['reply']>;
+}
+
 /** A file that was built along with the pages. @throws {ApiError} */
 export async function readBuilt(path: string, signal: AbortSignal): Promise<unknown> {
   const response = await send(path, { signal });
@@ -73,7 +92,7 @@ async function send(address: string, init: RequestInit): Promise<Response> {
   }
 }
 
-async function replyOf(endpoint: Endpoint, response: Response): Promise<unknown> {
+async function replyOf(endpoint: Pick<Endpoint, 'reply'>, response: Response): Promise<unknown> {
   if (endpoint.reply === nothing) return {};
   let reply: unknown;
   try {

@@ -20,7 +20,10 @@ export const groups: Group[] = [
   },
   {
     title: 'How work is done',
-    sections: [{ to: '/shop/sheets', label: 'Process sheets', seen: () => true }],
+    sections: [
+      { to: '/shop/coatings', label: 'Data sheets', seen: () => true },
+      { to: '/shop/sheets', label: 'Process sheets', seen: () => true },
+    ],
   },
   {
     title: 'Who works here',

@@ -1,0 +1,35 @@
+import type { CoatingSheet } from '#contracts/coatings.ts';
+import type { Formats } from '#src/lib/formats.ts';
+
+type Say = Pick<Formats, 'duration' | 'temperature'>;
+
+export const coatsText = ({ from, to }: CoatingSheet['coats']): string =>
+  from === to ? (from === 1 ? '1 coat' : `${from} coats`) : `${from} to ${to} coats`;
+
+/** The figures one looks a sheet up for, a few words each. */
+export function keyFigures(sheet: CoatingSheet, { duration, temperature }: Say): { label: string; text: string }[] {
+  const { coats, flashBetweenCoats, flashBeforeNext, recoatWithin, potLife } = sheet;
+  const between = coats.to > 1 ? `, ${duration(flashBetweenCoats)} between` : '';
+  return [
+    { label: 'Coats', text: `${coatsText(coats)}${between}` },
+    {
+      label: 'Recoat',
+      text:
+        recoatWithin === null
+          ? `from ${duration(flashBeforeNext)}`
+          : `${duration(flashBeforeNext)} to ${duration(recoatWithin)}`,
+    },
+    { label: 'Pot life', text: potLife === null ? 'none' : duration(potLife) },
+    { label: 'Cure', text: cureText(sheet, { duration, temperature }) },
+  ];
+}
+
+function cureText({ airDry, bake, lampShort, lampMedium }: CoatingSheet, { duration, temperature }: Say): string {
+  const lines = [
+    bake && `${duration(bake.minutes)} at ${temperature(bake.celsius)} ${bake.measuredAt}`,
+    lampShort && `${duration(lampShort.minutes)} short wave`,
+    lampMedium && `${duration(lampMedium.minutes)} medium wave`,
+    airDry && `${duration(airDry.minutes)} in air`,
+  ].filter((line) => line !== null);
+  return lines.join(' or ') || 'not said';
+}
