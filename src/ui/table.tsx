@@ -2,12 +2,18 @@ import type { ComponentProps, ReactNode } from 'react';
 import { cx } from '#src/lib/cx.ts';
 
 /**
- * A table with a head that stays in sight and its own sideways scrolling, which the keyboard reaches. Children: ordinary
+ * A table with a head that stays in sight and its own sideways scrolling, which the keyboard reaches (`relative`: what is
+ * only read out would otherwise widen the page). Children: ordinary
  * `<thead>` and `<tbody>` with Th and Td.
  */
 export function Table({ label, children, className }: { label: string; children: ReactNode; className?: string }) {
   return (
-    <div role="region" aria-label={label} tabIndex={0} className={cx('card max-w-full overflow-auto', className)}>
+    <div
+      role="region"
+      aria-label={label}
+      tabIndex={0}
+      className={cx('card relative max-w-full overflow-auto', className)}
+    >
       <table className="w-full border-collapse text-left">
         <caption className="sr-only">{label}</caption>
         {children}

@@ -101,7 +101,10 @@ describe('the usual week', () => {
   });
 
   test('that leaves posted work outside tells which; hours beside it let it back in', async () => {
-    const { stage } = await booked('2026-03-18T09:00:00Z');
+    // A flash is watched over by somebody on the premises; whose shift it is does not matter.
+    const job = await aJob(app.deps.db, shop, { stages: [{ ways: [watched] }] });
+    const stage = job.stages[0] ?? '';
+    await aBooking(app.deps.db, shop, { stage, place: shop.prep, from: new Date('2026-03-18T09:00:00Z') });
     const { body } = await owner
       .post(`${at}/week`)
       .send({ version: 1, from: '2026-03-16', week: [monday] })

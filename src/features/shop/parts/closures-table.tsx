@@ -52,9 +52,9 @@ export function ClosuresTable({ label, closures, things, hideKind = false, edit 
         <thead>
           <tr>
             <Th>What</Th>
-            <Th>Of</Th>
+            <Th className="max-sm:hidden">Of</Th>
             <Th>When</Th>
-            <Th>Next</Th>
+            <Th className="max-sm:hidden">Next</Th>
             {edit && (
               <Th>
                 <span className="sr-only">What can be done</span>
@@ -68,16 +68,20 @@ export function ClosuresTable({ label, closures, things, hideKind = false, edit 
               <Td>
                 {!(hideKind && closure.label) && <Badge tone={tones[closure.kind]}>{closureWords[closure.kind]}</Badge>}
                 {closure.label && <span className="block font-semibold">{closure.label}</span>}
+                <span className="block sm:hidden">{nameOfThing(things, closure)}</span>
               </Td>
-              <Td>{nameOfThing(things, closure)}</Td>
-              <Td className="min-w-48">
+              <Td className="max-sm:hidden">{nameOfThing(things, closure)}</Td>
+              <Td className="sm:min-w-48">
                 <When closure={closure} />
+                <span className="block text-muted sm:hidden">
+                  Next: <Next closure={closure} />
+                </span>
               </Td>
-              <Td className="whitespace-nowrap">
+              <Td className="whitespace-nowrap max-sm:hidden">
                 <Next closure={closure} />
               </Td>
               {edit && (
-                <Td className="text-right whitespace-nowrap">
+                <Td className="text-right sm:whitespace-nowrap">
                   <Button size="small" look="quiet" onClick={() => edit(closure.id)}>
                     Change<span className="sr-only"> {closure.label || closureWords[closure.kind]}</span>
                   </Button>

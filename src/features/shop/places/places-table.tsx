@@ -27,10 +27,10 @@ export function PlacesTable({ title, kind, places, zones, edit, retire, onMove }
           <tr>
             <Th>Name</Th>
             <Th number>Units</Th>
-            {!isRack && <Th>Zone</Th>}
-            {kind === 'booth' && <Th>Bakes to</Th>}
+            {!isRack && <Th className="max-sm:hidden">Zone</Th>}
+            {kind === 'booth' && <Th className="max-sm:hidden">Bakes to</Th>}
             {!isRack && <Th>Purge before heat</Th>}
-            {!isRack && <Th>Clearance</Th>}
+            {!isRack && <Th className="max-sm:hidden">Clearance</Th>}
             {edit && (
               <Th>
                 <span className="sr-only">What can be done</span>
@@ -53,11 +53,24 @@ export function PlacesTable({ title, kind, places, zones, edit, retire, onMove }
                 ) : (
                   place.name
                 )}
+                {!isRack && (
+                  <span className="block text-xs font-normal text-muted sm:hidden">
+                    {zones.find(({ id }) => id === place.zoneId)?.name ?? 'its own air'}
+                    {place.clearanceMinutes > 0 && `, ${place.clearanceMinutes} min clearance`}
+                    {place.bakes && (
+                      <>
+                        , bakes to <BakesTo place={place} />
+                      </>
+                    )}
+                  </span>
+                )}
               </Td>
               <Td number>{place.units}</Td>
-              {!isRack && <Td>{zones.find(({ id }) => id === place.zoneId)?.name ?? 'its own air'}</Td>}
+              {!isRack && (
+                <Td className="max-sm:hidden">{zones.find(({ id }) => id === place.zoneId)?.name ?? 'its own air'}</Td>
+              )}
               {kind === 'booth' && (
-                <Td>
+                <Td className="max-sm:hidden">
                   <BakesTo place={place} />
                 </Td>
               )}
@@ -67,7 +80,7 @@ export function PlacesTable({ title, kind, places, zones, edit, retire, onMove }
                 </Td>
               )}
               {!isRack && (
-                <Td className="whitespace-nowrap">
+                <Td className="whitespace-nowrap max-sm:hidden">
                   {place.clearanceMinutes === 0 ? 'not measured' : `${place.clearanceMinutes} min`}
                 </Td>
               )}
