@@ -74,6 +74,8 @@ export type JobStep = z.output<typeof jobStep>;
 export const firstSteps = z.strictObject({
   steps: z.array(z.strictObject({ step: firstStep, done: z.boolean() })),
   isDemo: z.boolean(),
+  /** The demo is being put back; everything is as it was until that is done. */
+  resetting: z.boolean(),
   /** What is there, in figures. */
   has: z.strictObject({
     openings: z.number().int(),

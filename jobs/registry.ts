@@ -4,8 +4,10 @@ import { openPlannerThreads } from '#server/planning/planner-threads.ts';
 import { twoSeeds } from '#server/planning/two-seeds.ts';
 import type { TaskDefinition } from './task-function.ts';
 import { letterIsDead } from './tasks/deliver.ts';
+import { lookAtPeople } from './tasks/look-at-people.ts';
 import { prune } from './tasks/prune.ts';
 import { planWith } from './tasks/run-plan.ts';
+import { resetDemo } from './tasks/reset-demo.ts';
 import { sendInvitation } from './tasks/send-invitation.ts';
 import { sendLetter } from './tasks/send-letter.ts';
 import { sendReset } from './tasks/send-reset.ts';
@@ -18,6 +20,8 @@ export const registry: Partial<Record<TaskKind, TaskDefinition>> = {
   // Who waits for a link has asked again, or given up, after that.
   'send-reset': { run: sendReset, attempts: 7 },
   'run-plan': planWith(twoSeeds(openPlannerThreads(availableParallelism()))),
+  'look-at-people': { run: lookAtPeople, attempts: 5 },
+  'reset-demo': { run: resetDemo, attempts: 3 },
   prune: { run: prune, attempts: 5 },
   'sweep-files': { run: sweepFiles, attempts: 5 },
 };
@@ -28,5 +32,5 @@ export type Lane = { kinds: readonly TaskKind[]; runners: number };
 export const lanes: readonly Lane[] = [
   { kinds: ['send-letter', 'send-invitation', 'send-reset'], runners: 4 },
   { kinds: ['run-plan'], runners: 1 },
-  { kinds: ['prune', 'sweep-files'], runners: 1 },
+  { kinds: ['reset-demo', 'look-at-people', 'prune', 'sweep-files'], runners: 1 },
 ];

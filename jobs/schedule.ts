@@ -6,7 +6,7 @@ import type { Deps } from '#server/deps.ts';
 export async function askForPruning(deps: Deps): Promise<void> {
   const day = deps.now().toISOString().slice(0, 10);
   await deps.db.transaction(async (trx) => {
-    for (const kind of ['prune', 'sweep-files'] as const)
+    for (const kind of ['prune', 'sweep-files', 'look-at-people'] as const)
       await enqueue(trx, { kind, key: day, shopId: null, payload: {} });
   });
 }

@@ -21,6 +21,7 @@ import * as bakeTraces from './202612011528_bake_traces.ts';
 import * as setUpVersions from './202612011540_set_up_versions.ts';
 import * as filters from './202612011542_filters.ts';
 import * as peopleChange from './202612011550_people_change.ts';
+import * as demoReset from './202612011552_demo_reset.ts';
 
 type Step = { up(knex: Knex): Promise<void>; down(knex: Knex): Promise<void> };
 
@@ -48,4 +49,5 @@ export const migrations: Record<string, Step> = {
   '202612011540_set_up_versions': setUpVersions,
   '202612011542_filters': filters,
   '202612011550_people_change': peopleChange,
+  '202612011552_demo_reset': demoReset,
 };

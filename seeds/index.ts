@@ -3,13 +3,15 @@ import { cancelBookingsOfJob } from '#server/db/bookings-of-job.ts';
 import { connect } from '#server/db/connect.ts';
 import { inShop, type Trx } from '#server/db/in-shop.ts';
 import { setJobState } from '#server/db/jobs.ts';
+import { lockShop } from '#server/db/locks.ts';
+import { wipeDemo } from '#server/db/wipe-shop.ts';
 import { demoCalendar, type DemoCalendar } from './calendar.ts';
 import { demoId } from './ids.ts';
 import { jobs } from './jobs.ts';
 import { liveWeek, takeResources } from './live-week.ts';
 import { people } from './people.ts';
 import { postWeek } from './post-week.ts';
-import { accountOf, putInAccounts } from './put-in-accounts.ts';
+import { accountOf, putInAccounts, tieAccounts } from './put-in-accounts.ts';
 import { putInAir } from './put-in-air.ts';
 import { putInHistory, type Line } from './put-in-history.ts';
 import { enteredAt, jobIdOf, putInJob } from './put-in-jobs.ts';
@@ -44,9 +46,24 @@ async function hasAccounts(trx: Knex): Promise<boolean> {
   return account !== undefined;
 }
 
+/** Empties the demo shop and puts it in again as of `now`. Accounts stay, and who belongs to it. */
+export async function putBackDemo(trx: Trx, now: Date): Promise<void> {
+  await lockShop(trx, demoShopId);
+  await wipeDemo(trx, demoShopId);
+  const calendar = demoCalendar(now, shop.timeZone);
+  await putInShop(trx, demoShopId, calendar);
+  await tieAccounts(trx, demoShopId);
+  await putInWeek(trx, calendar);
+}
+
 async function putInDemo(trx: Trx, calendar: DemoCalendar): Promise<void> {
   await putInShop(trx, demoShopId, calendar);
   await putInAccounts(trx, demoShopId);
+  await putInWeek(trx, calendar);
+}
+
+/** Jobs, the posted plan and what came of it until now. */
+async function putInWeek(trx: Trx, calendar: DemoCalendar): Promise<void> {
   const postedAt = calendar.at(-3, '06:30');
   const history: Line[] = [];
   const enter = async (fates: string[]): Promise<void> => {

@@ -12,6 +12,17 @@ const cost = { memoryCost: 19_456, timeCost: 2, parallelism: 1 };
 export const accountOf = (name: string): string | null =>
   signIns.some((account) => account.name === name) ? demoId('account', name) : null;
 
+const personOf = (name: string): string | null =>
+  people.some((person) => person.name === name) ? demoId('person', name) : null;
+
+/** Gives the demo's accounts, as far as they are members still, the roles and people they began with. */
+export async function tieAccounts(trx: Trx, shopId: string): Promise<void> {
+  for (const { name, role } of signIns)
+    await trx('membership')
+      .where({ shop_id: shopId, id: demoId('membership', name) })
+      .update({ role, person_id: personOf(name), disabled_at: null });
+}
+
 export async function putInAccounts(trx: Trx, shopId: string): Promise<void> {
   for (const { name, email, password, role } of signIns) {
     const id = demoId('account', name);
@@ -21,7 +32,7 @@ export async function putInAccounts(trx: Trx, shopId: string): Promise<void> {
       id: demoId('membership', name),
       account_id: id,
       role: role as Role,
-      person_id: people.some((person) => person.name === name) ? demoId('person', name) : null,
+      person_id: personOf(name),
     });
   }
 }

@@ -11,7 +11,7 @@ import { circuits, lamps, maintenance, opening, places, shop, weekdays } from '.
 
 /** Set-up of the demo shop: places, lamps, calendars, people, coatings, process sheets. */
 export async function putInShop(trx: Trx, shopId: string, calendar: DemoCalendar): Promise<void> {
-  await trx('shop').insert({
+  const row = {
     id: shopId,
     name: shop.name,
     time_zone: shop.timeZone,
@@ -20,7 +20,12 @@ export async function putInShop(trx: Trx, shopId: string, calendar: DemoCalendar
     cleanups: JSON.stringify(shop.cleanups),
     objective: JSON.stringify(shop.objective),
     is_demo: true,
-  });
+  };
+  // Of a shop that is put back the numbers begin anew; those of its changes go on, for who is listening.
+  await trx('shop')
+    .insert(row)
+    .onConflict('id')
+    .merge({ ...row, training_blocks: true, plan_number: 0, job_number: 0 });
   await putInPlaces(trx, shopId);
   await putInLamps(trx, shopId);
   await putInCalendars(trx, shopId, calendar);

@@ -4,6 +4,7 @@ import type { LetterRow } from '#server/db/letters.ts';
 import { findLetterShop, findReader } from '#server/db/readers.ts';
 import { planChangedLetter } from '#server/mail/letters/plan-changed.tsx';
 import { testLetter } from '#server/mail/letters/test-letter.tsx';
+import { trainingEndsLetter } from '#server/mail/letters/training-ends.tsx';
 import { linkTo } from '#server/mail/links.ts';
 import type { Letter } from '#server/mail/mailer.ts';
 import { GiveUp, type JobDeps, type TaskFunction } from '../task-function.ts';
@@ -24,6 +25,8 @@ const planChanged = z.object({
   ),
 });
 
+const trainingEnds = z.object({ personName: z.string(), goodThrough: z.string() });
+
 export const sendLetter: TaskFunction = (deps, task) =>
   deliver(deps, task, (trx, shopId, letter) => compose(deps, trx, shopId, letter));
 
@@ -34,6 +37,13 @@ async function compose(deps: JobDeps, trx: Trx, shopId: string, letter: LetterRo
   if (!shop || (reader && !reader.isMember)) return null;
   const name = reader?.name ?? letter.to;
   if (letter.kind === 'test') return testLetter({ name, shopName: shop.name, link: linkTo(deps.config).settings() });
+  if (letter.kind === 'training-ends')
+    return trainingEndsLetter({
+      ...trainingEnds.parse(letter.data),
+      name,
+      shopName: shop.name,
+      link: linkTo(deps.config).people(),
+    });
   if (letter.kind !== 'plan-changed') throw new GiveUp(`no letter of kind ${letter.kind}`);
   return planChangedLetter({
     ...planChanged.parse(letter.data),

@@ -64,7 +64,7 @@ export const layers = [
   {
     name: 'jobs',
     at: /^jobs\//,
-    mayUse: [...kernel, 'program', 'services', 'mail', 'db', 'planning', 'realtime', 'storage'],
+    mayUse: [...kernel, 'program', 'services', 'mail', 'db', 'planning', 'realtime', 'storage', 'seeds'],
     never: webServer,
   },
   { name: 'migrations', at: /^migrations\//, mayUse: [], only: ['knex'] },

@@ -28,6 +28,12 @@ export const findAccount = (db: Knex, id: string): Promise<AccountRow | undefine
 export const findAccountByEmail = (db: Knex, email: string): Promise<AccountRow | undefined> =>
   db('account').where({ email }).first<AccountRow | undefined>(columns);
 
+/** Accounts that may sign in, of all shops. */
+export async function listAccountIds(db: Knex): Promise<string[]> {
+  const rows = await db('account').whereNull('disabled_at').orderBy('id').select<{ id: string }[]>('id');
+  return rows.map(({ id }) => id);
+}
+
 export async function insertAccount(
   db: Knex,
   account: Pick<AccountRow, 'id' | 'email' | 'name' | 'passwordHash'>,

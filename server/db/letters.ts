@@ -22,8 +22,16 @@ export type InvitationData = { invitationId: string };
 /** Sent to who asks for it, to see that letters arrive. */
 export type TestData = { askedAt: string };
 
+/** The day is the last on which the training is good; for this kind the version is that day as a number. */
+export type TrainingEndsData = { personName: string; goodThrough: string };
+
 /** Kinds of letters a shop sends and what each is made of. Names, zone and clock of the reader are looked up when sent. */
-export type LetterData = { 'plan-changed': PlanChangedData; invitation: InvitationData; test: TestData };
+export type LetterData = {
+  'training-ends': TrainingEndsData;
+  'plan-changed': PlanChangedData;
+  invitation: InvitationData;
+  test: TestData;
+};
 export type LetterKind = keyof LetterData;
 
 /**

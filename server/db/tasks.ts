@@ -3,7 +3,15 @@ import { v7 as uuid } from 'uuid';
 
 export const TASK_CHANNEL = 'ovenbird_task';
 
-export type TaskKind = 'send-letter' | 'send-reset' | 'send-invitation' | 'run-plan' | 'prune' | 'sweep-files';
+export type TaskKind =
+  | 'send-letter'
+  | 'send-reset'
+  | 'send-invitation'
+  | 'run-plan'
+  | 'reset-demo'
+  | 'look-at-people'
+  | 'prune'
+  | 'sweep-files';
 
 /**
  * Queues background work in the caller's transaction: it exists if and only if that commits. The same kind and key is

@@ -1,7 +1,9 @@
-import { createShop as contract } from '#contracts/shops.ts';
+import { createShop as contract, resetDemo as resetContract } from '#contracts/shops.ts';
 import type { Deps } from '../deps.ts';
+import { may } from '../policies.ts';
 import { createShop } from '../services/create-shop.ts';
 import { readMe } from '../services/read-me.ts';
+import { resetDemo } from '../services/reset-demo.ts';
 import type { Limits } from './limits.ts';
 import { mailboxIsHere } from './mailbox.ts';
 import type { Routes } from './route.ts';
@@ -13,5 +15,9 @@ export function openShopRoutes(routes: Routes, deps: Deps, limits: Limits): void
     await limits.shops.take(id);
     await createShop(deps, id, body);
     return readMe(deps, id, mailboxIsHere(deps.config, req));
+  });
+  routes.shop(resetContract, may.setUp, async ({ actor, body }) => {
+    await resetDemo(deps, actor, body.words);
+    return {};
   });
 }

@@ -5,5 +5,6 @@ export const linkTo = (config: Config) => ({
   reset: (token: string) => `${config.PUBLIC_URL}/password-reset#${token}`,
   invitation: (token: string) => `${config.PUBLIC_URL}/invitation#${token}`,
   settings: () => `${config.PUBLIC_URL}/shop/settings`,
+  people: () => `${config.PUBLIC_URL}/shop/people`,
   bench: () => `${config.PUBLIC_URL}/bench`,
 });

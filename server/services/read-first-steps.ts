@@ -1,6 +1,7 @@
 import type { FirstStep, FirstSteps } from '#contracts/first-steps.ts';
 import { loadFirstSteps } from '../db/first-steps.ts';
 import { inShop, type Trx } from '../db/in-shop.ts';
+import { isBeingReset } from '../db/wipe-shop.ts';
 import type { Deps } from '../deps.ts';
 import type { Actor } from '../policies.ts';
 import { sheets } from '../starter/sheets/index.ts';
@@ -21,6 +22,7 @@ export async function firstStepsOf(trx: Trx, shopId: string): Promise<FirstSteps
   return {
     steps: (['hours', 'places', 'people', 'sheets', 'job'] as const).map((step) => ({ step, done: done[step] })),
     isDemo,
+    resetting: isDemo && (await isBeingReset(trx, shopId)),
     has,
     starter: sheets.map(({ key, name, summary }) => ({ key, name, summary })),
   };

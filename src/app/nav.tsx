@@ -1,5 +1,7 @@
+import { useQuery } from '@tanstack/react-query';
 import { BarChart3, CalendarClock, ClipboardList, SprayCan, Thermometer } from 'lucide-react';
 import { NavLink, useLocation } from 'react-router-dom';
+import { firstStepsQuery } from '#src/features/shop/first-steps/first-steps-query.ts';
 import { cx } from '#src/lib/cx.ts';
 import { may, useShop } from '#src/lib/session.ts';
 import { paths } from './paths.ts';
@@ -41,7 +43,8 @@ export function TopNav() {
 /** All pages below /shop belong to it. On a phone it is in the account menu: the bar has room for daily things only. */
 function SetUpLink() {
   const to = useSetUpPath();
-  const { role } = useShop();
+  const { role, id } = useShop();
+  const left = useStepsLeft(id, may.setUp(role));
   const isActive = useLocation().pathname.startsWith(paths.firstSteps());
   if (!may.plan(role)) return null;
   return (
@@ -53,9 +56,16 @@ function SetUpLink() {
         isActive ? 'border-ember text-ink' : 'border-transparent text-muted hover:text-ink',
       )}
     >
-      Set-up
+      {left === null ? 'Set-up' : `Set-up ${left}`}
     </NavLink>
   );
+}
+
+/** `3/5` of the first steps of a shop that has no plan yet; null once it has. */
+function useStepsLeft(shopId: string, isOwner: boolean): string | null {
+  const { data } = useQuery({ ...firstStepsQuery(shopId), enabled: isOwner, retry: false, staleTime: 300_000 });
+  const done = data?.steps.filter((one) => one.done).length ?? 0;
+  return data === undefined || done === data.steps.length ? null : `${done}/${data.steps.length}`;
 }
 
 /** On a phone the thumb is at the bottom. */

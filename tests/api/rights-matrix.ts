@@ -122,6 +122,7 @@ export const rights: Readonly<Record<string, Row>> = {
   'revoke-api-key': owners,
 
   'create-shop': signedIn,
+  'reset-demo': owners,
   'read-first-steps': owners,
   'take-hours': owners,
   'take-places': owners,

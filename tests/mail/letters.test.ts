@@ -3,6 +3,7 @@ import { readConfig } from '#server/config.ts';
 import { invitationLetter } from '#server/mail/letters/invitation.tsx';
 import { planChangedLetter } from '#server/mail/letters/plan-changed.tsx';
 import { resetLetter } from '#server/mail/letters/reset.tsx';
+import { trainingEndsLetter } from '#server/mail/letters/training-ends.tsx';
 import { makeMailer, Undeliverable, type Letter } from '#server/mail/mailer.ts';
 import { mailServer, type MailServer } from '../helpers/mail.ts';
 
@@ -83,6 +84,17 @@ describe('a letter of changes', () => {
 describe('every letter', () => {
   const letters: [string, () => Promise<Letter>][] = [
     ['plan-changed', () => planChangedLetter(planChanged)],
+    [
+      'training-ends',
+      () =>
+        trainingEndsLetter({
+          name: 'Olive',
+          shopName: 'North',
+          personName: 'Pat',
+          goodThrough: '2026-06-08',
+          link: 'https://shop.test/shop/people',
+        }),
+    ],
     ['reset', () => resetLetter({ name: 'Pat', link: 'https://shop.test/password-reset#abc', goodForMinutes: 30 })],
     [
       'invitation',

@@ -27,6 +27,7 @@ const kinds: Record<string, string> = {
   invitation: 'Invitation',
   test: 'Test letter',
   'plan-changed': 'Plan has changed',
+  'training-ends': 'Spray training ends',
   reset: 'New password',
 };
 const filters = [

@@ -31,7 +31,11 @@ export function Component() {
 
 function FirstStepsPage() {
   const shop = useShop();
-  const steps = useQuery(firstStepsQuery(shop.id));
+  const steps = useQuery({
+    ...firstStepsQuery(shop.id),
+    // A notice comes when it is done, but not where the worker gave up.
+    refetchInterval: ({ state }) => (state.data?.resetting ? 2_000 : false),
+  });
   const data = steps.data;
   const done = data?.steps.filter((one) => one.done).length ?? 0;
   const isReady = data !== undefined && done === data.steps.length;
@@ -59,7 +63,7 @@ function FirstStepsPage() {
               : 'Five steps to a first plan. Everything is filled in as many shops have it; take it, or put in what you know. You can leave at any time and go on later.'}
           </p>
           <Steps data={data} />
-          {data.isDemo && <ResetDemo />}
+          {data.isDemo && <ResetDemo resetting={data.resetting} />}
         </>
       )}
     </Page>
