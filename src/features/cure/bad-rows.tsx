@@ -1,9 +1,9 @@
-import type { TraceTable } from './model/csv/read-table.ts';
+import type { TraceHead } from './model/trace-engine.ts';
 import { Table, Td, Th } from '#src/ui/table.tsx';
 import { Card } from './sections.tsx';
 
 /** Line by line what could not be used. */
-export function BadRows({ table: { bad, badCount } }: { table: TraceTable }) {
+export function BadRows({ table: { bad, badCount } }: { table: TraceHead }) {
   if (badCount === 0) return null;
   return (
     <Card title={badCount === 1 ? 'One line with a fault' : `${badCount.toLocaleString('en-GB')} lines with a fault`}>

@@ -1,8 +1,8 @@
 import { useFormats } from '#src/lib/session.ts';
 import { SelectField } from './desk-fields.tsx';
 import type { TimeUnit } from './model/csv/layout.ts';
-import type { TraceTable } from './model/csv/read-table.ts';
 import { timeFits, timeUnits } from './model/judge.ts';
+import type { TraceHead } from './model/trace-engine.ts';
 import { unitOf } from './model/trace.ts';
 import { Card } from './sections.tsx';
 import { useDesk } from './use-desk.ts';
@@ -18,7 +18,7 @@ const timeNames: Record<TimeUnit, string> = {
 const delimiters = { '\t': 'tabs', ';': 'semicolons', ',': 'commas' };
 
 /** How the file was understood, and the way to put it right. */
-export function TraceColumns({ table }: { table: TraceTable }) {
+export function TraceColumns({ table }: { table: TraceHead }) {
   const { values } = useDesk();
   const { unit: mine } = useFormats();
   const { layout, columns } = table;
@@ -26,7 +26,7 @@ export function TraceColumns({ table }: { table: TraceTable }) {
   const many = columns.length > 1;
   const times = timeUnits.filter((time) => timeFits(kind, time));
   const named = columns.every((column) => column.unit !== null);
-  const warm = columns.some((column) => column.unit === null && column.values.some((value) => value > 110));
+  const warm = columns.some((column) => column.unit === null && column.hottest > 110);
   return (
     <Card title="How it was read">
       <p className="text-xs text-muted">

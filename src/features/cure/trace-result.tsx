@@ -1,25 +1,31 @@
-import { useDeferredValue, useMemo } from 'react';
+import { useMemo } from 'react';
 import { useFormats } from '#src/lib/session.ts';
+import { SkeletonLines } from '#src/ui/skeleton.tsx';
 import { contradictionWords, energyWords } from './model/energy-words.ts';
 import { Plot } from './drawings/plot.tsx';
-import type { TraceTable } from './model/csv/read-table.ts';
+import { firstValues } from './model/desk-state.ts';
 import { degrees, findingWords, limitDegrees } from './model/finding-words.ts';
-import { choiceOf, judge, type Judged } from './model/judge.ts';
+import { choiceOf, type Judged } from './model/judge.ts';
 import { spanOf } from './model/plot-geometry.ts';
 import type { Sheet } from './model/sheet-of.ts';
-import { traceOf } from './model/trace.ts';
+import type { TraceHead } from './model/trace-engine.ts';
 import { plainNumber, unitFromCelsius } from './model/typed.ts';
 import { Facts, NotYet, Source, Verdict, Warnings } from './sections.tsx';
+import type { TraceDesk } from './trace-desk.ts';
 import { useDesk } from './use-desk.ts';
+import { useJudged } from './use-judged.ts';
 
-export function TraceResult({ table, sheet }: { table: TraceTable; sheet: Sheet }) {
+type TraceResultProps = { head: TraceHead; desk: TraceDesk; sheet: Sheet };
+
+export function TraceResult({ head, desk, sheet }: TraceResultProps) {
   const { values } = useDesk();
   const { unit } = useFormats();
-  // A long record takes a moment: what is typed shows first.
-  const asked = useDeferredValue(values);
-  const { column, unit: read, time } = choiceOf(asked, table);
-  const chosen = useMemo(() => traceOf(table, { column, unit: read, time }), [table, column, read, time]);
-  const answer = useMemo(() => judge(asked, chosen, sheet, unit), [asked, chosen, sheet, unit]);
+  const { done, limit, col, clock, unit: byHand } = values;
+  // Only what the judgement depends on, so that nothing else on the desk has it judged anew.
+  const judging = { ...firstValues, done, limit, col, clock, unit: byHand };
+  const { answer, fault } = useJudged(desk, { values: judging, choice: choiceOf(values, head), sheet, unit });
+  if (fault !== null) return <NotYet>The record could not be judged: {fault}. Open the file again.</NotYet>;
+  if (answer === null) return <SkeletonLines lines={6} label="Judging the record" />;
   if (!answer.ok) return <NotYet />;
   if (answer.value === 'no-cure')
     return (

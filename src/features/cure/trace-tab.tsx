@@ -28,7 +28,7 @@ export function TraceTab({ reader }: { reader: TraceReader }) {
       asked={
         <>
           <FilePicker reader={reader} />
-          {file.state === 'read' && <TraceColumns table={file.table} />}
+          {file.state === 'read' && <TraceColumns table={file.head} />}
           <SheetPicker />
           <Card title="Judged with">
             <FieldGrid>
@@ -48,12 +48,12 @@ export function TraceTab({ reader }: { reader: TraceReader }) {
           <>
             <Card title={`Bake in ${file.name}`}>
               {sheet?.ok && Object.keys(errors).length === 0 ? (
-                <TraceResult table={file.table} sheet={sheet.value} />
+                <TraceResult head={file.head} desk={file.desk} sheet={sheet.value} />
               ) : (
                 <NotYet />
               )}
             </Card>
-            <BadRows table={file.table} />
+            <BadRows table={file.head} />
           </>
         ) : (
           <Card title="Bake trace">
@@ -133,7 +133,7 @@ function FilePicker({ reader: { file, open, close } }: { reader: TraceReader }) 
       {file.state === 'read' && (
         <div className="flex items-center justify-between gap-2">
           <span className="min-w-0 truncate">
-            <strong>{file.name}</strong>, {file.table.rows.toLocaleString('en-GB')} rows
+            <strong>{file.name}</strong>, {file.head.rows.toLocaleString('en-GB')} rows
           </span>
           <Button size="small" look="quiet" icon={<X size={15} aria-hidden="true" />} onClick={close}>
             Put away

@@ -1,6 +1,7 @@
-import { useCallback, useRef, useState } from 'react';
+import { useCallback, useEffect, useRef, useState } from 'react';
 import { decodeText } from '#src/lib/decode-text.ts';
-import { readTable, type TraceTable } from './model/csv/read-table.ts';
+import type { TraceHead } from './model/trace-engine.ts';
+import { openTraceDesk, type TraceDesk } from './trace-desk.ts';
 
 /** More than a logger writes in a year; a browser's memory has an end. */
 const mostBytes = 60 * 1024 * 1024;
@@ -9,37 +10,36 @@ export type TraceFile =
   | { state: 'none' }
   | { state: 'reading'; name: string; share: number }
   | { state: 'fault'; name: string; what: string }
-  | { state: 'read'; name: string; table: TraceTable };
+  | { state: 'read'; name: string; head: TraceHead; desk: TraceDesk };
 
 export type TraceReader = {
   file: TraceFile;
   open: (file: File) => void;
-  openText: (name: string, text: string) => void;
+  openText: (name: string, text: string | (() => Promise<string>)) => void;
   /** Stops the reading, or puts the file away. */
   close: () => void;
 };
 
-/** Reads a logger's file in this browser; it is sent nowhere. Kept while the desk is open, whichever tab is shown. */
+/** Reads a logger's file in this browser; it is sent nowhere by that. Kept while the desk is open, whichever tab is shown. */
 export function useTraceFile(): TraceReader {
   const [file, setFile] = useState<TraceFile>({ state: 'none' });
-  const running = useRef<AbortController | null>(null);
+  const running = useRef<TraceDesk | null>(null);
+  useEffect(() => () => running.current?.close(), []);
 
   const start = useCallback((name: string, textOf: () => string | Promise<string>) => {
-    running.current?.abort();
-    const stop = new AbortController();
-    running.current = stop;
+    running.current?.close();
+    const desk = openTraceDesk();
+    running.current = desk;
     const put = (next: TraceFile) => {
-      if (!stop.signal.aborted) setFile(next);
+      if (running.current === desk) setFile(next);
     };
     put({ state: 'reading', name, share: 0 });
     const run = async () => {
-      const text = await textOf();
       const onProgress = (share: number) => put({ state: 'reading', name, share });
-      const result = await readTable(text, { signal: stop.signal, onProgress });
-      put(result.ok ? { state: 'read', name, table: result.table } : { state: 'fault', name, what: result.what });
+      const result = await desk.read(await textOf(), { onProgress });
+      put(result.ok ? { state: 'read', name, head: result.head, desk } : { state: 'fault', name, what: result.what });
     };
     run().catch((error: unknown) => {
-      if (stop.signal.aborted) return;
       put({
         state: 'fault',
         name,
@@ -56,9 +56,14 @@ export function useTraceFile(): TraceReader {
       }),
     [start],
   );
-  const openText = useCallback((name: string, text: string) => start(name, () => text), [start]);
+  const openText = useCallback(
+    (name: string, text: string | (() => Promise<string>)) =>
+      start(name, () => (typeof text === 'string' ? text : text())),
+    [start],
+  );
   const close = useCallback(() => {
-    running.current?.abort();
+    running.current?.close();
+    running.current = null;
     setFile({ state: 'none' });
   }, []);
   return { file, open, openText, close };

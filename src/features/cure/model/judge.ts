@@ -11,7 +11,10 @@ import type { Unit } from './typed.ts';
 export const timeUnits: readonly TimeUnit[] = ['ms', 's', 'min', 'h', 'hh:mm', 'mm:ss'];
 
 /** Which column, unit and time scale: by the address where it fits this file, else as the file suggests. */
-export function choiceOf(values: Values, table: TraceTable): TraceChoice {
+export function choiceOf(
+  values: Values,
+  table: { layout: TraceTable['layout']; columns: readonly unknown[] },
+): TraceChoice {
   const { kind, unit } = table.layout.time;
   const column = /^\d+$/.test(values.col) ? Number(values.col) : -1;
   const offered = timeUnits.find((time) => time === values.clock && timeFits(kind, time));
