@@ -36,10 +36,10 @@ function before(phases: readonly Phase[], wanted: (phase: Phase) => boolean): nu
   return index < 0 ? null : minutesOf(phases.slice(0, index));
 }
 
-/** Minutes between the coats, one figure a pause. */
-export function flashesBetween(way: Pick<Way, 'phases'>): number[] {
+/** The pauses between the coats, with the phases that make them. */
+export function pausesBetween(way: Pick<Way, 'phases'>): Phase[][] {
   const coats = way.phases.flatMap((phase, i) => (isSpray(phase) ? [i] : []));
-  return coats.slice(1).map((coat, i) => minutesOf(way.phases.slice((coats[i] ?? 0) + 1, coat)));
+  return coats.slice(1).map((coat, i) => way.phases.slice((coats[i] ?? 0) + 1, coat));
 }
 
 /** From the last coat to heat in one and the same way; null where it does not heat what it sprays. */

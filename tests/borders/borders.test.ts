@@ -12,6 +12,7 @@ describe('lint refuses the kept bad examples', () => {
     ['planner/server/planner/looks-outside.ts', 'borders/one-way', ['node:fs', 'migrate.ts']],
     ['chemistry/server/chemistry/asks-the-planner.ts', 'borders/one-way', ['check-plan.ts']],
     ['contracts/contracts/knows-the-server.ts', 'borders/one-way', ['errors.ts']],
+    ['sheets/server/sheets/asks-the-planner.ts', 'borders/one-way', ['check-plan.ts', 'uuid']],
     [
       'service/server/services/answers-a-request.ts',
       'borders/one-way',

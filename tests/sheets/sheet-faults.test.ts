@@ -68,6 +68,12 @@ describe('coats and flashes against the data sheet', () => {
     expect(flash(3)).toEqual([]);
     expect(flash(2)).toMatchObject([{ severity: 'warn', way: 'spray', figures: [2, 3] }]);
   });
+  test('a flash of the shop’s own beside one that is taken from the sheet', () => {
+    const of = body([
+      clear([sprayed([...coats(2, 7, 2), { ...alone('flash', 3), source: 'flash-between' }, hands('spray', 7)])]),
+    ]);
+    expect(one('flash-short', of, { flashBetweenCoats: 3 })).toMatchObject([{ figures: [2, 3] }]);
+  });
   // Pot life 45 min, mixed 10:00: a coat begun 10:44 is fine, 10:46 refused.
   test('pot life: the last coat may still begin 44 min after mixing, not 46', () => {
     const begun = (minutes: number) =>

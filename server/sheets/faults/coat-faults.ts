@@ -4,7 +4,7 @@ import { gapFromSheet } from '#chemistry/sheets/gap-from-sheet.ts';
 import { minutesFromSheet } from '#chemistry/sheets/minutes-from-sheet.ts';
 import { potLifeVerdict } from '#chemistry/windows/pot-life.ts';
 import type { SettledStage } from '../expand-sheet.ts';
-import { coatsOf, flashesBetween, minutesOfMix } from '../way-times.ts';
+import { coatsOf, minutesOf, minutesOfMix, pausesBetween } from '../way-times.ts';
 import { inWay, type Found } from './found.ts';
 
 /** A way against the data sheet of the coating it sprays, or that it cures. */
@@ -12,15 +12,16 @@ export function coatFaults(stage: SettledStage, way: Way, coating: Coating): Fou
   const { sheet, name } = coating;
   const at = inWay(stage, way);
   const coats = coatsOf(way);
-  const shortest = Math.min(...flashesBetween(way));
+  // A pause that says it comes from the sheet is told of by `sheet-differs`.
+  const own = pausesBetween(way).filter((pause) => pause.every(({ source }) => source !== 'flash-between'));
+  const shortest = Math.min(...own.map(minutesOf));
   const { from, to } = sheet.coats;
   const mix = minutesOfMix(way);
   return [
     ...(coats > 0 && (coats < from || coats > to)
       ? [at.warn('coats-off-sheet', 'phases', { names: [name], figures: [coats, from, to] })]
       : []),
-    // A flash that says it comes from the sheet is told of by `sheet-differs` already.
-    ...(coats > 1 && shortest < sheet.flashBetweenCoats && !way.phases.some(({ source }) => source === 'flash-between')
+    ...(shortest < sheet.flashBetweenCoats
       ? [at.warn('flash-short', 'phases', { names: [name], figures: [shortest, sheet.flashBetweenCoats] })]
       : []),
     ...(coats > 0 && outlives(mix, sheet.potLife)

@@ -53,7 +53,7 @@ describe('the editor of a process sheet', () => {
     await userEvent.type(minutes, '1:30');
     await userEvent.click(saveButton());
     const dialog = await screen.findByRole('dialog', { name: 'Save as version 3' });
-    expect(dialog).toHaveTextContent('1 open job is made from an older version and keeps it.');
+    expect(dialog).toHaveTextContent('1 open job keeps the version it was made with.');
     expect(within(dialog).getByRole('cell', { name: /Clear, Sprayed/ })).toBeVisible();
     const note = within(dialog).getByRole('textbox', { name: /What changed/ });
     expect(note).toHaveValue('Clear, Sprayed: phases');

@@ -22,7 +22,7 @@ export function AddStageMenu({ after }: { after: string | null }) {
     <Menu
       align="start"
       trigger={
-        <Button icon={<Plus size={16} aria-hidden="true" />} disabled={body.stages.length >= 60}>
+        <Button className="self-start" icon={<Plus size={16} aria-hidden="true" />} disabled={body.stages.length >= 60}>
           Add a stage
         </Button>
       }

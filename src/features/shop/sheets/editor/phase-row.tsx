@@ -26,7 +26,7 @@ export function PhaseRow({ stage, way, phase, at, coating }: PhaseRowProps) {
   return (
     <li
       aria-label={`Phase ${at + 1}: ${phaseWords[phase.kind]}`}
-      className="grid grid-cols-[1.5rem_minmax(0,1fr)_4.5rem_auto] items-center gap-x-2 gap-y-1.5 py-1.5 md:grid-cols-[1.5rem_7.5rem_4.5rem_8.5rem_minmax(0,1fr)_auto]"
+      className="grid grid-cols-[1.5rem_minmax(0,1fr)_minmax(0,1fr)_var(--control-small)] items-center gap-x-2 gap-y-1.5 py-1.5 md:grid-cols-[1.5rem_7.5rem_4.5rem_8.5rem_minmax(0,1fr)_auto]"
     >
       <PhaseSwatch kind={phase.kind} />
       <Select
@@ -53,7 +53,7 @@ export function PhaseRow({ stage, way, phase, at, coating }: PhaseRowProps) {
       <Select
         label={`Who is there in ${name}`}
         hideLabel
-        className="max-md:col-span-2 md:order-1"
+        className="max-md:col-start-2 md:order-1"
         value={phase.attendance}
         onChange={({ target }) => set({ ...phase, attendance: target.value as Phase['attendance'] }, 'who')}
       >

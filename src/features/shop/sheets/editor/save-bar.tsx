@@ -36,9 +36,11 @@ export function SaveBar({ draft, stops, version, onSave }: SaveBarProps) {
         disabled={!draft.canRedo}
         onClick={draft.redo}
       />
-      <p role="status" className="min-w-0 grow text-[0.8125rem] text-muted">
+      <p role="status" className="min-w-24 grow basis-0 text-[0.8125rem] text-muted">
         {!draft.dirty
-          ? 'Saved as it stands.'
+          ? version === 1
+            ? 'Nothing to save yet.'
+            : 'Saved as it stands.'
           : stops > 0
             ? `${stops} to mend before it can be saved.`
             : 'Changed, not saved yet.'}

@@ -27,11 +27,7 @@ export function SaveDialog({ version, changes, openJobs, warnings, busy, error, 
       onOpenChange={(open) => !open && onClose()}
       title={deed}
       shape="wide"
-      about={
-        version === 1
-          ? 'Jobs can be made from it at once.'
-          : `New jobs are made from it. ${openJobs === 0 ? 'No open job is' : openJobs === 1 ? '1 open job is' : `${openJobs} open jobs are`} made from an older version and ${openJobs === 1 ? 'keeps' : 'keep'} it.`
-      }
+      about={version === 1 ? 'Jobs can be made from it at once.' : `New jobs are made from it. ${keptBy(openJobs)}`}
       actions={
         <>
           <Button onClick={onClose}>Not yet</Button>
@@ -64,3 +60,10 @@ export function SaveDialog({ version, changes, openJobs, warnings, busy, error, 
     </Dialog>
   );
 }
+
+const keptBy = (openJobs: number): string =>
+  openJobs === 0
+    ? 'No open job is made from this sheet.'
+    : openJobs === 1
+      ? '1 open job keeps the version it was made with.'
+      : `${openJobs} open jobs keep the version they were made with.`;

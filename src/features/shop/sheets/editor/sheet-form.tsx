@@ -30,7 +30,7 @@ export function SheetForm() {
             onChange={({ target }) => rename(target.value)}
           />
         </FaultPlace>
-        <FaultPlace stage={null} field="summary" also={['stage']}>
+        <FaultPlace stage={null} field="summary">
           <TextArea
             label="What it is for"
             optional

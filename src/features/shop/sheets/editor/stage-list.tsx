@@ -8,7 +8,7 @@ import { IconButton } from '#src/ui/icon-button.tsx';
 import { PhaseBar } from '#src/ui/phase-bar.tsx';
 import { AddStageMenu } from './add-stage-menu.tsx';
 import { useEditor } from './editor-context.ts';
-import { FaultIcon } from './fault-place.tsx';
+import { FaultIcon, FaultPlace } from './fault-place.tsx';
 import { useStageDeeds } from './use-stage-deeds.ts';
 
 /** The stages in order. Arrows walk, Alt with an arrow moves, Delete takes out; dragging moves too. */
@@ -69,9 +69,9 @@ export function StageList({ chosen }: { chosen: string | null }) {
         ))}
       </ol>
       {!readOnly && (
-        <div className="border-t border-line p-2.5">
+        <FaultPlace stage={null} field="stages" className="border-t border-line p-2.5">
           <AddStageMenu after={chosen} />
-        </div>
+        </FaultPlace>
       )}
       <p role="status" className="sr-only">
         {deeds.said}

@@ -1,4 +1,4 @@
-import { useEffect, useRef } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import type { SheetBody, SheetStage } from '#contracts/sheets.ts';
 import { useMedia } from '#src/lib/use-media.ts';
@@ -9,7 +9,10 @@ import { placeId } from './editor-context.ts';
 export function useStageLink(body: SheetBody) {
   const [search, setSearch] = useSearchParams();
   const wanted = search.get('stage');
-  const stage: SheetStage | null = body.stages.find(({ key }) => key === wanted) ?? null;
+  // The address follows a moment later; what is done next must not wait for it.
+  const [shown, setShown] = useState({ address: wanted, key: wanted });
+  if (shown.address !== wanted) setShown({ address: wanted, key: wanted });
+  const stage: SheetStage | null = body.stages.find(({ key }) => key === shown.key) ?? null;
   const jump = useRef<Fault | null>(null);
   const toForm = useRef(false);
   const isNarrow = useMedia('(max-width: 63.99rem)');
@@ -18,10 +21,11 @@ export function useStageLink(body: SheetBody) {
     else if (toForm.current) document.getElementById('sheet-form')?.scrollIntoView({ block: 'start' });
     jump.current = null;
     toForm.current = false;
-  }, [wanted]);
+  }, [shown.key]);
   const open = (key: string | null): void => {
     // On a phone the form stands below the list.
-    if (isNarrow && key !== wanted) toForm.current = true;
+    if (isNarrow && key !== shown.key) toForm.current = true;
+    setShown({ address: wanted, key });
     setSearch(
       (now) => {
         if (key === null) now.delete('stage');

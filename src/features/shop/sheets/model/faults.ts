@@ -52,7 +52,7 @@ function shapeFaults(body: SheetBody): Fault[] {
     if (first === 'options') return [stop('options', null, null, 'Each option needs a name.')];
     if (first !== 'stages') return [stop('summary', null, null, 'The summary is too long: 400 letters at most.')];
     const stage = body.stages[Number(index)];
-    if (!stage) return [stop('stage', null, null, 'A sheet has 1 to 60 stages. Add the first one.')];
+    if (!stage) return [stop('stages', null, null, 'A sheet has 1 to 60 stages. Add the first one.')];
     if (inner !== 'ways')
       return [stop(inner === 'title' ? 'title' : 'stage', stage.key, null, 'Give the stage a title and a kind.')];
     const way = stage.ways[Number(wayIndex)];
