@@ -22,6 +22,7 @@ import * as setUpVersions from './202612011540_set_up_versions.ts';
 import * as filters from './202612011542_filters.ts';
 import * as peopleChange from './202612011550_people_change.ts';
 import * as demoReset from './202612011552_demo_reset.ts';
+import * as signUp from './202612011554_sign_up.ts';
 
 type Step = { up(knex: Knex): Promise<void>; down(knex: Knex): Promise<void> };
 
@@ -50,4 +51,5 @@ export const migrations: Record<string, Step> = {
   '202612011542_filters': filters,
   '202612011550_people_change': peopleChange,
   '202612011552_demo_reset': demoReset,
+  '202612011554_sign_up': signUp,
 };

@@ -32,8 +32,10 @@ import { sessionRoutes } from './http/session.ts';
 import { sessionStore, sessionTimeouts } from './http/session-store.ts';
 import { shopRoutes } from './http/shop-settings.ts';
 import { openShopRoutes } from './http/shops.ts';
+import { signUpRoutes } from './http/sign-up.ts';
 import { sheetRoutes } from './http/sheets.ts';
 import { upkeepRoutes } from './http/upkeep.ts';
+import { traceRoutes } from './http/traces.ts';
 import { useRoutes } from './http/use.ts';
 import { makeHub } from './realtime/hub.ts';
 
@@ -50,6 +52,7 @@ const nouns: ((routes: Routes, deps: Deps) => void)[] = [
   mailboxRoutes,
   airRoutes,
   apiKeyRoutes,
+  traceRoutes,
   peopleRoutes,
   firstStepRoutes,
   placeRoutes,
@@ -88,6 +91,7 @@ export function createApp(deps: Deps): App {
   router.use('/api', sessionStore(deps, pool), sessionTimeouts(deps), readAccount(passport));
   sessionRoutes(routes, deps, passport, limits);
   linkRoutes(routes, deps, limits);
+  signUpRoutes(routes, deps, limits);
   memberRoutes(routes, deps, limits);
   openShopRoutes(routes, deps, limits);
   liveRoutes(routes, deps, hub);

@@ -41,6 +41,8 @@ const environment = z
     /** How many files a shop may keep, and how many megabytes they may take together. */
     SHOP_FILES: z.coerce.number().int().min(1).max(1_000_000).default(5_000),
     SHOP_FILES_MB: z.coerce.number().int().min(1).max(10_000_000).default(2_048),
+    /** Whether strangers may open shops; unset it is closed in production. */
+    SIGN_UP: z.enum(['open', 'closed']).optional(),
     WEB_ROOT: z.string().default('dist/web'),
     LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent']).default('info'),
     /** True behind exactly one proxy that sets X-Forwarded-For. */

@@ -6,7 +6,7 @@ export const TASK_CHANNEL = 'ovenbird_task';
 export type TaskKind =
   | 'send-letter'
   | 'send-reset'
-  | 'send-invitation'
+  | 'send-invitation' | 'send-sign-up'
   | 'run-plan'
   | 'reset-demo'
   | 'look-at-people'

@@ -43,6 +43,7 @@ export const paths = {
   signIn: (to?: string) => withSearch('/sign-in', to === undefined || to === '/' ? undefined : { to }),
   forgotten: () => '/forgotten',
   reset: () => '/password-reset',
+  signUp: () => '/sign-up',
   invitation: () => '/invitation',
 };
 

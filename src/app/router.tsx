@@ -43,6 +43,7 @@ const atDoor: RouteObject[] = [
   { path: '/sign-in', lazy: () => import('#src/features/session/sign-in-page.tsx') },
   { path: '/forgotten', lazy: () => import('#src/features/session/forgotten-page.tsx') },
   { path: '/password-reset', lazy: () => import('#src/features/session/reset-page.tsx') },
+  { path: '/sign-up', lazy: () => import('#src/features/session/sign-up-page.tsx') },
   { path: '/invitation', lazy: () => import('#src/features/session/invitation-page.tsx') },
 ];
 const open: RouteObject[] = [

@@ -56,6 +56,10 @@ export const rights: Readonly<Record<string, Row>> = {
   'reset-password': anybody,
   'read-invitation': anybody,
   'accept-invitation': anybody,
+  'read-sign-up': anybody,
+  'ask-to-sign-up': anybody,
+  'read-sign-up-link': anybody,
+  'sign-up': anybody,
   'list-mailbox': anybody,
   'read-mailbox-letter': anybody,
 
@@ -120,6 +124,10 @@ export const rights: Readonly<Record<string, Row>> = {
   'list-api-keys': owners,
   'create-api-key': owners,
   'revoke-api-key': owners,
+  'list-traces': everyone,
+  'read-trace': everyone,
+  'attach-trace': stageWorkers,
+  'remove-trace': stageWorkers,
 
   'create-shop': signedIn,
   'reset-demo': owners,
@@ -304,5 +312,20 @@ export const withForeignIds: Readonly<Record<string, (ids: ForeignIds) => { body
   }),
   'change-zone-air': () => ({ body: { version: 0, source: 'latest', schedule: [] } }),
   'revoke-api-key': () => ({ body: {} }),
+  'list-traces': () => ({}),
+  'read-trace': () => ({}),
+  'remove-trace': () => ({ body: { removed: true } }),
+  'attach-trace': () => ({
+    body: {
+      id: '0190a0a0-0000-7000-8000-000000000003',
+      fileName: 'bake.csv',
+      coatingId: null,
+      points: [{ celsius: 60, minutes: 30 }],
+      earlierMinutes: 0,
+      limitCelsius: null,
+      hottestCelsius: null,
+      rows: 'AAAA',
+    },
+  }),
   ...setUpWithForeignIds,
 };

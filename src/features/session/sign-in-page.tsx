@@ -1,4 +1,4 @@
-import { useMutation, useQueryClient } from '@tanstack/react-query';
+import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useForm } from 'react-hook-form';
 import { Link, Navigate, useSearchParams } from 'react-router-dom';
 import { signIn } from '#contracts/session.ts';
@@ -10,12 +10,14 @@ import { ErrorNote } from '#src/ui/error-note.tsx';
 import { PasswordField, TextField } from '#src/ui/text-field.tsx';
 import { isEmail } from './checks.ts';
 import { DoorCard } from './door-card.tsx';
+import { signUpQuery } from './sign-up-query.ts';
 
 /** Leads back to where one wanted to go. */
 export function Component() {
   const [search] = useSearchParams();
   const client = useQueryClient();
   const me = useMaybeMe();
+  const signUp = useQuery(signUpQuery);
   const { register, handleSubmit, formState } = useForm({ defaultValues: { email: '', password: '' } });
   const enter = useMutation({
     mutationFn: (typed: { email: string; password: string }) =>
@@ -59,6 +61,11 @@ export function Component() {
       <Link to={paths.forgotten()} className="link self-start">
         Forgotten your password?
       </Link>
+      {signUp.data?.open && (
+        <Link to={paths.signUp()} className="link self-start">
+          Open a shop of your own
+        </Link>
+      )}
     </DoorCard>
   );
 }
