@@ -149,8 +149,8 @@ describe('a closure', () => {
       },
     ]);
     const day = await lead.get(`${at}/day?from=2026-03-11T00:00:00Z&to=2026-03-11T23:00:00Z`).expect(200);
-    const row = day.body.rows.find(({ id }: { id: string }) => id === shop.prep);
-    expect(row.closed).toEqual([
+    const rows = day.body.rows as { id: string; closed: object[] }[];
+    expect(rows.find(({ id }) => id === shop.prep)?.closed).toEqual([
       { kind: 'breakdown', label: 'Fan', from: '2026-03-11T08:00:00.000Z', to: '2026-03-11T12:00:00.000Z' },
     ]);
   });

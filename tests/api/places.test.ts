@@ -75,7 +75,7 @@ describe('a place', () => {
       .post(`${at}/places`)
       .send({ ...booth, ...more })
       .expect(400);
-    expect(body.error.fields.map(({ path }: { path: string }) => path)).toEqual(fields);
+    expect((body.error.fields as { path: string }[]).map(({ path }) => path)).toEqual(fields);
     expect(await places()).toHaveLength(3);
   });
 
@@ -163,7 +163,7 @@ describe('places as a file', () => {
   test('come back as they went out', async () => {
     await owner.post(`${at}/places`).send(booth).expect(200);
     const { body } = await owner.get(`${at}/places-csv`).expect(200);
-    expect(body.csv.split('\r\n')[0]).toBe(
+    expect((body.csv as string).split('\r\n')[0]).toBe(
       'name,kind,zone,units,bakes,bake limit celsius,volume m3,air flow,clearance minutes',
     );
     const report = await owner.post(`${at}/places-csv`).send({ csv: body.csv, tryOnly: false }).expect(200);

@@ -101,8 +101,10 @@ describe('a filter', () => {
     await note(byPressure.id, {}).expect(200);
     const read = await note(byPressure.id, { kind: 'pressure', at: '2026-03-09T08:00:00Z', pascals: 151 }).expect(200);
     expect(read.body.standing).toMatchObject({ state: 'due', because: 'pressure', pascals: 151 });
-    const { filters } = (await owner.get(`${at}/filters`).expect(200)).body;
-    const standing = (name: string) => filters.find((one: { name: string }) => one.name === name).standing;
+    const { filters } = (await owner.get(`${at}/filters`).expect(200)).body as {
+      filters: { name: string; standing: object }[];
+    };
+    const standing = (name: string) => filters.find((one) => one.name === name)?.standing;
     expect(standing('Exhaust')).toMatchObject({ state: 'due', because: 'hours', dueOn: '2026-03-10' });
     // 14 days after 1 March is the 15th, five days ahead.
     expect(standing('Ceiling')).toMatchObject({ state: 'soon', because: 'days', dueOn: '2026-03-15' });

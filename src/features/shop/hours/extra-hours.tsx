@@ -60,7 +60,7 @@ export function ExtraHours({ extra, mayWrite, onSaved }: ExtraHoursProps) {
                 {said.charAt(0).toUpperCase() + said.slice(1)}
                 {mayWrite && (
                   <Button size="small" look="quiet" onClick={() => onRemove(opening)}>
-                    Remove<span className="sr-only"> {said}</span>
+                    Remove <span className="sr-only">{said}</span>
                   </Button>
                 )}
               </li>

@@ -107,8 +107,7 @@ export function WeekDialog({ hours, onClose, onSaved }: WeekDialogProps) {
               />
               {before && form[before] !== form[day] && (
                 <Button onClick={() => change(day, form[before])}>
-                  As {weekdayWord[before].slice(0, 3)}
-                  <span className="sr-only"> on {weekdayWord[day]}</span>
+                  As {weekdayWord[before].slice(0, 3)} <span className="sr-only">on {weekdayWord[day]}</span>
                 </Button>
               )}
             </div>

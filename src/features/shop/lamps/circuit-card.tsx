@@ -37,7 +37,7 @@ export function CircuitCard({ circuit, lamps, act }: CircuitCardProps) {
         {act && (
           <span className="whitespace-nowrap">
             <Button size="small" look="quiet" onClick={() => act.editCircuit(circuit.id)}>
-              Change<span className="sr-only"> {circuit.name}</span>
+              Change <span className="sr-only">{circuit.name}</span>
             </Button>
             {lamps.length === 0 && (
               <Button
@@ -51,7 +51,7 @@ export function CircuitCard({ circuit, lamps, act }: CircuitCardProps) {
                   })
                 }
               >
-                Remove<span className="sr-only"> {circuit.name}</span>
+                Remove <span className="sr-only">{circuit.name}</span>
               </Button>
             )}
           </span>
@@ -79,10 +79,10 @@ export function CircuitCard({ circuit, lamps, act }: CircuitCardProps) {
                   onMove={(by) => act.move(lamp, by)}
                 />
                 <Button size="small" look="quiet" onClick={() => act.editLamp(lamp.id)}>
-                  Change<span className="sr-only"> {lamp.name}</span>
+                  Change <span className="sr-only">{lamp.name}</span>
                 </Button>
                 <Button size="small" look="quiet" onClick={() => act.retire(lamp)}>
-                  Retire<span className="sr-only"> {lamp.name}</span>
+                  Retire <span className="sr-only">{lamp.name}</span>
                 </Button>
               </span>
             )}

@@ -151,7 +151,11 @@ function useClosureForm({ closure, placeId, things, onClose, onSaved }: ClosureD
       ? newClosure(closure, { day: today(), time: time(new Date()) }, placeId === undefined ? '' : `place ${placeId}`)
       : closureForm(closure, clock),
   );
-  const draft = useLocalDraft(`closure.${shop.id}.${typeof closure === 'string' ? closure : closure.id}`, initial, isClosureForm);
+  const draft = useLocalDraft(
+    `closure.${shop.id}.${typeof closure === 'string' ? closure : closure.id}`,
+    initial,
+    isClosureForm,
+  );
   const [form, setForm] = useState(draft.start);
   const [isTried, setTried] = useState(false);
   // Upkeep lasts so long; a closure lasts until then.

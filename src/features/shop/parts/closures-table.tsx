@@ -83,10 +83,10 @@ export function ClosuresTable({ label, closures, things, hideKind = false, edit 
               {edit && (
                 <Td className="text-right sm:whitespace-nowrap">
                   <Button size="small" look="quiet" onClick={() => edit(closure.id)}>
-                    Change<span className="sr-only"> {closure.label || closureWords[closure.kind]}</span>
+                    Change <span className="sr-only">{closure.label || closureWords[closure.kind]}</span>
                   </Button>
                   <Button size="small" look="quiet" onClick={() => onRemove(closure)}>
-                    Remove<span className="sr-only"> {closure.label || closureWords[closure.kind]}</span>
+                    Remove <span className="sr-only">{closure.label || closureWords[closure.kind]}</span>
                   </Button>
                 </Td>
               )}

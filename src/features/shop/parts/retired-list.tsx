@@ -19,7 +19,7 @@ export function RetiredList({ things, bringBack, busyId }: RetiredListProps) {
             {name}
             {bringBack && (
               <Button size="small" busy={busyId === id} onClick={() => bringBack(id)}>
-                Bring back<span className="sr-only"> {name}</span>
+                Bring back <span className="sr-only">{name}</span>
               </Button>
             )}
           </li>

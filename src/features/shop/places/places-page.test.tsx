@@ -99,7 +99,8 @@ describe('a booth', () => {
     await userEvent.click(await screen.findByRole('button', { name: 'Booth 1' }));
     const units = screen.getByLabelText('Room, in units');
     await userEvent.clear(units);
-    await userEvent.type(units, '6{Enter}');
+    await userEvent.type(units, '6');
+    await userEvent.click(screen.getByRole('button', { name: 'Save' }));
     expect(await screen.findByText('Somebody else changed it in the meantime.')).toBeInTheDocument();
     expect(screen.getByText(/Now it says: Booth 1, 8 units/)).toBeInTheDocument();
     expect(units).toHaveValue('6');

@@ -94,7 +94,7 @@ export function PlacesTable({ title, kind, places, zones, edit, retire, onMove }
                       onMove={(by) => onMove(place, by)}
                     />
                     <Button size="small" look="quiet" onClick={() => retire(place)}>
-                      Retire<span className="sr-only"> {place.name}</span>
+                      Retire <span className="sr-only">{place.name}</span>
                     </Button>
                   </span>
                 </Td>

@@ -53,7 +53,7 @@ function ZoneRow({ zone, inIt, mayWrite }: { zone: Zone; inIt: readonly Place[];
           {mayWrite && (
             <span className="whitespace-nowrap">
               <Button size="small" look="quiet" onClick={() => setName(zone.name)}>
-                Rename<span className="sr-only"> {zone.name}</span>
+                Rename <span className="sr-only">{zone.name}</span>
               </Button>
               <Button
                 size="small"
@@ -61,7 +61,7 @@ function ZoneRow({ zone, inIt, mayWrite }: { zone: Zone; inIt: readonly Place[];
                 busy={remove.isPending}
                 onClick={() => remove.mutate({ params, body: { version: zone.version } })}
               >
-                Remove<span className="sr-only"> {zone.name}</span>
+                Remove <span className="sr-only">{zone.name}</span>
               </Button>
             </span>
           )}

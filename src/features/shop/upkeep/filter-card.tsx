@@ -130,7 +130,7 @@ function Log({ filter }: { filter: Filter }) {
                 look="quiet"
                 onClick={() => remove.mutate({ params: { shopId: shop.id, filterId: filter.id, entryId: entry.id } })}
               >
-                Strike out<span className="sr-only"> this entry</span>
+                Strike out <span className="sr-only">this entry</span>
               </Button>
             )}
           </li>
