@@ -19,6 +19,8 @@ export const changeKind = z.enum([
   'people-changed',
   'sheets-changed',
   'air-read',
+  'trace-attached',
+  'trace-removed',
 ]);
 export type ChangeKind = z.output<typeof changeKind>;
 

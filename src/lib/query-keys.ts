@@ -47,4 +47,6 @@ export const topicsOf: Record<ChangeKind, readonly Topic[]> = {
   'people-changed': [...drafted, 'people', 'bench'],
   'sheets-changed': ['sheets', 'job'],
   'air-read': ['air', 'day', 'bench'],
+  'trace-attached': ['job'],
+  'trace-removed': ['job'],
 };

@@ -203,6 +203,7 @@ export type ForeignIds = Record<
   | 'personId'
   | 'zoneId'
   | 'keyId'
+  | 'traceId'
   | 'coatingId'
   | 'attachmentId'
   | 'lampId'

@@ -63,6 +63,7 @@ async function rowsOf(shop: { id: string; booth: string; lamp: string }, memberI
     personId: (await makePerson(app.owner, shop)).id,
     zoneId,
     keyId,
+    traceId: await aTrace(shop, job.stages[0] ?? ''),
     coatingId: await aCoating(app.deps.db, shop),
     attachmentId: await anAttachment(app.deps.db, shop),
     ...(await setUpOf(shop)),
@@ -83,6 +84,13 @@ async function setUpOf(shop: { id: string; booth: string; lamp: string }) {
     .owner('filter_entry')
     .insert({ ...inIt, id: entryId, filter_id: filterId, kind: 'change', at: app.clock.now });
   return { lampId: shop.lamp, circuitId: circuit.id, openingId: opening.id, closureId, filterId, entryId };
+}
+
+async function aTrace(shop: { id: string }, stageId: string): Promise<string> {
+  const id = uuid();
+  const made = { file_name: 'bake.csv', file: Buffer.from(''), settings: '{}', points: '[]', verdict: '{}', curve: '[]' };
+  await app.owner('bake_trace').insert({ shop_id: shop.id, id, stage_id: stageId, ...made });
+  return id;
 }
 
 type Sent = { method: string; body?: object | undefined };

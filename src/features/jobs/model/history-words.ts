@@ -11,9 +11,13 @@ export function historyWords({ kind, detail }: Line, say: Say): string[] | null 
     case 'job-changed':
       return changeWords(detail, say);
     case 'job-withdrawn':
-      return ['Withdrew the job', bookingsWords(detail['bookings'])].filter((text) => text !== '');
+      return ['Withdrew the job', bookingsWords(detail['bookings'])].filter((said) => said !== '');
     case 'stage-started':
-      return [`Started ${stageNames(detail)}`];
+      return [`Started ${stageNames(detail)}`, overruledWords(detail['overruled'])].filter((said) => said !== '');
+    case 'trace-attached':
+      return [`Attached a bake trace to ${stageNames(detail)}`, text(detail['fileName'])];
+    case 'trace-removed':
+      return [`Took a bake trace off ${stageNames(detail)}`, text(detail['fileName'])];
     case 'stage-finished':
       return [`Finished ${stageNames(detail)}`];
     case 'plan-posted':
@@ -33,6 +37,14 @@ function changeWords(detail: Line['detail'], say: Say): string[] {
     ...found.map(({ label, from, to }) => `${capital(label)}: from ${from} to ${to}`),
   ];
 }
+
+const text = (value: unknown): string => (typeof value === 'string' ? value : '');
+
+/** Why it was begun although a gate was shut. */
+const overruledWords = (overruled: unknown): string => {
+  const reason = record(overruled)['reason'];
+  return typeof reason === 'string' ? `Under the dew-point gate, all the same: ${reason}` : '';
+};
 
 const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 

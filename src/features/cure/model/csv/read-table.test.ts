@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { traceOf } from '../trace.ts';
-import { decode } from '#src/lib/decode-text.ts';
+import { decodeText as decode } from '#src/lib/decode-text.ts';
 import { readTable, type TraceTable } from './read-table.ts';
 
 async function read(...lines: string[]): Promise<TraceTable> {
