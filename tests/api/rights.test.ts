@@ -88,7 +88,14 @@ async function setUpOf(shop: { id: string; booth: string; lamp: string }) {
 
 async function aTrace(shop: { id: string }, stageId: string): Promise<string> {
   const id = uuid();
-  const made = { file_name: 'bake.csv', file: Buffer.from(''), settings: '{}', points: '[]', verdict: '{}', curve: '[]' };
+  const made = {
+    file_name: 'bake.csv',
+    file: Buffer.from(''),
+    settings: '{}',
+    points: '[]',
+    verdict: '{}',
+    curve: '[]',
+  };
   await app.owner('bake_trace').insert({ shop_id: shop.id, id, stage_id: stageId, ...made });
   return id;
 }

@@ -41,8 +41,11 @@ const body = (rows: string, given: object = {}) => ({
 const attach = (sent: object, to = stage) =>
   api.as(painter).post(`/api/shops/${shop.id}/stages/${to}/traces`).send(sent);
 const list = async () =>
-  ((await api.as(painter).get(`/api/shops/${shop.id}/jobs/${jobId}/traces`).expect(200)).body as { traces: BakeTrace[] })
-    .traces;
+  (
+    (await api.as(painter).get(`/api/shops/${shop.id}/jobs/${jobId}/traces`).expect(200)).body as {
+      traces: BakeTrace[];
+    }
+  ).traces;
 
 describe('a bake trace', () => {
   // 30 min at 60 C with 50 kJ/mol are 52.4 min at 50 C (Arrhenius, R 8.314462618), so 52 min are short and 53 enough.
@@ -51,7 +54,13 @@ describe('a bake trace', () => {
     [53, true],
   ])('of %i min at 50 C is judged by the server: cured %s', async (minutes, cured) => {
     const { verdict } = (await attach(body(hold(50, minutes))).expect(200)).body as BakeTrace;
-    expect(verdict).toMatchObject({ cured, neededMinutes: 30, referenceCelsius: 60, peakCelsius: 50, rows: minutes + 1 });
+    expect(verdict).toMatchObject({
+      cured,
+      neededMinutes: 30,
+      referenceCelsius: 60,
+      peakCelsius: 50,
+      rows: minutes + 1,
+    });
     expect(verdict.doneMinutes).toBeCloseTo((minutes / 52.4) * 30, 1);
   });
 
@@ -84,7 +93,9 @@ describe('a bake trace', () => {
     expect(await list()).toEqual([]);
     await remove(false);
     expect(await list()).toHaveLength(1);
-    const { csv } = (await api.as(painter).get(`/api/shops/${shop.id}/traces/${first.id}`).expect(200)).body as { csv: string };
+    const { csv } = (await api.as(painter).get(`/api/shops/${shop.id}/traces/${first.id}`).expect(200)).body as {
+      csv: string;
+    };
     expect(csv.split('\n').slice(0, 3)).toEqual(['time min,metal C', '0,60', '1,60']);
   });
 

@@ -29,7 +29,7 @@ export async function testApi(register: (routes: Routes, deps: Deps) => void, no
     storage: tempStorage(),
   };
   const app = express();
-  app.use(express.json(), actingAccount(deps));
+  app.use(express.json({ limit: 1_048_576 }), actingAccount(deps));
   register(new Routes(app, deps), deps);
   app.use(errorHandler);
   return {

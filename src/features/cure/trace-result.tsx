@@ -12,12 +12,13 @@ import type { TraceHead } from './model/trace-engine.ts';
 import { plainNumber, unitFromCelsius } from './model/typed.ts';
 import { Facts, NotYet, Source, Verdict, Warnings } from './sections.tsx';
 import type { TraceDesk } from './trace-desk.ts';
+import { AttachTrace } from './attach-trace.tsx';
 import { useDesk } from './use-desk.ts';
 import { useJudged } from './use-judged.ts';
 
-type TraceResultProps = { head: TraceHead; desk: TraceDesk; sheet: Sheet };
+type TraceResultProps = { fileName: string; head: TraceHead; desk: TraceDesk; sheet: Sheet };
 
-export function TraceResult({ head, desk, sheet }: TraceResultProps) {
+export function TraceResult({ fileName, head, desk, sheet }: TraceResultProps) {
   const { values } = useDesk();
   const { unit } = useFormats();
   const { done, limit, col, clock, unit: byHand } = values;
@@ -32,7 +33,18 @@ export function TraceResult({ head, desk, sheet }: TraceResultProps) {
       <NotYet>{sheet.name} prints neither a bake nor an air-dry time: choose another sheet to judge the bake.</NotYet>
     );
   if (answer.value === 'no-rows') return <NotYet>This column has fewer than two readings. Choose another.</NotYet>;
-  return <Found judged={answer.value} sheet={sheet} />;
+  return (
+    <>
+      <Found judged={answer.value} sheet={sheet} />
+      <AttachTrace
+        judged={answer.value}
+        choice={choiceOf(values, head)}
+        desk={desk}
+        fileName={fileName}
+        sheet={sheet}
+      />
+    </>
+  );
 }
 
 const minutes = (value: number) => `${plainNumber(value, 1)} min`;

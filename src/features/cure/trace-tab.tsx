@@ -11,6 +11,8 @@ import { exampleTrace } from './model/example-trace.ts';
 import { judgingErrors } from './model/judge.ts';
 import { Card, NotYet, Split } from './sections.tsx';
 import { SheetPicker } from './sheet-picker.tsx';
+import { useLastSettings } from './use-last-settings.ts';
+import { useStoredTrace } from './use-stored-trace.ts';
 import { useSheet } from './use-sheet.ts';
 import { TraceColumns } from './trace-columns.tsx';
 import { TraceResult } from './trace-result.tsx';
@@ -21,6 +23,8 @@ export function TraceTab({ reader }: { reader: TraceReader }) {
   const { values } = useDesk();
   const { unit } = useFormats();
   const sheet = useSheet();
+  useStoredTrace(reader);
+  useLastSettings();
   const { file } = reader;
   const errors = judgingErrors(values, unit);
   return (
@@ -48,7 +52,7 @@ export function TraceTab({ reader }: { reader: TraceReader }) {
           <>
             <Card title={`Bake in ${file.name}`}>
               {sheet?.ok && Object.keys(errors).length === 0 ? (
-                <TraceResult head={file.head} desk={file.desk} sheet={sheet.value} />
+                <TraceResult fileName={file.name} head={file.head} desk={file.desk} sheet={sheet.value} />
               ) : (
                 <NotYet />
               )}

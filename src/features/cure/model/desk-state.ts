@@ -61,6 +61,9 @@ export const firstValues = {
   clock: '',
   done: '0',
   limit: '',
+  job: '',
+  stage: '',
+  trace: '',
 } as const;
 
 export type FieldKey = keyof typeof firstValues;

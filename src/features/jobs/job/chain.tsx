@@ -27,6 +27,7 @@ export function Chain({ job }: { job: Job }) {
         {job.stages.map((stage, i) => (
           <StageItem
             key={stage.id}
+            jobId={job.id}
             stage={stage}
             isLast={i === job.stages.length - 1}
             isWithdrawn={job.state === 'withdrawn'}

@@ -1,19 +1,27 @@
 import { Check, Pin, Play } from 'lucide-react';
+import { Link } from 'react-router-dom';
 import type { JobStage } from '#contracts/jobs.ts';
 import { cx } from '#src/lib/cx.ts';
 import { formatNearDay } from '#src/lib/formats.ts';
 import { phasesInWords } from '#src/lib/phase-words.ts';
-import { useFormats } from '#src/lib/session.ts';
+import { may, useFormats, useShop } from '#src/lib/session.ts';
 import { PhaseBar } from '#src/ui/phase-bar.tsx';
 import { windowWords } from '#src/lib/window-words.ts';
 import { WindowGauge } from '#src/ui/window-gauge.tsx';
 import { latenessWords, minutesLater, piecesOf } from '../model/stage-times.ts';
+import { Traces } from './traces.tsx';
 import { WaysOnOffer } from './ways-on-offer.tsx';
 
-type StageItemProps = { stage: JobStage; isLast: boolean; isWithdrawn: boolean; heatLimit: number | null };
+type StageItemProps = {
+  jobId: string;
+  stage: JobStage;
+  isLast: boolean;
+  isWithdrawn: boolean;
+  heatLimit: number | null;
+};
 
 /** A knot on the line: when and where the stage is, its phases, its window, its other ways, how it went. */
-export function StageItem({ stage, isLast, isWithdrawn, heatLimit }: StageItemProps) {
+export function StageItem({ jobId, stage, isLast, isWithdrawn, heatLimit }: StageItemProps) {
   const { duration } = useFormats();
   const pieces = piecesOf(stage);
   const minutes = pieces.reduce((sum, piece) => sum + piece.size, 0);
@@ -32,12 +40,41 @@ export function StageItem({ stage, isLast, isWithdrawn, heatLimit }: StageItemPr
         <Booked stage={stage} isWithdrawn={isWithdrawn} />
         <PhaseBar pieces={pieces} label={words} height={stage.state === 'done' ? 'line' : 'row'} />
         <Happened stage={stage} />
+        {stage.overruled && <Overruled overruled={stage.overruled} />}
+        <Traces jobId={jobId} stageId={stage.id} />
+        <AttachTrace jobId={jobId} stage={stage} />
         {stage.state === 'waiting' && <Window stage={stage} />}
         {stage.state === 'waiting' && (
           <WaysOnOffer ways={stage.ways} chosen={stage.booking?.way ?? null} heatLimit={heatLimit} />
         )}
       </div>
     </li>
+  );
+}
+
+/** Sprayed under the dew-point gate: who said so, and why. */
+function Overruled({ overruled }: { overruled: NonNullable<JobStage['overruled']> }) {
+  const { dateTime } = useFormats();
+  return (
+    <p className="rounded border border-amber bg-amber-soft px-3 py-2 text-[0.8125rem]">
+      <b>Sprayed under the dew-point gate.</b> {overruled.reason}
+      <span className="text-muted">
+        {' '}
+        {overruled.by ?? 'Somebody'}, {dateTime(overruled.at)}
+      </span>
+    </p>
+  );
+}
+
+/** A logger's record of a bake that has begun is judged and attached at the cure desk. */
+function AttachTrace({ jobId, stage }: { jobId: string; stage: JobStage }) {
+  const { role } = useShop();
+  const bakes = stage.ways.some(({ phases }) => phases.some(({ kind }) => kind === 'bake'));
+  if (!bakes || stage.state === 'waiting' || !may.workStages(role)) return null;
+  return (
+    <Link className="link self-start text-[0.8125rem]" to={`/cure?tab=trace&job=${jobId}&stage=${stage.id}`}>
+      Attach a bake trace
+    </Link>
   );
 }
 
