@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { checkPlan, type Mode, odds, plan, type Plan, type Problem } from '#planner/index.ts';
+import { checkPlan, type Mode, odds, plan, type Plan, type Problem, type Progress } from '#planner/index.ts';
 import { generateLoads } from './generate-loads.ts';
 import { fixSome } from './generate-shop.ts';
 import { independentChecker } from './independent-checker.ts';
@@ -197,6 +197,28 @@ describe('generated shops', () => {
     }
     expect(loads).toBeGreaterThan(5); // else the rules would hold for want of loads
     expect(fixed).toBeGreaterThan(3);
+  });
+
+  test('loads bring no plan that costs more than the search finds without them', { timeout: PATIENCE }, () => {
+    // A search that does not know its end begins with a round of 4000 evaluations in which it forms no loads.
+    const best = (problem: Problem, evaluations: number): number => {
+      let calls = 0;
+      let least = Infinity;
+      const note = (p: Progress): void => {
+        if (p.evaluations <= evaluations) least = Math.min(least, p.unplaced * 1e9 + p.cost);
+      };
+      plan(problem, { seed: 1, onProgress: note, stop: () => ++calls > evaluations / 16 + 100 });
+      return least;
+    };
+    let better = 0;
+    for (let seed = 0; seed < 4; seed++) {
+      const problem = generateLoads(seed);
+      const without = best(withoutLoads(problem), 1000);
+      const allowed = best(problem, 5000);
+      expect(allowed).toBeLessThanOrEqual(without + 1e-6);
+      if (allowed < without - 1e-6) better++;
+    }
+    expect(better).toBeGreaterThan(0);
   });
 
   test('the same seed and evaluations give the same plan', { timeout: PATIENCE }, () => {

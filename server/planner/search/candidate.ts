@@ -41,6 +41,8 @@ export type Search = {
   published: Int32Array;
   /** Per block: 1 while what comes before its load is being placed. */
   awaited: Uint8Array;
+  /** Whether ruins may bring blocks together in a load. */
+  forms: boolean;
   /** Asked now and then while many blocks are placed: true gives the candidate up. */
   halt: () => boolean;
 };
@@ -69,6 +71,7 @@ export function makeSearch(shop: Shop, alone: Int32Array): Search {
     evaluations: 0,
     published: publishedVariants(shop),
     awaited: new Uint8Array(blocks),
+    forms: false,
     halt: () => false,
   };
   for (let s = 0; s < shop.stageCount; s++) copyStage(shop, d.state.at, search.heldPlacing, s);

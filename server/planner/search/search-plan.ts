@@ -174,6 +174,8 @@ function rounds(run: Run): void {
   for (let round = 0; !isOver(run); round++) {
     if (round % 2 === 1 && round < count - 1) startFrom(s, shuffled(run));
     else standOn(s, run.best);
+    // Of several rounds the first forms no loads: what it finds is what the others have to better.
+    s.forms = s.d.shop.shares && (round > 0 || count === 1);
     const from = shareGone(run);
     const until = known === null || round >= count ? 1 : known + ((1 - known) * (round + 1)) / count;
     anneal(s, run.random, {

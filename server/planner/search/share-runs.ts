@@ -16,7 +16,7 @@ const MOST = 12;
 /** Lets some of the jobs taken out share a run, or no longer. Whoever runs with them is taken out too. */
 export function shareRuns(s: Search, random: Random, cuts: Cut[]): void {
   withMates(s, cuts, () => random() < BREAK, random);
-  if (random() >= JOIN || cuts.length >= MOST) return;
+  if (!s.forms || random() >= JOIN || cuts.length >= MOST) return;
   const able = cuts.flatMap(({ job, from }) =>
     s.d.shop.jobs[job]!.blocks.slice(from).filter((id) => s.d.shop.mates[id]!.length > 0),
   );
