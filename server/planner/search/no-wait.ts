@@ -20,6 +20,8 @@ type Shifts = {
   weight: Float64Array;
   /** Per job, how many others it meets. */
   meets: Int32Array;
+  /** Number of meetings, each seen from both sides. */
+  all: number;
   /** Sums over the starts of the job looked at. */
   profile: Float64Array;
   tabu: Int32Array;
@@ -38,6 +40,7 @@ function shiftsOf(s: Search): Shifts {
     start: Int32Array.from(shop.jobs, (job) => s.heldPlacing.start[job.first]!),
     weight: new Float64Array(n * n).fill(1),
     meets: new Int32Array(n),
+    all: 0,
     profile: new Float64Array(Math.max(most, shop.horizon) + 2),
     tabu: new Int32Array(n),
   };
@@ -105,28 +108,41 @@ function moveJob(w: Shifts, j: number, end: number, random: Random): number {
   return least - now;
 }
 
-/** Counts who meets whom; returns the number of meetings. */
-function countMeetings(w: Shifts): number {
-  let all = 0;
+/** Counts who meets whom from scratch. */
+function countMeetings(w: Shifts): void {
+  w.all = 0;
   w.meets.fill(0);
   for (let j = 0; j < w.jobs; j++)
     for (const { other, lo, hi } of w.meetings[j]!) {
       const d = w.start[j]! - w.start[other]!;
       if (d > lo && d < hi) {
         w.meets[j]!++;
-        all++;
+        w.all++;
       }
     }
-  return all;
+}
+
+/** Adds (or takes away: `sign` -1) the meetings of job `j`, its own and those of the others with it. */
+function countJob(w: Shifts, j: number, sign: number): void {
+  for (const { other, lo, hi } of w.meetings[j]!) {
+    const d = w.start[j]! - w.start[other]!;
+    if (d > lo && d < hi) {
+      w.meets[j]! += sign;
+      w.meets[other]! += sign;
+      w.all += 2 * sign;
+    }
+  }
 }
 
 /** Makes every pair that meets a little dearer. */
 function learn(w: Shifts): void {
-  for (let j = 0; j < w.jobs; j++)
+  for (let j = 0; j < w.jobs; j++) {
+    if (w.meets[j] === 0) continue;
     for (const { other, lo, hi } of w.meetings[j]!) {
       const d = w.start[j]! - w.start[other]!;
       if (d > lo && d < hi) w.weight[j * w.jobs + other]! += DEARER;
     }
+  }
 }
 
 /**
@@ -140,8 +156,7 @@ export function planNoWait(s: Search, random: Random, over: () => boolean, keep:
     s.evaluations++;
     if (over()) return;
     if (w.length.some((l, j) => w.release[j]! + l > end)) return; // no job is shorter than itself
-    const meetings = countMeetings(w);
-    if (meetings === 0) {
+    if (w.all === 0) {
       take(s, w);
       keep();
       end = lower(w, s);
@@ -149,7 +164,10 @@ export function planNoWait(s: Search, random: Random, over: () => boolean, keep:
       continue;
     }
     const j = pick(w, n, random);
-    if (moveJob(w, j, end, random) >= 0) learn(w);
+    countJob(w, j, -1);
+    const change = moveJob(w, j, end, random);
+    countJob(w, j, 1);
+    if (change >= 0) learn(w);
     w.tabu[j] = n + 1 + below(random, 1 + (w.jobs >> 2));
     if (n % (RESTART * w.jobs) === 0) scatter(w, end, random);
   }
@@ -159,6 +177,7 @@ export function planNoWait(s: Search, random: Random, over: () => boolean, keep:
 function scatter(w: Shifts, end: number, random: Random): void {
   w.weight.fill(1);
   for (let j = 0; j < w.jobs; j++) w.start[j] = w.release[j]! + below(random, end - w.length[j]! - w.release[j]! + 1);
+  countMeetings(w);
 }
 
 /** A job that meets another, by lot, rather not one that has just moved. */
@@ -179,6 +198,7 @@ function pick(w: Shifts, n: number, random: Random): number {
 function lower(w: Shifts, s: Search): number {
   const end = s.ledger.last - 1;
   for (let j = 0; j < w.jobs; j++) w.start[j] = Math.max(w.release[j]!, Math.min(w.start[j]!, end - w.length[j]!));
+  countMeetings(w);
   return end;
 }
 
