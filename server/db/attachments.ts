@@ -75,7 +75,9 @@ export async function wantedAttachments(trx: Trx, shopId: string, ids: string[],
   const rows = await trx('attachment')
     .where({ shop_id: shopId })
     .whereIn('id', ids)
-    .where((either) => either.whereNull('removed_at').orWhere('removed_at', '>=', since))
+    .where((either) => {
+      void either.whereNull('removed_at').orWhere('removed_at', '>=', since);
+    })
     .select<{ id: string }[]>('id');
   return new Set(rows.map(({ id }) => id));
 }

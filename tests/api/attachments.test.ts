@@ -167,14 +167,15 @@ describe('what is not taken', () => {
     expect(torn.body.error.fields).toEqual([{ path: 'body.file', message: 'the form is torn' }]);
 
     // A line that drops: the server has nobody to answer, and nothing is left.
-    const cookie = (lead as unknown as { jar: { getCookies(of: object): { toValueString(): string } } }).jar;
+    const { jar } = lead as unknown as { jar: { getCookies(of: object): { toValueString(): string } } };
+    const cookies = jar.getCookies({ domain: '127.0.0.1', path: '/', secure: false, script: false });
     const { hostname, port } = new URL(app.url);
     const line = connect(Number(port), hostname);
     await once(line, 'connect');
     const headers = [
       `POST ${at()} HTTP/1.1`,
       `Host: ${hostname}:${port}`,
-      `Cookie: ${String(cookie.getCookies({ domain: hostname, path: '/', secure: false, script: false }))}`,
+      `Cookie: ${cookies.toValueString()}`,
       `Idempotency-Key: ${randomUUID()}`,
       `Content-Type: multipart/form-data; boundary=${boundary}`,
       'Content-Length: 500000',

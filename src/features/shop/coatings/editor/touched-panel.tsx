@@ -4,7 +4,7 @@ import { Link } from 'react-router-dom';
 import type { CoatingDetail } from '#contracts/coatings.ts';
 import { retimeWithCoating, type TouchedByCoating } from '#contracts/retiming.ts';
 import { paths } from '#src/app/paths.ts';
-import { useShop } from '#src/lib/session.ts';
+import { may, useShop } from '#src/lib/session.ts';
 import { Badge } from '#src/ui/badge.tsx';
 import { Button } from '#src/ui/button.tsx';
 import { Checkbox } from '#src/ui/checkbox.tsx';
@@ -48,6 +48,7 @@ const jobThings = ({ jobs }: TouchedByCoating): Thing[] =>
 type TouchedProps = { coating: CoatingDetail; touched: TouchedByCoating; isDirty: boolean };
 function Touched({ coating, touched, isDirty }: TouchedProps) {
   const shop = useShop();
+  const mayKeep = may.keepSheets(shop.role);
   const [left, setLeft] = useState<ReadonlySet<string>>(new Set());
   const [sheets, jobs] = [sheetThings(touched), jobThings(touched)];
   const retime = useCoatingWrite(retimeWithCoating);
@@ -61,12 +62,12 @@ function Touched({ coating, touched, isDirty }: TouchedProps) {
     return <p className="text-muted">No process sheet names it yet, and no open job waits for it.</p>;
   return (
     <>
-      <Things title="Process sheets" things={sheets} left={left} tick={shop.role !== 'painter' ? tick : null} />
-      <Things title="Open jobs" things={jobs} left={left} tick={shop.role !== 'painter' ? tick : null} />
-      {retime.data && !anyDiffers && <Done {...retime.data} />}
+      <Things title="Process sheets" things={sheets} left={left} tick={mayKeep ? tick : null} />
+      <Things title="Open jobs" things={jobs} left={left} tick={mayKeep ? tick : null} />
+      {retime.data && <Done {...retime.data} />}
       {!anyDiffers && !retime.data && <p className="text-muted">All of them have its times.</p>}
       {retime.error !== null && <ErrorNote error={retime.error} what="Nothing was re-timed." />}
-      {anyDiffers && (shop.role === 'owner' || shop.role === 'lead') && (
+      {anyDiffers && mayKeep && (
         <div className="flex flex-col gap-1.5">
           <Button
             look="primary"

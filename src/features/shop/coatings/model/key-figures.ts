@@ -14,10 +14,7 @@ export function keyFigures(sheet: CoatingSheet, { duration, temperature }: Say):
     { label: 'Coats', text: `${coatsText(coats)}${between}` },
     {
       label: 'Recoat',
-      text:
-        recoatWithin === null
-          ? `from ${duration(flashBeforeNext)}`
-          : `${duration(flashBeforeNext)} to ${duration(recoatWithin)}`,
+      text: recoatText(flashBeforeNext, recoatWithin, duration),
     },
     { label: 'Pot life', text: potLife === null ? 'none' : duration(potLife) },
     { label: 'Cure', text: cureText(sheet, { duration, temperature }) },
@@ -32,4 +29,9 @@ function cureText({ airDry, bake, lampShort, lampMedium }: CoatingSheet, { durat
     airDry && `${duration(airDry.minutes)} in air`,
   ].filter((line) => line !== null);
   return lines.join(' or ') || 'not said';
+}
+
+function recoatText(next: number, within: number | null, duration: Say['duration']): string {
+  const from = next === 0 ? 'at once' : `from ${duration(next)}`;
+  return within === null ? from : `${from} to ${duration(within)}`;
 }

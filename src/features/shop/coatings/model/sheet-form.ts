@@ -148,8 +148,7 @@ const wrongWords: Record<SheetWrong, string> = {
 
 function judged(value: SheetFields, faults: Faults): FormRead<SheetForm, SheetFields> {
   if (Object.keys(faults).length === 0)
-    for (const { code, path } of dataSheetFaults(value.sheet).wrong)
-      faults[fieldOf[path]] ??= wrongWords[code];
+    for (const { code, path } of dataSheetFaults(value.sheet).wrong) faults[fieldOf[path]] ??= wrongWords[code];
   return Object.keys(faults).length === 0 ? { value, faults: null } : { value: null, faults };
 }
 
