@@ -66,7 +66,7 @@ describe('an empty shop', { timeout: 240_000 }, () => {
     await take();
     await page.getByText('4 of 5 done').waitFor();
     await page.getByLabel('Title').fill('Left door, dent');
-    await page.getByLabel('Process sheet').selectOption({ index: 0 });
+    await page.getByLabel('Process sheet').selectOption({ label: 'New steel panel' });
     await page.getByRole('button', { name: 'Take it in and plan' }).click();
     await page.waitForURL('**/day**');
     await page.locator('[data-bar]').first().waitFor();
