@@ -131,7 +131,7 @@ function Steps({ data }: { data: FirstSteps }) {
               {done && <span className="sr-only">, done</span>}
             </h2>
             {done && (
-              <Link to={editor[step]} className="text-right text-[0.8125rem]">
+              <Link to={editor[step]} className="link text-right text-[0.8125rem]">
                 {sayDone(step, data)}
               </Link>
             )}

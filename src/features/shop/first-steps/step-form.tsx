@@ -32,7 +32,7 @@ export function StepForm({ children, deed = 'Take these', busy, error, editors, 
           {deed}
         </Button>
         {editors.map(({ to, label }) => (
-          <Link key={to} to={to}>
+          <Link key={to} to={to} className="link">
             {label}
           </Link>
         ))}

@@ -31,7 +31,7 @@ export function ClashesDialog({ name, clashes, onClose }: ClashesDialogProps) {
       <ul className="flex flex-col gap-2">
         {clashes.map((clash) => (
           <li key={clash.stageId} className="rounded border border-line px-3 py-2">
-            <Link to={paths.job(clash.jobId)} className="font-semibold">
+            <Link to={paths.job(clash.jobId)} className="link font-semibold">
               {clash.jobNumber} {clash.jobTitle}
             </Link>
             <p className="text-muted">

@@ -32,7 +32,7 @@ export function PeopleTable({ people, ...deeds }: PeopleTableProps) {
     <>
       {order.isError && <ErrorNote error={order.error} what="The order stays as it was." />}
       <Table label="People">
-        <thead>
+        <thead className="max-sm:hidden">
           <tr>
             <Th>Name</Th>
             <Th>Skills</Th>
@@ -72,8 +72,9 @@ function Row({ person, edit, setAway, setLeaving, up, down }: RowProps) {
   const training = trainingWords(person, today());
   const hours = sayShifts(person.shifts, clock);
   return (
-    <tr>
-      <Td>
+    // On a phone each person is a block, with the deeds in sight.
+    <tr className="max-sm:flex max-sm:flex-wrap max-sm:items-center max-sm:border-t max-sm:border-line max-sm:py-2 max-sm:first:border-t-0 max-sm:*:border-t-0 max-sm:*:py-1">
+      <Td className="max-sm:w-full">
         <span className="font-semibold">{person.name}</span>
         {person.member && <span className="block text-xs text-muted">signs in as {person.member.name}</span>}
         {person.leavesOn !== null && (
@@ -102,7 +103,7 @@ function Row({ person, edit, setAway, setLeaving, up, down }: RowProps) {
       <Td>
         <Badge tone={training.tone}>{training.word}</Badge>
       </Td>
-      <Td className="text-right whitespace-nowrap">
+      <Td className="whitespace-nowrap max-sm:w-full max-sm:px-1 sm:text-right">
         {mayWrite && (
           <>
             <IconButton

@@ -43,9 +43,9 @@ export function WeekField({ days, onChange, faults, shifts }: WeekFieldProps) {
         may end on the next day.
       </p>
       {weekdays.map((day) => (
-        <div key={day} className="grid grid-cols-[5.5rem_minmax(0,1fr)] items-start gap-2">
+        <div key={day} className="grid grid-cols-[2.5rem_minmax(0,1fr)] items-start gap-2">
           <span aria-hidden="true" className="flex min-h-control items-center">
-            {weekdayWord[day]}
+            {weekdayWord[day].slice(0, 3)}
           </span>
           <TextField
             label={`${weekdayWord[day]}, hours and breaks`}
