@@ -71,7 +71,7 @@ export function makeSearch(shop: Shop, alone: Int32Array): Search {
     evaluations: 0,
     published: publishedVariants(shop),
     awaited: new Uint8Array(blocks),
-    forms: false,
+    forms: shop.shares,
     halt: () => false,
   };
   for (let s = 0; s < shop.stageCount; s++) copyStage(shop, d.state.at, search.heldPlacing, s);
