@@ -182,6 +182,15 @@ describe('an invitation', () => {
     expect(shops.map((shop) => shop.id).sort()).toEqual([other.shopId, owner.shopId].sort());
   });
 
+  test('gives a new account the shop’s clock and units, and leaves those of an account that was there', async () => {
+    await app.owner('shop').where({ id: owner.shopId }).update({ clock: '12', temperature_unit: 'F' });
+    const guest = await accept(tokenIn(await invitationLetter(newGuest()))).expect(200);
+    expect(guest.body.account).toMatchObject({ clock: '12', temperatureUnit: 'F' });
+    const other = await shopWithOwner();
+    const known = await accept(tokenIn(await invitationLetter(other.email)), other.password).expect(200);
+    expect(known.body.account).toMatchObject({ clock: '24', temperatureUnit: 'C' });
+  });
+
   test('is good for seven days', async () => {
     const token = tokenIn(await invitationLetter(newGuest()));
     app.clock.advance(7 * day - minute);

@@ -26,10 +26,12 @@ export function PlacesTable({ title, kind, places, zones, edit, retire, onMove }
         <thead>
           <tr>
             <Th>Name</Th>
-            <Th number>Units</Th>
+            <Th number className="max-sm:hidden">
+              Units
+            </Th>
             {!isRack && <Th className="max-sm:hidden">Zone</Th>}
             {kind === 'booth' && <Th className="max-sm:hidden">Bakes to</Th>}
-            {!isRack && <Th>Purge before heat</Th>}
+            {!isRack && <Th className="max-sm:hidden">Purge before heat</Th>}
             {!isRack && <Th className="max-sm:hidden">Clearance</Th>}
             {edit && (
               <Th>
@@ -53,19 +55,11 @@ export function PlacesTable({ title, kind, places, zones, edit, retire, onMove }
                 ) : (
                   place.name
                 )}
-                {!isRack && (
-                  <span className="block text-xs font-normal text-muted sm:hidden">
-                    {zones.find(({ id }) => id === place.zoneId)?.name ?? 'its own air'}
-                    {place.clearanceMinutes > 0 && `, ${place.clearanceMinutes} min clearance`}
-                    {place.bakes && (
-                      <>
-                        , bakes to <BakesTo place={place} />
-                      </>
-                    )}
-                  </span>
-                )}
+                <OnPhone place={place} zone={zones.find(({ id }) => id === place.zoneId)?.name ?? null} />
               </Td>
-              <Td number>{place.units}</Td>
+              <Td number className="max-sm:hidden">
+                {place.units}
+              </Td>
               {!isRack && (
                 <Td className="max-sm:hidden">{zones.find(({ id }) => id === place.zoneId)?.name ?? 'its own air'}</Td>
               )}
@@ -75,7 +69,7 @@ export function PlacesTable({ title, kind, places, zones, edit, retire, onMove }
                 </Td>
               )}
               {!isRack && (
-                <Td>
+                <Td className="max-sm:hidden">
                   <Purge place={place} />
                 </Td>
               )}
@@ -104,6 +98,28 @@ export function PlacesTable({ title, kind, places, zones, edit, retire, onMove }
         </tbody>
       </Table>
     </section>
+  );
+}
+
+/** What the other columns say, below the name where there is no room for them. */
+function OnPhone({ place, zone }: { place: Place; zone: string | null }) {
+  const { units, kind, clearanceMinutes } = place;
+  return (
+    <span className="block text-xs font-normal text-muted sm:hidden">
+      {units} {units === 1 ? 'unit' : 'units'}
+      {kind !== 'rack' && (
+        <>
+          , {zone ?? 'its own air'}
+          {place.bakes && (
+            <>
+              , bakes to <BakesTo place={place} />
+            </>
+          )}
+          , purge <Purge place={place} />
+          {clearanceMinutes > 0 && `, clearance ${clearanceMinutes} min`}
+        </>
+      )}
+    </span>
   );
 }
 

@@ -1,7 +1,7 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import type { Clash } from '#contracts/clashes.ts';
-import { may, useShop } from '#src/lib/session.ts';
+import { may, meQuery, useShop } from '#src/lib/session.ts';
 import { ErrorNote } from '#src/ui/error-note.tsx';
 import { Page } from '#src/ui/page.tsx';
 import { SkeletonLines } from '#src/ui/skeleton.tsx';
@@ -46,6 +46,8 @@ function Settings() {
           mayWrite={mayWrite}
           onSaved={({ shop: saved, clashes }) => {
             client.setQueryData(settingsQuery(shop.id).queryKey, saved);
+            // Name and zone stand in the shell, and every time is written in that zone.
+            void client.invalidateQueries({ queryKey: meQuery.queryKey });
             setTold(clashes);
             // The form begins anew with what was saved.
             setRound(round + 1);
