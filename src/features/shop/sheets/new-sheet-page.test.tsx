@@ -17,6 +17,9 @@ const others = [{ path: '/shop/sheets/:sheetId', element: <p>The sheet&rsquo;s p
 const show = (search = '') =>
   renderPage(<NewSheetPage />, { at: `/shop/sheets/new${search}`, me: meAs('lead'), others });
 
+// Against hanging, not against slowness: some two hundred key presses on a page that is judged anew after each.
+const patience = 300_000;
+
 beforeEach(() => stubWidth(1440));
 
 /** Walks with Tab until what has the focus is called so. */
@@ -39,7 +42,7 @@ async function addStage(letters: string): Promise<void> {
   await userEvent.keyboard(`${letters}{Enter}`);
 }
 
-it('bumper cover, primer, lamp cure, base, clear, booth bake: from nothing, with the keyboard only', async () => {
+it('bumper cover, primer, lamp cure, base, clear, booth bake: from nothing, with the keyboard only', { timeout: patience }, async () => {
   const { sent } = fakeApi({ ...usual, [`POST ${shop}/process-sheets`]: { body: sampleSheet({ version: 1 }) } });
   show();
   await screen.findByRole('region', { name: 'The chain' });

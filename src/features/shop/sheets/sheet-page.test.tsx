@@ -31,7 +31,8 @@ const openStage = async (name: RegExp) => userEvent.click(stages().getByRole('bu
 
 beforeEach(() => stubWidth(1440));
 
-describe('the editor of a process sheet', () => {
+// Against hanging, not against slowness: a page that is judged anew after each key.
+describe('the editor of a process sheet', { timeout: 300_000 }, () => {
   it('draws the chain with its least time, and each option’s variant', async () => {
     fakeApi(usual);
     show();
