@@ -42,45 +42,49 @@ async function addStage(letters: string): Promise<void> {
   await userEvent.keyboard(`${letters}{Enter}`);
 }
 
-it('bumper cover, primer, lamp cure, base, clear, booth bake: from nothing, with the keyboard only', { timeout: patience }, async () => {
-  const { sent } = fakeApi({ ...usual, [`POST ${shop}/process-sheets`]: { body: sampleSheet({ version: 1 }) } });
-  show();
-  await screen.findByRole('region', { name: 'The chain' });
-  await tabTo(/Name of the sheet/);
-  await userEvent.keyboard('Bumper cover');
-  await tabTo(/^Add a part$/);
-  await userEvent.keyboard('{Enter}');
-  await userEvent.tab({ shift: true });
-  await tabTo(/^Part 1$/);
-  await userEvent.keyboard('Cover');
-  for (const letters of ['primer', 'lamp', 'base', 'clear', 'booth']) await addStage(letters);
-  const list = within(screen.getByRole('region', { name: 'Stages' }));
-  expect(list.getAllByRole('button', { name: /^\d/ })).toHaveLength(5);
-  // Base colour one up and back again by its keys, said out loud.
-  await tabTo(/^3Base colour/);
-  await userEvent.keyboard('{Alt>}{ArrowUp}{/Alt}');
-  expect(list.getByText('Base colour is now stage 2 of 5.')).toBeInTheDocument();
-  await userEvent.keyboard('{Control>}z{/Control}');
-  await tabTo(/^Save as version 1$/);
-  await userEvent.keyboard('{Enter}');
-  const dialog = await screen.findByRole('dialog');
-  await tabTo(/^Save as version 1$/);
-  expect(dialog).toContainElement(document.activeElement as HTMLElement);
-  await userEvent.keyboard('{Enter}');
-  expect(await screen.findByText('The sheet’s page')).toBeVisible();
-  const { name, body } = createSheet.body.parse(sent.find(({ method }) => method === 'POST')?.body);
-  expect(name).toBe('Bumper cover');
-  expect(body?.parts).toMatchObject([{ name: 'Cover' }]);
-  expect(
-    body?.stages.map(({ title, coatingId }) => [title, sampleCoatings.find(({ id }) => id === coatingId)?.kind]),
-  ).toEqual([
-    ['Primer surfacer', 'primer'],
-    ['Lamp cure', 'primer'],
-    ['Base colour', 'base'],
-    ['Clear', 'clear'],
-    ['Booth bake', 'clear'],
-  ]);
-});
+it(
+  'bumper cover, primer, lamp cure, base, clear, booth bake: from nothing, with the keyboard only',
+  { timeout: patience },
+  async () => {
+    const { sent } = fakeApi({ ...usual, [`POST ${shop}/process-sheets`]: { body: sampleSheet({ version: 1 }) } });
+    show();
+    await screen.findByRole('region', { name: 'The chain' });
+    await tabTo(/Name of the sheet/);
+    await userEvent.keyboard('Bumper cover');
+    await tabTo(/^Add a part$/);
+    await userEvent.keyboard('{Enter}');
+    await userEvent.tab({ shift: true });
+    await tabTo(/^Part 1$/);
+    await userEvent.keyboard('Cover');
+    for (const letters of ['primer', 'lamp', 'base', 'clear', 'booth']) await addStage(letters);
+    const list = within(screen.getByRole('region', { name: 'Stages' }));
+    expect(list.getAllByRole('button', { name: /^\d/ })).toHaveLength(5);
+    // Base colour one up and back again by its keys, said out loud.
+    await tabTo(/^3Base colour/);
+    await userEvent.keyboard('{Alt>}{ArrowUp}{/Alt}');
+    expect(list.getByText('Base colour is now stage 2 of 5.')).toBeInTheDocument();
+    await userEvent.keyboard('{Control>}z{/Control}');
+    await tabTo(/^Save as version 1$/);
+    await userEvent.keyboard('{Enter}');
+    const dialog = await screen.findByRole('dialog');
+    await tabTo(/^Save as version 1$/);
+    expect(dialog).toContainElement(document.activeElement as HTMLElement);
+    await userEvent.keyboard('{Enter}');
+    expect(await screen.findByText('The sheet’s page')).toBeVisible();
+    const { name, body } = createSheet.body.parse(sent.find(({ method }) => method === 'POST')?.body);
+    expect(name).toBe('Bumper cover');
+    expect(body?.parts).toMatchObject([{ name: 'Cover' }]);
+    expect(
+      body?.stages.map(({ title, coatingId }) => [title, sampleCoatings.find(({ id }) => id === coatingId)?.kind]),
+    ).toEqual([
+      ['Primer surfacer', 'primer'],
+      ['Lamp cure', 'primer'],
+      ['Base colour', 'base'],
+      ['Clear', 'clear'],
+      ['Booth bake', 'clear'],
+    ]);
+  },
+);
 
 it('begins like another sheet', async () => {
   const { sent } = fakeApi({
