@@ -15,7 +15,7 @@ import { Skeleton } from '#src/ui/skeleton.tsx';
 import { ChangedMeanwhile } from '../parts/changed-meanwhile.tsx';
 import { coatingQuery } from './data/coating-queries.ts';
 import { DocumentPanel } from './editor/document-panel.tsx';
-import { Film } from './editor/film.tsx';
+import { Doubts, Film } from './editor/film.tsx';
 import { RetireButton } from './editor/retire-button.tsx';
 import { SheetCautions } from './editor/sheet-cautions.tsx';
 import { SheetFields } from './editor/sheet-fields.tsx';
@@ -80,6 +80,7 @@ function Sheet({ coating }: { coating: CoatingDetail }) {
         </form>
         <div className="flex min-w-0 flex-col gap-4">
           <Film sheet={state.sheet} />
+          <Doubts sheet={state.sheet} />
           {!readOnly && (
             <div className="flex flex-col gap-3">
               {meanwhile && (

@@ -13,7 +13,7 @@ import { Skeleton } from '#src/ui/skeleton.tsx';
 import { showToast } from '#src/ui/toast-store.ts';
 import { coatingQuery } from './data/coating-queries.ts';
 import { useCoatingWrite, useKeepCoating } from './data/use-coating-write.ts';
-import { Film } from './editor/film.tsx';
+import { Doubts, Film } from './editor/film.tsx';
 import { SheetCautions } from './editor/sheet-cautions.tsx';
 import { SheetFields } from './editor/sheet-fields.tsx';
 import { useSheetForm } from './editor/use-sheet-form.ts';
@@ -79,6 +79,7 @@ function NewSheet({ like }: { like: CoatingDetail | null }) {
         <SheetFields state={state} readOnly={false} />
         <div className="flex flex-col gap-4 lg:sticky lg:top-4">
           <Film sheet={state.sheet} />
+          <Doubts sheet={state.sheet} />
           {create.error !== null && (
             <ErrorNote error={create.error} what="Nothing was kept." kept="What you typed is still here." />
           )}

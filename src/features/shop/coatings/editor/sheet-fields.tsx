@@ -1,6 +1,5 @@
 import { energyOfSheet } from '#chemistry/sheets/energy-of-sheet.ts';
 import type { CoatingSheet } from '#contracts/coatings.ts';
-import { Doubts } from './film.tsx';
 import { PracticeNote } from './practice-note.tsx';
 import { CoatsSection, CureSection, LimitsSection, NameSection, WindowsSection } from './sheet-sections.tsx';
 import type { SheetFormState } from './use-sheet-form.ts';
@@ -18,7 +17,6 @@ export function SheetFields({ state, readOnly }: { state: SheetFormState; readOn
       <WindowsSection {...parts} />
       <CureSection {...parts} />
       <LimitsSection {...parts} energyNow={sheet && energyWords(sheet)} />
-      <Doubts sheet={sheet} />
     </fieldset>
   );
 }
