@@ -20,13 +20,11 @@ export type Ledger = {
   last: number;
   /** Earliest end of each job in an empty shop. */
   alone: Int32Array;
-  /** What a minute of booth costs on top of the objective, while the search looks for plans that waste none. */
-  boothPrice: number;
 };
 
 export function makeLedger(shop: Shop, alone: Int32Array): Ledger {
   const n = shop.jobs.length;
-  return { est: new Int32Array(n).fill(-1), part: new Float64Array(n), sum: 0, last: 0, alone, boothPrice: 0 };
+  return { est: new Int32Array(n).fill(-1), part: new Float64Array(n), sum: 0, last: 0, alone };
 }
 
 /** Notes a job's earliest possible end. */
@@ -63,7 +61,7 @@ export function settleLedger(l: Ledger): void {
 /** The cost as far as it is known; the whole cost once every block is placed. */
 export function costOf(d: Decoder, l: Ledger): number {
   const w = d.shop.problem.objective;
-  return l.sum + w.makespan * l.last + (w.booth + l.boothPrice) * d.state.boothMinutes + w.moves * d.state.moves;
+  return l.sum + w.makespan * l.last + w.booth * d.state.boothMinutes + w.moves * d.state.moves;
 }
 
 /** Minute before which job `j` has to end so that the whole cost, as far as it is known, stays within `limit`. */

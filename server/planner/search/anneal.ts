@@ -1,5 +1,4 @@
 import type { Random } from '../random.ts';
-import { plainCost, setBoothPrice } from './booth-price.ts';
 import { attempt, attemptBlocks, type Search } from './candidate.ts';
 import { changeHands, changePlace, changeWay, type Move, moveBlock, moveJob, moveJobs, ruin } from './moves.ts';
 
@@ -12,9 +11,6 @@ const RUIN = 6;
 const LIST = 0.3;
 /** Tries after which the weights are set anew. */
 const ADAPT = 500;
-/** Tries after which the price of booths follows, and the share of the run at which it is gone. */
-const REPRICE = 100;
-const PRICED = 0.85;
 
 const makeChoices = (): Choice[] =>
   [null, moveBlock, moveJob, moveJobs, changeWay, changeHands, changePlace].map((move) => {
@@ -43,8 +39,6 @@ export type Cooling = {
   share: () => number;
   hot: number;
   cold: number;
-  /** Price of a minute of booth to begin with; it falls to nothing before the end. */
-  price?: number;
   /** Called after each acceptance that lowers the best cost. */
   onBetter: () => void;
 };
@@ -54,14 +48,12 @@ export function anneal(s: Search, random: Random, cooling: Cooling): void {
   const choices = makeChoices();
   // Ruined jobs leave holes: now and then everything is placed anew in the order of starts.
   const closeUp = 50 + Math.floor(s.order.length / 4);
-  setBoothPrice(s, cooling.price ?? 0);
-  let best = plainCost(s);
+  let best = s.cost;
   let accepted = 0;
   for (let n = 1; ; n++) {
     const share = cooling.share();
-    if (share >= 1) return setBoothPrice(s, 0);
+    if (share >= 1) return;
     if (n % ADAPT === 0) adapt(choices);
-    if (cooling.price && n % REPRICE === 0) setBoothPrice(s, cooling.price * Math.max(0, 1 - share / PRICED));
     const heat = cooling.hot * Math.pow(cooling.cold / cooling.hot, share);
     const before = s.cost;
     const choice = pickChoice(choices, random);
@@ -69,8 +61,8 @@ export function anneal(s: Search, random: Random, cooling: Cooling): void {
     if (!tryMove(s, random, choice.move, before - heat * Math.log(1 - random()))) continue;
     if (s.cost < before - 1e-9) choice.gain++;
     if (choice.move === null && ++accepted % closeUp === 0) attempt(s, 0, s.cost);
-    if (plainCost(s) < best - 1e-9) {
-      best = plainCost(s);
+    if (s.cost < best - 1e-9) {
+      best = s.cost;
       cooling.onBetter();
     }
   }

@@ -2,7 +2,6 @@ import { restore } from '../engine/keep.ts';
 import { forgetTouched } from '../engine/placer.ts';
 import { OUT } from '../engine/run-cost.ts';
 import { copyStage, makePlacing, type Placing } from '../engine/state.ts';
-import { plainCost } from './booth-price.ts';
 import { type Genes, settleHeld, type Search } from './candidate.ts';
 
 /** A whole schedule put aside, to be stood on again. */
@@ -37,7 +36,7 @@ export function makeKept({ d, held }: Search): Kept {
 /** Copies the schedule that the search stands on. */
 export function keepHeld(s: Search, kept: Kept): void {
   const { shop } = s.d;
-  kept.cost = plainCost(s);
+  kept.cost = s.cost;
   kept.genes.order.set(s.held.order);
   kept.genes.choice.set(s.held.choice);
   kept.genes.hand.set(s.held.hand);
@@ -69,8 +68,8 @@ export function standOn(s: Search, kept: Kept): void {
   s.heldPins.set(kept.pins);
   s.heldOut.set(kept.out);
   s.heldOutStage.set(kept.outStage);
+  s.cost = kept.cost;
   settleHeld(s);
-  s.cost = kept.cost + s.ledger.boothPrice * d.state.boothMinutes;
 }
 
 /** The cost without what a job left out adds in the search. */

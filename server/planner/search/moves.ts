@@ -221,9 +221,13 @@ function interleaved(queues: readonly number[][], random: Random): number[] {
 /** Share of ruins after which everything is asked to go back to where it was published, where moving costs. */
 const HOME = 0.3;
 
-/** Shares of blocks put back in a way drawn by lot, and of stages with a person or a place drawn by lot. */
-const OTHER_WAY = 0.05;
-const OTHER_SPOT = 0.015;
+/**
+ * Shares of blocks put back in a way drawn by lot, and of stages with a person or a place drawn by lot; more in shops of
+ * at most so many blocks, where the good plans lie far apart.
+ */
+const SMALL = 60;
+const OTHER_WAY = { small: 0.15, large: 0.05 };
+const OTHER_SPOT = { small: 0.06, large: 0.015 };
 
 /** Mostly leaves place, way and person of a block to the decoder, now and then asks for something else. */
 function choose(s: Search, random: Random, id: number, published: boolean): void {
@@ -231,13 +235,14 @@ function choose(s: Search, random: Random, id: number, published: boolean): void
   const { first, last, variants } = shop.blocks[id]!;
   // The longest finish alone counts: then a job may as well start later than it could.
   const waiting = shop.problem.objective.flow + shop.problem.objective.tardiness > 0 ? 0.02 : 0.3;
-  choice[id] = random() < OTHER_WAY ? below(random, variants.length) : -1;
+  const size = shop.blocks.length > SMALL ? 'large' : 'small';
+  choice[id] = random() < OTHER_WAY[size] ? below(random, variants.length) : -1;
   for (let k = first; k <= last; k++) {
     const way = s.heldPlacing.way[k];
     handOf[k] =
-      way && way.people.length > 1 && random() < OTHER_SPOT ? way.people[below(random, way.people.length)]! : -1;
+      way && way.people.length > 1 && random() < OTHER_SPOT[size] ? way.people[below(random, way.people.length)]! : -1;
     spotOf[k] =
-      way && way.places.length > 1 && random() < OTHER_SPOT ? way.places[below(random, way.places.length)]! : -1;
+      way && way.places.length > 1 && random() < OTHER_SPOT[size] ? way.places[below(random, way.places.length)]! : -1;
     wishOf[k] = k === first && random() < waiting ? below(random, s.ledger.last + 1) : 0;
   }
   if (published) wishPublished(s, id);

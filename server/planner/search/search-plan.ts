@@ -9,7 +9,6 @@ import { anneal } from './anneal.ts';
 import { asJobShop, isNoWait } from './job-shop.ts';
 import { planNoWait } from './no-wait.ts';
 import { planJobShop } from './plan-job-shop.ts';
-import { plainCost } from './booth-price.ts';
 import { makeSearch, type Search, startFrom } from './candidate.ts';
 import { costShown, type Kept, keepHeld, makeKept, standOn } from './kept.ts';
 import { placePublished, undisturbed } from './published.ts';
@@ -24,12 +23,8 @@ const REPAIR = 2000;
 const REPAIR_SHARE = 0.4;
 /** Evaluations of the first round where nobody says when the end comes; each next one is twice as long. */
 const FIRST_ROUND = 4000;
-/** A shop of at most so many blocks is small: it cools down long before the end and begins again. */
-const SMALL = 60;
-/** Evaluations that a round of a small shop should have, most rounds, and evaluations by which their pace is taken. */
-const ENOUGH = 10_000;
-const MOST_ROUNDS = 40;
-const PACE = 600;
+/** Evaluations that a round of a small shop should have. */
+const ENOUGH = 40_000;
 
 type Run = {
   s: Search;
@@ -91,7 +86,7 @@ function isOver(run: Run): boolean {
 /** Keeps the search's schedule if it is the best so far. */
 function keep(run: Run): void {
   const { s, best } = run;
-  if (plainCost(s) >= best.cost - 1e-9) return;
+  if (s.cost >= best.cost - 1e-9) return;
   run.improvements++;
   keepHeld(s, best);
   const unplaced = best.out.reduce((x, y) => x + y, 0);
@@ -163,31 +158,19 @@ function heatOf({ s, best }: Run): number {
 
 /**
  * Into how many rounds a run is cut whose end is known: small shops, which have cooled down long before it, begin again
- * from other orders. The pace of the first plans says nothing about later ones, so it is taken while the search is hot.
+ * from other orders.
  */
-function roundsFor(run: Run): number {
-  const { s } = run;
-  if (s.order.length > SMALL) return 1;
-  const from = shareGone(run)!;
-  const begun = s.evaluations;
-  anneal(s, run.random, {
-    share: () => (isOver(run) || s.evaluations - begun >= PACE ? 1 : 0),
-    hot: heatOf(run),
-    cold: heatOf(run),
-    onBetter: () => keep(run),
-  });
-  const now = shareGone(run)!;
-  if (now <= from) return MOST_ROUNDS;
-  const left = ((s.evaluations - begun) * (1 - now)) / (now - from);
-  return Math.max(1, Math.min(MOST_ROUNDS, Math.round(left / ENOUGH)));
+function roundsFor({ s }: Run, share: number): number {
+  const evaluations = share > 0 ? s.evaluations / share : 0;
+  return s.order.length > 60 ? 1 : Math.max(1, Math.min(8, Math.floor(evaluations / ENOUGH)));
 }
 
 /** Anneals: one long run or a few where the end is known, else in rounds that grow, each from the best so far. */
 function rounds(run: Run): void {
   const { s } = run;
   if (s.d.shop.blocks.length < 2) return;
-  const count = shareGone(run) === null ? 0 : roundsFor(run);
   const known = shareGone(run);
+  const count = known === null ? 0 : roundsFor(run, known);
   for (let round = 0; !isOver(run); round++) {
     if (round % 2 === 1 && round < count - 1) startFrom(s, shuffled(run));
     else standOn(s, run.best);
@@ -199,8 +182,6 @@ function rounds(run: Run): void {
       share: from === null ? shareOfRound(run, round) : shareOfTime(run, from, until),
       hot: heatOf(run),
       cold: heatOf(run) / 200,
-      // Small shops look in every other round for plans that waste no booth.
-      price: round % 2 === 1 && round < count ? s.d.shop.problem.objective.tardiness : 0,
       onBetter: () => keep(run),
     });
   }
