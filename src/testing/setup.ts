@@ -29,3 +29,7 @@ Element.prototype.scrollIntoView ??= () => {};
 Element.prototype.hasPointerCapture ??= () => false;
 Element.prototype.setPointerCapture ??= () => {};
 Element.prototype.releasePointerCapture ??= () => {};
+
+// jsdom lays nothing out and so scrolls nothing.
+Element.prototype.scrollTo = () => undefined;
+Element.prototype.scrollBy = () => undefined;

@@ -11,12 +11,13 @@ type Props = {
   view: DayView;
   narrow: boolean;
   zoom: Zoom;
+  onZoom: (zoom: Zoom) => void;
   /** The stage that was chosen. */
   children: ReactNode;
 };
 
 /** The day as a timeline where there is room for one, as a list by place where there is not. */
-export function DayBody({ booth, view, narrow, zoom, children }: Props) {
+export function DayBody({ booth, view, narrow, zoom, onZoom, children }: Props) {
   const { board, formats, link, days, open, axis, words, skew, movable, onDrop, onNudge } = booth;
   if (view.rows.length === 0) return <NoPlaces />;
   return (
@@ -35,7 +36,7 @@ export function DayBody({ booth, view, narrow, zoom, children }: Props) {
         </>
       ) : (
         <BoardView
-          {...{ view, axis, board, words, zoom, skew, movable, onDrop, onNudge }}
+          {...{ view, axis, board, words, zoom, onZoom, skew, movable, onDrop, onNudge }}
           people={link.people}
           selected={link.stage}
           panel={children}

@@ -73,7 +73,7 @@ export function Component() {
         />
       )}
       {view ? (
-        <DayBody booth={booth} view={view} narrow={narrow} zoom={zoom}>
+        <DayBody booth={booth} view={view} narrow={narrow} zoom={zoom} onZoom={setZoom}>
           <ChosenStage
             {...{ view, formats, moves, canPlan, movable: booth.movable }}
             stageId={link.stage}

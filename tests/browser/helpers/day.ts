@@ -98,8 +98,7 @@ export const mayBeDragged = (view: DayView): Bar[] =>
   );
 
 export const barOf = (page: Page, stageId: string): Locator => page.locator(`[data-bar="${stageId}"]`);
-const laneOf = (page: Page, placeId: string): Locator =>
-  page.locator(`td.fc-timeline-lane[data-resource-id="${placeId}"]`);
+const laneOf = (page: Page, placeId: string): Locator => page.locator(`[data-lane="${placeId}"]`);
 
 export type Box = { x: number; y: number; width: number; height: number };
 export async function boxOf(locator: Locator): Promise<Box> {

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
-import { fractionAt, hoursWorthShowing, type Axis } from './axis.ts';
+import { fractionAt, instantAt, hoursWorthShowing, type Axis } from './axis.ts';
 import { instantOf } from '#src/lib/wall-clock.ts';
 
 const zone = 'Europe/Berlin';
@@ -51,4 +51,15 @@ test('hours shown reach from the first thing to the last, and what dries overnig
   expect(hoursWorthShowing(zone, [])).toEqual({ fromMinute: 420, toMinute: 1080 });
   expect(hoursWorthShowing(zone, [], 3)).toEqual({ fromMinute: 420, toMinute: 1140 });
   expect(hoursWorthShowing(zone, [span('2027-03-11', 900, 1439)], 12)).toEqual({ fromMinute: 720, toMinute: 1440 });
+});
+
+test('an instant is found again at its place of the axis, on full five minutes', () => {
+  const week = { zone, days: ['2027-03-10', '2027-03-11', '2027-03-12'], fromMinute: 420, toMinute: 1080 };
+  for (const at of ['2027-03-10T07:05', '2027-03-11T12:00', '2027-03-12T17:55']) {
+    const instant = instantOf(at.slice(0, 10), Number(at.slice(11, 13)) * 60 + Number(at.slice(14)), zone);
+    expect(instantAt(week, fractionAt(week, instant), 5)).toBe(instant);
+    expect(instantAt(week, fractionAt(week, instant + 2 * 60_000), 5)).toBe(instant);
+  }
+  expect(instantAt(week, -1, 5)).toBe(instantOf('2027-03-10', 420, zone));
+  expect(instantAt(week, 2, 5)).toBe(instantOf('2027-03-12', 1080, zone));
 });

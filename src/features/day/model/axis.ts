@@ -1,3 +1,4 @@
+import { instantOf } from '#src/lib/wall-clock.ts';
 import { dayMs, minuteMs, wallMs } from './wall-time.ts';
 
 /** The drawn time: the same clock hours of each day, side by side. Minutes count from the day's midnight. */
@@ -15,6 +16,15 @@ export function fractionAt(axis: Axis, at: number): number {
   const shown = axis.toMinute - axis.fromMinute;
   const minute = (wall - day * dayMs) / minuteMs - axis.fromMinute;
   return (day * shown + Math.min(Math.max(minute, 0), shown)) / (axis.days.length * shown);
+}
+
+/** The instant (ms) at a place of the axis, 0 to 1, rounded to `step` minutes of the clock; beyond the ends the end. */
+export function instantAt(axis: Axis, fraction: number, step: number): number {
+  const shown = axis.toMinute - axis.fromMinute;
+  const minutes = Math.round(Math.min(Math.max(fraction, 0), 1) * axis.days.length * shown);
+  const day = Math.min(axis.days.length - 1, Math.floor(minutes / shown));
+  const minute = axis.fromMinute + Math.round((minutes - day * shown) / step) * step;
+  return instantOf(axis.days[day] ?? '1970-01-01', minute, axis.zone);
 }
 
 export const shownMinutes = (axis: Axis): number => axis.days.length * (axis.toMinute - axis.fromMinute);

@@ -1,4 +1,8 @@
 import { useSyncExternalStore } from 'react';
+import type { Drawn } from '../model/board.ts';
+
+/** A bar under the pointer, and where it would land. `start` in milliseconds. */
+export type Dragged = { item: Drawn; start: number; placeId: string };
 
 /** What bars listen to one by one, so that choosing one does not draw all of them again. */
 export type BoardState = {
@@ -6,6 +10,7 @@ export type BoardState = {
   selected: string | null;
   /** The one bar that Tab reaches; arrows go on from there. */
   focusStop: string | null;
+  dragged: Dragged | null;
 };
 
 export type BoardStore = {
@@ -15,7 +20,7 @@ export type BoardStore = {
 };
 
 export function createBoardStore(): BoardStore {
-  let state: BoardState = { selected: null, focusStop: null };
+  let state: BoardState = { selected: null, focusStop: null, dragged: null };
   const listeners = new Set<() => void>();
   return {
     get: () => state,

@@ -1,53 +1,86 @@
-import type { CalendarOptions, EventDropArg } from '@fullcalendar/core';
-import { useCallback, useRef, useEffect, type RefObject } from 'react';
-import { fractionAt, type Axis } from '../model/axis.ts';
-import type { Drawn } from '../model/board.ts';
-import { windowOf } from '../model/window-of.ts';
-import type { DayView } from '#contracts/day.ts';
+import { useEffect, useRef, type RefObject } from 'react';
+import { aim, drop, laneX, lift, type Grip, type Point, type Scene } from './drag-hands.ts';
+import { mayMove } from './may-move.ts';
 
-type Deps = { view: DayView; axis: Axis; onDrop: (item: Drawn, start: number, placeId: string) => void };
+/** A mouse drags after so many pixels; a finger after so long without moving, so that it may still scroll. */
+const MOUSE_PIXELS = 4;
+const HOLD_MILLISECONDS = 400;
+const FINGER_PIXELS = 10;
 
-type DragOptions = Pick<CalendarOptions, 'eventAllow' | 'eventDragStart' | 'eventDragStop' | 'eventDrop'>;
+const pointOf = ({ clientX, clientY }: Point): Point => ({ clientX, clientY });
 
-/** While a bar is dragged its window is lit across the rows; only places take it. Dropping hands it on and puts it back. */
-export function useDrag(frame: RefObject<HTMLElement | null>, deps: Deps): DragOptions {
-  const latest = useRef(deps);
+/** Dragging a bar in time and from place to place with mouse, pen or finger. Escape, or a lost pointer, puts it back. */
+export function useDrag(box: RefObject<HTMLElement | null>, scene: Scene): void {
+  const latest = useRef(scene);
   useEffect(() => {
-    latest.current = deps;
+    latest.current = scene;
   });
-  return {
-    eventAllow: useCallback<NonNullable<DragOptions['eventAllow']>>(({ resource }) => {
-      const row = latest.current.view.rows.find((r) => r.id === resource?.id);
-      return row?.kind === 'booth' || row?.kind === 'prep' || row?.kind === 'rack';
-    }, []),
-    eventDragStart: useCallback<NonNullable<DragOptions['eventDragStart']>>(
-      ({ event }) => light(frame.current, itemOf(event), latest.current.axis),
-      [frame],
-    ),
-    eventDragStop: useCallback(() => unlight(frame.current), [frame]),
-    eventDrop: useCallback((info: EventDropArg) => {
-      const item = itemOf(info.event);
-      const start = info.event.start?.getTime();
-      const placeId = info.newResource?.id ?? item?.rowId;
-      // The board is drawn from our own data only: back first, then by what the move makes of them.
-      info.revert();
-      if (item && start !== undefined && placeId) latest.current.onDrop(item, start, placeId);
-    }, []),
+  useEffect(() => {
+    const element = box.current;
+    if (!element) return undefined;
+    const hands = makeHands(box, () => latest.current);
+    const off = new AbortController();
+    const { signal } = off;
+    element.addEventListener('pointerdown', hands.take, { signal });
+    element.addEventListener('pointermove', hands.move, { signal });
+    element.addEventListener('pointerup', hands.release, { signal });
+    element.addEventListener('pointercancel', hands.putBack, { signal });
+    element.addEventListener('click', hands.click, { signal, capture: true });
+    // A finger that has taken a bar no longer scrolls; only a listener that is not passive may say so.
+    element.addEventListener('touchmove', hands.touch, { signal, passive: false });
+    window.addEventListener('keydown', (event) => event.key === 'Escape' && hands.putBack(), { signal });
+    return () => {
+      off.abort();
+      hands.putBack();
+    };
+  }, [box]);
+}
+
+function makeHands(box: RefObject<HTMLElement | null>, scene: () => Scene) {
+  let held: Grip | null = null;
+  let timer = 0;
+  let justDropped = false;
+  const begin = (grip: Grip) => lift(box, scene, grip, () => held === grip);
+  const letGo = () => {
+    clearTimeout(timer);
+    held = null;
   };
-}
-
-const itemOf = (event: { extendedProps: Record<string, unknown> }) => event.extendedProps['item'] as Drawn | undefined;
-
-function light(frame: HTMLElement | null, item: Drawn | undefined, axis: Axis): void {
-  if (!frame || !item) return;
-  const window = windowOf(item.members);
-  const from = window.earliest === null ? 0 : fractionAt(axis, Date.parse(window.earliest));
-  const to = window.latest === null ? 1 : fractionAt(axis, Date.parse(window.latest));
-  frame.dataset['dragging'] = 'yes';
-  frame.style.setProperty('--land-from', String(from));
-  frame.style.setProperty('--land-to', String(Math.max(from, to)));
-}
-
-function unlight(frame: HTMLElement | null): void {
-  if (frame) delete frame.dataset['dragging'];
+  const putBack = () => {
+    letGo();
+    if (scene().store.get().dragged) scene().store.set({ dragged: null });
+  };
+  const take = (event: PointerEvent) => {
+    justDropped = false;
+    const id = (event.target as HTMLElement).closest<HTMLElement>('[data-bar]')?.dataset['bar'];
+    const item = scene().board.find((one) => one.id === id);
+    if (!item || event.button !== 0 || !scene().movable || !mayMove(item)) return;
+    const from = pointOf(event);
+    const grip: Grip = { item, pointer: event.pointerId, from, laneX: laneX(box, from), last: from, dragging: false };
+    held = grip;
+    if (event.pointerType !== 'mouse') timer = window.setTimeout(() => held === grip && begin(grip), HOLD_MILLISECONDS);
+  };
+  const move = (event: PointerEvent) => {
+    if (held?.pointer !== event.pointerId) return;
+    held.last = pointOf(event);
+    if (held.dragging) return aim(box, scene(), held);
+    const far = Math.hypot(held.last.clientX - held.from.clientX, held.last.clientY - held.from.clientY);
+    if (event.pointerType === 'mouse' && far >= MOUSE_PIXELS) begin(held);
+    else if (event.pointerType !== 'mouse' && far > FINGER_PIXELS) letGo();
+  };
+  const release = (event: PointerEvent) => {
+    if (held?.pointer !== event.pointerId) return;
+    const grip = held;
+    letGo();
+    justDropped = grip.dragging;
+    if (grip.dragging) drop(scene(), grip);
+  };
+  // The click that ends a drag opens nothing.
+  const click = (event: Event) => {
+    if (justDropped) event.stopPropagation();
+    justDropped = false;
+  };
+  const touch = (event: Event) => {
+    if (held?.dragging) event.preventDefault();
+  };
+  return { take, move, release, putBack, click, touch };
 }

@@ -1,22 +1,29 @@
 import { useLayoutEffect, useRef, type RefObject } from 'react';
-import type { Zoom } from './scale.ts';
+import { NAMES } from './sizes.ts';
 
-/** Keeps the time in the middle of the page in the middle when the scale changes. */
-export function useKeepCentre(frame: RefObject<HTMLElement | null>, zoom: Zoom): void {
-  const centre = useRef(0.5);
+/**
+ * When the scale changes the time in the middle of the box stays in the middle, or, where `holdAt` was told just before,
+ * the time under the pointer under the pointer.
+ */
+export function useKeepCentre(box: RefObject<HTMLElement | null>, laneWidth: number): (clientX: number) => void {
+  /** Share of the drawn time in the middle of the box. */
+  const middle = useRef(0.5);
+  const held = useRef<{ x: number; share: number } | null>(null);
   useLayoutEffect(() => {
-    const scroller = frame.current?.querySelector('.fc-timeline-body')?.closest('.fc-scroller');
-    if (!scroller) return undefined;
-    const settle = requestAnimationFrame(() => {
-      scroller.scrollLeft = centre.current * scroller.scrollWidth - scroller.clientWidth / 2;
-    });
-    const remember = () => {
-      centre.current = (scroller.scrollLeft + scroller.clientWidth / 2) / scroller.scrollWidth;
-    };
-    scroller.addEventListener('scroll', remember, { passive: true });
-    return () => {
-      cancelAnimationFrame(settle);
-      scroller.removeEventListener('scroll', remember);
-    };
-  }, [frame, zoom]);
+    const element = box.current;
+    if (!element) return undefined;
+    const half = (element.clientWidth - NAMES) / 2;
+    const { x, share } = held.current ?? { x: half, share: middle.current };
+    held.current = null;
+    element.scrollTo({ left: share * laneWidth - x });
+    const remember = () => (middle.current = (element.scrollLeft + half) / laneWidth);
+    element.addEventListener('scroll', remember, { passive: true });
+    return () => element.removeEventListener('scroll', remember);
+  }, [box, laneWidth]);
+  return (clientX) => {
+    const element = box.current;
+    if (!element) return;
+    const x = clientX - element.getBoundingClientRect().left - NAMES;
+    held.current = { x, share: (element.scrollLeft + x) / laneWidth };
+  };
 }
