@@ -72,6 +72,7 @@ const nothing: Sheet = {
   bake: null,
   lampShort: null,
   lampMedium: null,
+  kilojoulesPerMole: null,
   cautions: [],
 };
 

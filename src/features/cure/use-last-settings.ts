@@ -32,7 +32,7 @@ function readLast(): Partial<Values> {
     if (typeof last !== 'object' || last === null) return {};
     return Object.fromEntries(
       Object.entries(last).filter(([key, value]) => kept.some((one) => one === key) && typeof value === 'string'),
-    ) as Partial<Values>;
+    );
   } catch {
     return {};
   }

@@ -81,6 +81,12 @@ describe('bake equivalents', () => {
     expect(cureOf(sheet, null)).toMatchObject({ energyFrom: 'default', contradiction: true });
   });
 
+  it('follows the energy that the shop set on the sheet before one fitted to its lines', () => {
+    const sheet = { ...got(sheetOf(null, typed({ dry: '180', dryat: '20C' }), 'C')), kilojoulesPerMole: 70 };
+    expect(cureOf(sheet, null)).toMatchObject({ energyFrom: 'set', kinetics: { kilojoulesPerMole: 70 } });
+    expect(cureOf(sheet, 55)).toMatchObject({ energyFrom: 'typed', kinetics: { kilojoulesPerMole: 55 } });
+  });
+
   it('adds up bakes and tells what is left', () => {
     const sum = got(bakeSum(typed({ bakes: '10*60C_26.3*50C', rest: '60C' }), oneLine, 'C'));
     // 26.3 min at 50 C are a hair over half of the 52.4 that equal 30 min at 60 C.
@@ -161,7 +167,7 @@ describe('the lamp', () => {
   });
 
   it('takes twice the short-wave minutes for a medium wave (a trade article)', () => {
-    const sheet = { ...oneLine, lamp: { minutes: 25, wave: 'short' as const, metres: 0.7 } };
+    const sheet = { ...oneLine, lampShort: { minutes: 25, metres: 0.7 } };
     expect(got(lampAnswer(typed({ wave: 'medium' }), sheet, 'C')).sheetMinutes).toEqual({
       minutes: 50,
       printed: false,

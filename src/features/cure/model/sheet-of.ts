@@ -16,6 +16,7 @@ export type Sheet = Pick<
   | 'bake'
   | 'lampShort'
   | 'lampMedium'
+  | 'kilojoulesPerMole'
   | 'cautions'
 > & { name: string };
 
@@ -55,6 +56,7 @@ export function sheetOf(coating: Coating | null, values: Values, unit: Unit): An
         : { minutes: bake, celsius: bakeAt, measuredAt: values.measured === 'air' ? 'air' : 'metal' },
     lampShort: null,
     lampMedium: null,
+    kilojoulesPerMole: null,
     cautions: [],
   }));
 }
@@ -64,8 +66,8 @@ export const flashCelsius = (sheet: Sheet): number => sheet.airDry?.celsius ?? 2
 
 export type CureOf = {
   kinetics: Kinetics;
-  /** Where the energy comes from: fitted to the sheet's two lines, the default, or typed. */
-  energyFrom: 'sheet' | 'default' | 'typed';
+  /** Where the energy comes from: fitted to the sheet's two lines, set on the sheet by the shop, the default, or typed. */
+  energyFrom: 'sheet' | 'set' | 'default' | 'typed';
   /** Two lines of which the hotter is no faster: one of them is mistyped, and only the bake was used. */
   contradiction: boolean;
 };
@@ -78,11 +80,13 @@ export function cureOf(sheet: Sheet, typedKilojoules: number | null): CureOf | n
     .map(({ minutes, celsius }): PrintedPoint => ({ minutes, celsius }));
   const hottest = points.toSorted((a, b) => b.celsius - a.celsius)[0];
   if (!hottest) return null;
-  if (typedKilojoules !== null) {
-    const kinetics = cureKinetics([hottest], typedKilojoules);
-    // It was typed, not assumed.
+  const given = typedKilojoules ?? sheet.kilojoulesPerMole;
+  if (given !== null) {
+    const kinetics = cureKinetics([hottest], given);
+    // It was given, not assumed.
     const findings = kinetics.findings.filter(({ code }) => code !== 'activation-energy-assumed');
-    return { kinetics: { ...kinetics, findings }, energyFrom: 'typed', contradiction: false };
+    const energyFrom = typedKilojoules === null ? 'set' : 'typed';
+    return { kinetics: { ...kinetics, findings }, energyFrom, contradiction: false };
   }
   const coldest = points.find((point) => point.celsius < hottest.celsius);
   const contradiction = points.length > 1 && (!coldest || coldest.minutes <= hottest.minutes);
