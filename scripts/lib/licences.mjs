@@ -26,16 +26,8 @@ const fitting = new Set([
   'Zlib',
 ]);
 
-// Of the three licences its premium packages offer, the one that fits this work (GPLv3, by its LICENSE.md).
-const calendar = 'GPL-3.0-only';
-
 /** What a package's own field does not say as an SPDX expression; read in the file named. @type {Record<string, string>} */
 const stated = {
-  '@fullcalendar/premium-common': calendar,
-  '@fullcalendar/resource': calendar,
-  '@fullcalendar/resource-timeline': calendar,
-  '@fullcalendar/scrollgrid': calendar,
-  '@fullcalendar/timeline': calendar,
   pause: 'MIT', // Readme.md
 };
 
