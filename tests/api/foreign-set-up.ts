@@ -27,7 +27,7 @@ const someFilter = {
   efficiencyPercent: null,
 };
 
-/** The part of `withForeignIds` in rights-matrix.ts that is about places, lamps, hours and filters. */
+/** The part of `withForeignIds` in foreign-ids.ts that is about places, lamps, hours and filters. */
 export const setUpWithForeignIds: Readonly<Record<string, (ids: Ids) => { body?: object }>> = {
   'create-place': ({ zoneId }) => ({ body: { ...somePlace, zoneId } }),
   'change-place': () => ({ body: { version: 1, name: 'Mine now' } }),

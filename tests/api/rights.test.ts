@@ -6,7 +6,8 @@ import { stranger, testApp, testDeps, type TestApp } from '../helpers/app.ts';
 import { freshDatabase, type TestDatabase } from '../helpers/database.ts';
 import { aCoating, aDraft, anAttachment, aJob, aSheet, aShop } from '../helpers/factories-jobs.ts';
 import { makeMember, makePerson, makeShop, type MadeMember } from '../helpers/factories.ts';
-import { rights, who, withForeignIds, type ForeignIds, type Who } from './rights-matrix.ts';
+import { withForeignIds, type ForeignIds } from './foreign-ids.ts';
+import { rights, who, type Who } from './rights-matrix.ts';
 
 // The list of routes is needed to name the tests, before there is a database; nothing is asked of it here.
 const { deps } = testDeps({ ownerUrl: '', url: 'postgres://127.0.0.1:1/none', drop: async () => {} });
@@ -153,7 +154,7 @@ describe("another shop's ids are ids of nothing", () => {
   );
   test.each(takesIds.map((route) => [route.name, route] as const))('%s', async (name, route) => {
     const request = withForeignIds[name];
-    if (!request) throw new Error(`route ${name} has no request in withForeignIds of tests/api/rights-matrix.ts`);
+    if (!request) throw new Error(`route ${name} has no request in tests/api/foreign-ids.ts`);
     const send = (ids: ForeignIds) => {
       const { body, query = '' } = request(ids);
       return ask(`${filled(route.path, { ...ids, shopId })}${query}`, { method: route.method, body }, 'owner');
