@@ -6,7 +6,8 @@ export const TASK_CHANNEL = 'ovenbird_task';
 export type TaskKind =
   | 'send-letter'
   | 'send-reset'
-  | 'send-invitation' | 'send-sign-up'
+  | 'send-invitation'
+  | 'send-sign-up'
   | 'run-plan'
   | 'reset-demo'
   | 'look-at-people'
