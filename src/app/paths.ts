@@ -20,8 +20,8 @@ export const paths = {
   people: () => '/shop/people',
   places: () => '/shop/places',
   lamps: () => '/shop/lamps',
-  hours: () => '/shop/hours',
-  upkeep: () => '/shop/upkeep',
+  hours: (search?: Search) => withSearch('/shop/hours', search),
+  upkeep: (search?: Search) => withSearch('/shop/upkeep', search),
   settings: () => '/shop/settings',
   sheets: () => '/shop/sheets',
   /** `copyOf`: the sheet it begins like. */

@@ -1,25 +1,24 @@
 import { useQuery } from '@tanstack/react-query';
 import { Plus, TriangleAlert } from 'lucide-react';
 import { useState } from 'react';
-import { Link, useSearchParams } from 'react-router-dom';
+import { useSearchParams } from 'react-router-dom';
 import type { Clash } from '#contracts/clashes.ts';
-import type { ReplyOf } from '#contracts/endpoint.ts';
-import { exportClosures, importClosures, type Closure, type ClosureKind, type readHours } from '#contracts/hours.ts';
-import { paths } from '#src/app/paths.ts';
+import { exportClosures, importClosures, type ClosureKind } from '#contracts/hours.ts';
 import { formatDay } from '#src/lib/formats.ts';
 import { may, useFormats, useShop } from '#src/lib/session.ts';
-import { instantOf } from '#src/lib/wall-clock.ts';
 import { Button } from '#src/ui/button.tsx';
+import { Choice } from '#src/ui/choice.tsx';
 import { ErrorNote } from '#src/ui/error-note.tsx';
 import { Page } from '#src/ui/page.tsx';
 import { SkeletonLines } from '#src/ui/skeleton.tsx';
 import { ClosureDialog } from '../parts/closure-dialog.tsx';
-import { ClosuresTable } from '../parts/closures-table.tsx';
 import { CsvPanel } from '../parts/csv-panel.tsx';
-import { nextTimes } from '../parts/recurrence-dates.ts';
 import { hoursQuery } from '../parts/set-up-queries.ts';
 import { ToldClashes } from '../parts/told-clashes.tsx';
+import { ClosuresList } from './closures-list.tsx';
 import { ExtraHours } from './extra-hours.tsx';
+import { MonthView } from './month-view.tsx';
+import type { Hours } from './model/month.ts';
 import { WeekCard } from './week-card.tsx';
 import { WeekDialog } from './week-dialog.tsx';
 
@@ -34,7 +33,7 @@ export function Component() {
   const hours = useQuery(hoursQuery(shop.id));
   const mayClose = may.plan(shop.role);
   const [params, setParams] = useSearchParams();
-  const edit = (id: string | null) => setParams(id === null ? {} : { edit: id }, { replace: id === null });
+  const edit = (id: string | null) => setParams(withEdit(params, id), { replace: id === null });
   return (
     <Page
       title="Hours and closures"
@@ -69,19 +68,25 @@ export function Component() {
   );
 }
 
-type Hours = ReplyOf<typeof readHours>;
+/** What else the address says, such as the month that is looked at, stays. */
+function withEdit(params: URLSearchParams, id: string | null): URLSearchParams {
+  const next = new URLSearchParams(params);
+  if (id === null) next.delete('edit');
+  else next.set('edit', id);
+  return next;
+}
+
 type LoadedProps = { data: Hours; edited: string | null; edit: (id: string | null) => void; mayClose: boolean };
 
 function Loaded({ data, edited, edit, mayClose }: LoadedProps) {
   const [told, setTold] = useState<{ what: string; clashes: Clash[] } | null>(null);
   const onSaved = (what: string, clashes: Clash[]) => setTold({ what, clashes });
-  const closures = data.closures.filter(({ kind }) => kind !== 'maintenance');
   const closure = data.closures.find(({ id }) => id === edited) ?? kinds.find((kind) => kind === edited);
   return (
     <>
       {told && <ToldClashes {...told} onClose={() => setTold(null)} />}
       <Week data={data} onSaved={onSaved} />
-      <Closures closures={closures} data={data} edit={mayClose ? edit : undefined} />
+      <Closed data={data} edit={mayClose ? edit : undefined} />
       {mayClose && closure && (
         <ClosureDialog
           key={edited}
@@ -131,39 +136,28 @@ function Week({ data, onSaved }: { data: Hours; onSaved: (what: string, clashes:
   );
 }
 
-type ClosuresProps = { closures: readonly Closure[]; data: Hours; edit: ((id: string) => void) | undefined };
+const views = [
+  { value: 'list', label: 'List' },
+  { value: 'month', label: 'Month' },
+] as const;
 
-function Closures({ closures, data, edit }: ClosuresProps) {
-  const { zone, today } = useFormats();
-  const from = instantOf(today(), 0, zone);
-  const byNext = closures
-    .map((closure) => ({ closure, next: nextTimes(closure, zone, from, 1)[0]?.from.getTime() ?? null }))
-    .toSorted((a, b) => (a.next ?? 0) - (b.next ?? 0));
-  const ahead = byNext.filter(({ next }) => next !== null).map(({ closure }) => closure);
-  const over = byNext.filter(({ next }) => next === null).map(({ closure }) => closure);
+/** What is closed when, as a list or as a month that shows the hours too. The address says which. */
+function Closed({ data, edit }: { data: Hours; edit: ((id: string) => void) | undefined }) {
+  const [params, setParams] = useSearchParams();
+  const view = params.get('view') === 'month' ? 'month' : 'list';
+  const onChange = (next: 'list' | 'month') =>
+    setParams(next === 'month' ? { view: next } : {}, { preventScrollReset: true });
   return (
     <section className="flex flex-col gap-3">
-      <h2>Closed</h2>
-      {ahead.length === 0 ? (
-        <p className="text-muted">No holiday, closure or breakdown lies ahead.</p>
+      <div className="flex flex-wrap items-center justify-between gap-2">
+        <h2>{view === 'month' ? 'Open and closed' : 'Closed'}</h2>
+        <Choice label="Show as" hideLabel options={views} value={view} onChange={onChange} />
+      </div>
+      {view === 'month' ? (
+        <MonthView data={data} mayClose={edit !== undefined} />
       ) : (
-        <ClosuresTable label="Holidays and closures" closures={ahead} things={data} edit={edit} />
+        <ClosuresList data={data} edit={edit} />
       )}
-      {over.length > 0 && (
-        <details>
-          <summary className="cursor-pointer font-semibold">Over: {over.length}</summary>
-          <div className="pt-2">
-            <ClosuresTable label="Closures that are over" closures={over} things={data} edit={edit} />
-          </div>
-        </details>
-      )}
-      <p className="text-muted">
-        Maintenance that comes again stands under{' '}
-        <Link to={paths.upkeep()} className="link">
-          Upkeep
-        </Link>
-        .
-      </p>
     </section>
   );
 }

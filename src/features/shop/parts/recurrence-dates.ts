@@ -23,6 +23,31 @@ export const floatingRule = ({ startsLocal, rule }: { startsLocal: string; rule:
     dtstart: new Date(`${startsLocal}:00Z`),
   });
 
+/** One time of it as instants: what the wall clock shows at the start and so many minutes later. */
+function timesAt(floating: Date, minutes: number, zone: string): Times {
+  const day = floating.toISOString().slice(0, 10);
+  const minute = floating.getUTCHours() * 60 + floating.getUTCMinutes();
+  const at = (after: number) => new Date(instantOf(day, minute + after, zone));
+  return { from: at(0), to: at(minutes) };
+}
+
+/** All times that lie in the span or reach into it (instants in ms, the end is not part of it), in their order. */
+export function timesBetween(recurring: Recurring, zone: string, from: number, to: number): Times[] {
+  const { startsLocal, rule, minutes } = recurring;
+  const starts =
+    rule === null
+      ? [new Date(`${startsLocal}:00Z`)]
+      : floatingRule({ startsLocal, rule }, zone).between(
+          // A day more on both sides: the wall clock may be changed in between.
+          new Date(wallOf(from, zone) - (minutes + 1440) * MINUTE),
+          new Date(wallOf(to, zone) + 1440 * MINUTE),
+          true,
+        );
+  return starts
+    .map((start) => timesAt(start, minutes, zone))
+    .filter((times) => times.from.getTime() < to && times.to.getTime() > from);
+}
+
 /**
  * The next times that are not over at `now` (ms), at most `count`, as instants in the shop's zone. The hour on the wall
  * stays when the clocks change, and so does the hour at which it ends.
@@ -31,10 +56,7 @@ export function nextTimes(recurring: Recurring, zone: string, now: number, count
   const { startsLocal, rule, minutes } = recurring;
   const found: Times[] = [];
   const take = (floating: Date): boolean => {
-    const local = floating.toISOString();
-    const minute = floating.getUTCHours() * 60 + floating.getUTCMinutes();
-    const at = (after: number) => new Date(instantOf(local.slice(0, 10), minute + after, zone));
-    const times = { from: at(0), to: at(minutes) };
+    const times = timesAt(floating, minutes, zone);
     if (times.to.getTime() > now) found.push(times);
     return found.length < count;
   };

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { recurring, ruleFault, weekdays } from '#contracts/recurrence.ts';
 import { parseLooseDuration } from './loose-duration.ts';
 import { formOf, newRecurrence, readRecurrence, type RecurrenceForm } from './recurrence.ts';
-import { nextTimes } from './recurrence-dates.ts';
+import { nextTimes, timesBetween } from './recurrence-dates.ts';
 import { sayDays, sayRecurrence } from './recurrence-words.ts';
 
 const NEW_YORK = 'America/New_York';
@@ -140,6 +140,31 @@ describe('a night in which the clocks change', () => {
       '2026-03-28T21:00:00.000Z',
       '2026-03-29T04:00:00.000Z',
     ]);
+  });
+});
+
+describe('times of a span', () => {
+  const between = (recurring: ReturnType<typeof at>, from: string, to: string) =>
+    timesBetween(recurring, NEW_YORK, Date.parse(from), Date.parse(to)).map(({ from: start }) => start.toISOString());
+
+  it('keep the hour on the wall when the clocks go back on 26 October 1997', () => {
+    // "Daily until December 24, 1997" of RFC 5545, 3.8.5.3: 9:00 EDT until 25 October, 9:00 EST from the 26th on.
+    const daily = at('1997-09-02T09:00', 'FREQ=DAILY;UNTIL=19971224T000000Z');
+    expect(between(daily, '1997-10-25T04:00Z', '1997-10-27T05:00Z')).toEqual([
+      '1997-10-25T13:00:00.000Z',
+      '1997-10-26T14:00:00.000Z',
+    ]);
+    expect(between(daily, '1997-12-22T05:00Z', '1998-01-01T05:00Z')).toHaveLength(2);
+  });
+
+  it('are those that reach into it too, but not those that only touch it', () => {
+    const nights = at('1997-09-02T22:00', 'FREQ=WEEKLY;BYDAY=TU', 480);
+    // From Tuesday 22:00 EDT, 2:00 UTC, to Wednesday 6:00 EDT, 10:00 UTC.
+    expect(between(nights, '1997-09-10T09:59Z', '1997-09-17T02:00Z')).toEqual(['1997-09-10T02:00:00.000Z']);
+    expect(between(nights, '1997-09-10T10:00Z', '1997-09-17T02:01Z')).toEqual(['1997-09-17T02:00:00.000Z']);
+    const once = at('1997-09-01T00:00', null, 14 * 1440);
+    expect(between(once, '1997-09-14T00:00Z', '1997-10-01T00:00Z')).toEqual(['1997-09-01T04:00:00.000Z']);
+    expect(between(once, '1997-09-15T04:00Z', '1997-10-01T00:00Z')).toEqual([]);
   });
 });
 
