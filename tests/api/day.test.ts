@@ -287,7 +287,7 @@ test('who posted, and how the last run went', async () => {
     });
   });
   const view = await day();
-  expect(view.posted).toEqual({ number: 3, at: '2026-03-01T10:00:00.000Z', by: 'The lead' });
+  expect(view.posted).toEqual({ number: 3, at: '2026-03-01T10:00:00.000Z', by: 'The lead', changedAir: [] });
   expect(view.run).toMatchObject({ state: 'done', progress: { cost: 12.5 }, finishedAt: '2026-03-02T07:01:00.000Z' });
 });
 

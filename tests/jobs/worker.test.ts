@@ -4,7 +4,7 @@ import { afterAll, afterEach, beforeAll, describe, expect, test } from 'vitest';
 import { inShop } from '#server/db/in-shop.ts';
 import { queueLetter } from '#server/db/letters.ts';
 import { enqueue } from '#server/db/tasks.ts';
-import { askForPruning } from '../../jobs/schedule.ts';
+import { askForNightlyTasks } from '../../jobs/schedule.ts';
 import { GiveUp, type TaskDefinition } from '../../jobs/task-function.ts';
 import { growingDelay } from '../../jobs/worker.ts';
 import { signedIn, testApp, type TestApp } from '../helpers/app.ts';
@@ -229,8 +229,9 @@ describe('a task', () => {
 
 describe('pruning', () => {
   test('is asked for once a day, however many workers ask', async () => {
-    await Promise.all(Array.from({ length: 5 }, () => askForPruning(app.deps)));
+    await Promise.all(Array.from({ length: 5 }, () => askForNightlyTasks(app.deps)));
     expect(await app.owner('task').orderBy('kind').select('kind', 'key')).toEqual([
+      { kind: 'look-at-people', key: '2026-03-10' },
       { kind: 'prune', key: '2026-03-10' },
       { kind: 'sweep-files', key: '2026-03-10' },
     ]);
@@ -256,7 +257,7 @@ describe('pruning', () => {
       { key: 'new', points: 1, expire: ago(-1).getTime() },
     ]);
     work(app.deps, 'smtp://127.0.0.1:1');
-    await askForPruning(app.deps);
+    await askForNightlyTasks(app.deps);
     await eventually(
       () => app.owner('task').where({ kind: 'prune' }).whereNotNull('done_at'),
       (rows) => rows.length === 1,
