@@ -7,8 +7,24 @@ import { kindOfEntry, nameOfEntry, sayEntryTime, sayHours } from './month-words.
 
 type DaysProps = { days: readonly MonthDay[]; things: Hours; linkOf: (entry: MonthEntry) => string | null };
 
-/** The month by day, below each other: for a phone. */
+/** The month by day, below each other: for a phone. Days that are past are folded away where others follow. */
 export function MonthAgenda({ days, ...rest }: DaysProps) {
+  const { today } = useFormats();
+  const past = days.filter(({ day }) => day < today());
+  const ahead = days.filter(({ day }) => day >= today());
+  if (past.length === 0 || ahead.length === 0) return <Days days={days} {...rest} />;
+  return (
+    <>
+      <details>
+        <summary className="cursor-pointer py-2 font-semibold">Earlier this month</summary>
+        <Days days={past} {...rest} />
+      </details>
+      <Days days={ahead} {...rest} />
+    </>
+  );
+}
+
+function Days({ days, ...rest }: DaysProps) {
   const formats = useFormats();
   return (
     <ol className="card divide-y divide-line">

@@ -2,12 +2,13 @@ import type { EventClickArg, EventInput } from '@fullcalendar/core';
 import dayGridPlugin from '@fullcalendar/daygrid';
 import luxonPlugin from '@fullcalendar/luxon3';
 import FullCalendar from '@fullcalendar/react';
+import { Fragment, useMemo } from 'react';
 import { useNavigate } from 'react-router-dom';
 import { addDays } from '#src/lib/calendar-days.ts';
 import { formatDay } from '#src/lib/formats.ts';
 import { useFormats } from '#src/lib/session.ts';
 import type { Hours, Month, MonthDay, MonthEntry } from './model/month.ts';
-import { kindOfEntry, nameOfEntry, sayEntryTime, sayHours } from './month-words.ts';
+import { kindOfEntry, nameOfEntry, sayHours } from './month-words.ts';
 
 type MonthGridProps = {
   month: string;
@@ -22,6 +23,8 @@ type MonthGridProps = {
 export function MonthGrid({ month, label, content, things, linkOf, onMore }: MonthGridProps) {
   const formats = useFormats();
   const navigate = useNavigate();
+  // The same list as long as nothing in it has changed: another one would be laid out from the start.
+  const events = useMemo(() => content.entries.map((entry) => eventOf(entry, linkOf(entry))), [content, linkOf]);
   const byDay = new Map(content.days.map((day) => [day.day, day]));
   const byKey = new Map(content.entries.map((entry) => [entry.key, entry]));
   return (
@@ -37,7 +40,7 @@ export function MonthGrid({ month, label, content, things, linkOf, onMore }: Mon
       showNonCurrentDates={false}
       headerToolbar={false}
       height="auto"
-      events={content.entries.map((entry) => eventOf(entry, linkOf(entry)))}
+      events={events}
       eventDisplay="block"
       dayMaxEvents={3}
       dayHeaderFormat={{ weekday: 'short' }}
@@ -90,12 +93,14 @@ function DayHead({ day }: { day: MonthDay | undefined }) {
     <>
       <span className="sr-only">
         {formatDay(day.day, 'long')}
-        {day.day === formats.today() && ', today'}:{' '}
-      </span>
+        {day.day === formats.today() && ', today'}:
+      </span>{' '}
       <b aria-hidden="true">{Number(day.day.slice(8))}</b>
       <span className="figures">
         {sayHours(day, formats).map((line) => (
-          <span key={line}>{line} </span>
+          <Fragment key={line}>
+            <span>{line}</span>{' '}
+          </Fragment>
         ))}
       </span>
     </>
@@ -107,7 +112,7 @@ function Entry({ entry, things, hasTime }: { entry: MonthEntry; things: Hours; h
   return (
     <span className="closed-text">
       <b>{nameOfEntry(entry)}</b> <span>{kindOfEntry(entry, things)}</span>{' '}
-      {!entry.allDay && hasTime && <span className="figures">{sayEntryTime(entry, entry.firstDay, formats)}</span>}
+      {!entry.allDay && hasTime && <span className="figures">{formats.span(entry.from, entry.to)}</span>}
     </span>
   );
 }

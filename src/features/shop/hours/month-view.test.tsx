@@ -80,8 +80,8 @@ it('says of each day when the shop is open, less what closes all of it', async (
   const holiday = closure(3, { kind: 'holiday', label: 'Fair', startsLocal: '2026-03-16T00:00', minutes: 1440 });
   show([holiday, closure(4, {})], '2026-03');
   expect(await cell(/^Friday 13 March: 7:00 to 12:00 13:00 to 18:00/)).toBeInTheDocument();
-  expect(await cell(/^Saturday 14 March: shut/)).toHaveClass('day-shut');
-  expect(await cell(/^Monday 16 March: shut/)).toHaveClass('day-shut');
+  expect(await cell(/^Saturday 14 March: closed/)).toHaveClass('day-shut');
+  expect(await cell(/^Monday 16 March: closed/)).toHaveClass('day-shut');
   expect(await cell(/^Thursday 12 March, today: 7:00 to 18:00/)).toBeInTheDocument();
   // What the hours were then is not known here.
   expect(await cell(/^Wednesday 11 March:$/)).toBeInTheDocument();
@@ -142,7 +142,8 @@ it('is a list by day on a phone, and only looked at by a painter', async () => {
   expect(day).toHaveTextContent('7:00 to 18:00');
   expect(day).toHaveTextContent('23:30 to 23:50');
   expect(within(day).queryByRole('link')).not.toBeInTheDocument();
-  expect(calendar.getAllByText('shut').length).toBeGreaterThan(0);
+  expect(calendar.getByText('Earlier this month')).toBeInTheDocument();
+  expect(calendar.getAllByText('closed').length).toBeGreaterThan(0);
   await expectAccessible();
 });
 

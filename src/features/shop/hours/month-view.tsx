@@ -1,5 +1,5 @@
 import { ChevronLeft, ChevronRight } from 'lucide-react';
-import { lazy, Suspense, useMemo, useState } from 'react';
+import { lazy, Suspense, useCallback, useMemo, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import { paths } from '#src/app/paths.ts';
 import { formatDay } from '#src/lib/formats.ts';
@@ -26,10 +26,13 @@ export function MonthView({ data, mayClose }: { data: Hours; mayClose: boolean }
   const content = useMemo(() => monthOf(data, month, { zone, today: day }), [data, month, zone, day]);
   const [shown, setShown] = useState<string | null>(null);
   const isNarrow = useIsNarrow();
-  const linkOf = ({ closure }: MonthEntry): string | null => {
-    if (closure.kind === 'maintenance') return paths.upkeep(mayClose ? { edit: closure.id } : undefined);
-    return mayClose ? paths.hours({ view: 'month', month, edit: closure.id }) : null;
-  };
+  const linkOf = useCallback(
+    ({ closure }: MonthEntry): string | null => {
+      if (closure.kind === 'maintenance') return paths.upkeep(mayClose ? { edit: closure.id } : undefined);
+      return mayClose ? paths.hours({ view: 'month', month, edit: closure.id }) : null;
+    },
+    [mayClose, month],
+  );
   const crowded = content.days.find((one) => one.day === shown);
   return (
     <section aria-label="Calendar" className="month flex flex-col gap-3">
@@ -102,7 +105,7 @@ function Legend({ hasPast }: { hasPast: boolean }) {
         ))}
         <li className="flex items-center gap-1.5">
           <span aria-hidden="true" className="day-shut size-4 rounded-sm border border-line" />
-          Shut
+          Closed all day
         </li>
       </ul>
       {hasPast && <p>Hours are those from today on; past days had their own.</p>}

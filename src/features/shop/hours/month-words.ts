@@ -18,9 +18,9 @@ export function sayEntryTime(entry: MonthEntry, day: string, { time }: Formats):
   return isFirst ? `from ${time(entry.from)}` : `until ${time(entry.to)}`;
 }
 
-/** Hours of a day, a line a span; `shut`, and nothing for a day that is past. */
+/** Hours of a day, a line a span; `closed`, and nothing for a day that is past. */
 export function sayHours({ day, hours, isShut }: MonthDay, { time, dayOf }: Formats): string[] {
-  if (isShut) return ['shut'];
+  if (isShut) return ['closed'];
   return (hours ?? []).map(({ from, to }) =>
     dayOf(from) < day ? `until ${time(to)}` : `${time(from)} to ${time(to)}`,
   );
