@@ -56,13 +56,13 @@ type Moved = { day: string; bar: Bar; to: Target; painter: string };
 let moved: Moved;
 
 /**
- * A legal move of a posted stage that then is Tavi's or Brisa's, who are painters with an account: it shows on their
+ * A legal move of a posted stage that then is the work of a painter with an account: it shows on their
  * phone and is written to them. Looked for on one day after the other, for what the planner made depends on how fast it was.
  */
 async function findMoveForPainter(): Promise<Moved> {
   for (const day of days) {
     const view = await readDay(lead.request, 'draft', spanOf(day));
-    const painters = view.rows.filter(({ name }) => name === 'Tavi' || name === 'Brisa');
+    const painters = view.rows.filter(({ name }) => ['Tavi', 'Brisa', 'Dorvik'].includes(name));
     const nameOf = (id: string | null) => painters.find((row) => row.id === id)?.name;
     const bars = mayBeDragged(view).filter(({ added }) => !added);
     const found = await findLegalMove(lead.request, view, bars, (id) => nameOf(id) !== undefined);
