@@ -31,7 +31,10 @@ describe('signing in', () => {
     open('/sign-in?to=%2Fjobs%3Fq%3Ddoor');
     await fill();
     expect(await screen.findByText('Jobs page')).toBeInTheDocument();
-    expect(sent.at(-1)?.body).toEqual({ email: 'imke@saltmarsh.example', password: 'long enough it is' });
+    expect(sent.find(({ method }) => method === 'POST')?.body).toEqual({
+      email: 'imke@saltmarsh.example',
+      password: 'long enough it is',
+    });
   });
   it('leads to no other site', async () => {
     fakeApi({ 'POST /api/session': { body: meAs('office') } });
@@ -48,7 +51,7 @@ describe('signing in', () => {
     expect(email).toHaveAccessibleDescription(/Enter an e-mail address/);
     expect(email).toHaveFocus();
     expect(screen.getByLabelText('Password')).toHaveAccessibleDescription('Enter your password.');
-    expect(sent).toEqual([]);
+    expect(sent.filter(({ method }) => method === 'POST')).toEqual([]);
   });
   it('keeps what was typed when it is not right', async () => {
     fakeApi({ 'POST /api/session': apiError(401, 'wrong-credentials') });

@@ -80,7 +80,7 @@ it('takes all lines once the try was clean, with one key however often it is sen
   expect(new Set(taken.map(({ headers }) => headers.get('idempotency-key'))).size).toBe(1);
 });
 
-it('is only an export for who may not write', () => {
+it('is only an export for who may not write', async () => {
   renderPage(<CsvPanel what="lamps" exportFrom={exportFrom} columns="name." />, { me: meAs('lead') });
-  expect(screen.getAllByRole('button').map((button) => button.textContent)).toEqual(['Export']);
+  expect((await screen.findAllByRole('button')).map((button) => button.textContent)).toEqual(['Export']);
 });
