@@ -10,10 +10,10 @@ export function Component() {
   const strip = useRef<HTMLElement>(null);
   const { pathname } = useLocation();
   // On a phone the page one is on may lie beyond the edge of the strip.
-  useEffect(
-    () => strip.current?.querySelector('[aria-current]')?.scrollIntoView({ inline: 'center', block: 'nearest' }),
-    [pathname],
-  );
+  useEffect(() => {
+    // Braces: a browser may answer with a promise, which is no clean-up.
+    strip.current?.querySelector('[aria-current]')?.scrollIntoView({ inline: 'center', block: 'nearest' });
+  }, [pathname]);
   const seen = groups
     .map((group) => ({ ...group, sections: group.sections.filter((section) => section.seen(role)) }))
     .filter((group) => group.sections.length > 0);
