@@ -27,8 +27,6 @@ export function instantAt(axis: Axis, fraction: number, step: number): number {
   return instantOf(axis.days[day] ?? '1970-01-01', minute, axis.zone);
 }
 
-export const shownMinutes = (axis: Axis): number => axis.days.length * (axis.toMinute - axis.fromMinute);
-
 type Stretch = { from: number; to: number };
 
 /**

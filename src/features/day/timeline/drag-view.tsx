@@ -6,8 +6,7 @@ import { BarBody } from './bar-body.tsx';
 import { useBoardContext, useBoardData } from './board-context.ts';
 import { useBoard } from './board-store.ts';
 import type { Layout } from './layout.ts';
-
-const percent = (fraction: number) => `${fraction * 100}%`;
+import { percent } from './percent.ts';
 
 /** While a bar is dragged: its window lit across the rows, and the bar where it would land with what is in the way there. */
 export function DragView({ layout }: { layout: Layout }) {

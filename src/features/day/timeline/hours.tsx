@@ -2,6 +2,7 @@ import { memo } from 'react';
 import { instantOf } from '#src/lib/wall-clock.ts';
 import type { Axis } from '../model/axis.ts';
 import { useBoardContext } from './board-context.ts';
+import { percent } from './percent.ts';
 
 /** A line of the grid: where it stands, 0 to 1, and the clock time it stands for. */
 type Tick = { at: number; day: string; minute: number };
@@ -14,8 +15,6 @@ function ticksOf(axis: Axis, every: number): Tick[] {
     }),
   );
 }
-
-const percent = (fraction: number) => `${fraction * 100}%`;
 
 type Props = { axis: Axis; slotMinutes: number };
 

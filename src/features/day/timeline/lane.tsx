@@ -6,9 +6,8 @@ import { useBoardData } from './board-context.ts';
 import { CircuitStrip } from './circuit-strip.tsx';
 import type { Hung } from './layout.ts';
 import { mayMove } from './may-move.ts';
+import { percent } from './percent.ts';
 import type { TimelineRow } from './rows.ts';
-
-const percent = (fraction: number) => `${fraction * 100}%`;
 
 /** Time in which something is not used, behind the bars. Left out where it lies in hidden hours altogether. */
 export function Closed({ times, axis }: { times: readonly ClosedTime[]; axis: Axis }) {
